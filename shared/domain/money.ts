@@ -1,0 +1,16 @@
+/** Price in pence of `grams` at a rate in tenths of a penny per kg; half away from zero, rounded here and nowhere else. */
+export function priceForWeight(grams: number, tenthPencePerKg: number): number {
+  const product = BigInt(grams) * BigInt(tenthPencePerKg);
+  const half = product < 0n ? -5_000n : 5_000n;
+  return Number((product + half) / 10_000n);
+}
+
+/** Refund for a box below its guarantee: missing grams x price / guarantee, rounded up in the buyer's favour. */
+export function refundForMissingGrams(box: { missingGrams: number; pricePence: number; guaranteedGrams: number }): number {
+  return Math.ceil((box.missingGrams * box.pricePence) / box.guaranteedGrams);
+}
+
+/** Unit price of a box in tenths of a penny per kg of its guaranteed weight. */
+export function ratePerKg(pricePence: number, grams: number): number {
+  return Math.round((pricePence * 10_000) / grams);
+}
