@@ -25,7 +25,7 @@ type FieldProps = FieldWords & {
   ref?: Ref<TextInput>;
 };
 
-export function Field(props: FieldProps) {
+export function Field({ ref, ...props }: FieldProps) {
   const { label, hint, error, optional, before, after, multiline = false, width = 'full' } = props;
   const id = useId();
   const words = { label, hint, error, optional };
@@ -34,7 +34,7 @@ export function Field(props: FieldProps) {
       <div className={`w-control w-control-${width}${error ? ' w-control-wrong' : ''}`}>
         {before ? <span className="w-affix">{before}</span> : null}
         <TextInput
-          ref={props.ref}
+          ref={ref}
           id={id}
           value={props.value}
           onChangeText={props.onChangeText}
