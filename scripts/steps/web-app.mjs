@@ -1,0 +1,86 @@
+import { createHash } from 'node:crypto';
+import { existsSync, readFileSync, readdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
+import path from 'node:path';
+import { promisify } from 'node:util';
+import { brotliCompress, constants, gzip } from 'node:zlib';
+import { withLock } from './lock.mjs';
+import { run } from './processes.mjs';
+import { step } from './say.mjs';
+import { dataDir, root } from './settings.mjs';
+
+const sources = ['app', 'components', 'hooks', 'shared', 'fonts', 'assets'];
+const settings = ['app.json', 'package.json', 'package-lock.json', 'metro.config.js', 'tsconfig.json'];
+const dist = path.join(root, 'dist');
+const stamp = path.join(dist, 'sources.sha256');
+
+function filesUnder(folder) {
+  if (!existsSync(folder)) return [];
+  return readdirSync(folder, { recursive: true, withFileTypes: true })
+    .filter((entry) => entry.isFile())
+    .map((entry) => path.join(entry.parentPath, entry.name))
+    .sort();
+}
+
+function hashOfSources() {
+  const hash = createHash('sha256');
+  const files = [
+    ...sources.flatMap((name) => filesUnder(path.join(root, name))),
+    ...settings.map((name) => path.join(root, name)),
+  ];
+  for (const file of files) hash.update(path.relative(root, file)).update('\0').update(readFileSync(file)).update('\0');
+  return hash.digest('hex');
+}
+
+const isBuilt = (hash) => existsSync(stamp) && readFileSync(stamp, 'utf8') === hash;
+
+/** Writes .br and .gz beside each script and style sheet, so that the server never compresses a static file twice. */
+async function precompress(folder) {
+  const brotli = promisify(brotliCompress);
+  const squeeze = promisify(gzip);
+  const files = filesUnder(folder).filter((file) => /\.(js|css)$/.test(file));
+  await Promise.all(
+    files.map(async (file) => {
+      const plain = readFileSync(file);
+      if (plain.length < 1024) return;
+      const quality = {
+        params: { [constants.BROTLI_PARAM_QUALITY]: 11, [constants.BROTLI_PARAM_SIZE_HINT]: plain.length },
+      };
+      writeFileSync(`${file}.br`, await brotli(plain, quality));
+      writeFileSync(`${file}.gz`, await squeeze(plain, { level: 9 }));
+    }),
+  );
+}
+
+async function build(hash) {
+  const fresh = path.join(root, `dist-${process.pid}`);
+  const expo = path.join(root, 'node_modules/expo/bin/cli');
+  const env = {
+    ...process.env,
+    NODE_ENV: 'production',
+    EXPO_PUBLIC_FOLDER: 'assets/public',
+    EXPO_OFFLINE: '1',
+    EXPO_NO_TELEMETRY: '1',
+    CI: '1',
+  };
+  try {
+    await run(process.execPath, [expo, 'export', '-p', 'web', '--output-dir', path.basename(fresh)], {
+      log: 'web-app',
+      env,
+    });
+    await precompress(path.join(fresh, 'client'));
+    writeFileSync(path.join(fresh, path.basename(stamp)), hash);
+    rmSync(dist, { recursive: true, force: true });
+    renameSync(fresh, dist);
+  } finally {
+    rmSync(fresh, { recursive: true, force: true });
+  }
+}
+
+/** Exports the web app to dist/, unless what stands there was made from the same sources. */
+export async function ensureWebApp() {
+  if (isBuilt(hashOfSources())) return;
+  await withLock(path.join(dataDir, 'web-app.lock'), async () => {
+    const hash = hashOfSources();
+    if (!isBuilt(hash)) await step('Building the web app (a minute or two the first time)', () => build(hash));
+  });
+}
