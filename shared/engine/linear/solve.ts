@@ -1,0 +1,35 @@
+/** How a solve may end. `limit`: the best answer so far, or none. */
+export type SolveStatus = 'optimal' | 'infeasible' | 'limit';
+
+export type Solution = {
+  status: SolveStatus;
+  /** False when no feasible answer was found before the limit. */
+  hasAnswer: boolean;
+  objective: number;
+  /** Relative distance between the answer and the best that could exist; 0 for a plain linear program. */
+  gap: number;
+  columns: Record<string, number>;
+  nodes: number;
+  milliseconds: number;
+};
+
+export type SolveProgress = { milliseconds: number; nodes: number; best: number | null; bound: number };
+
+export type SolveOptions = {
+  /** Relative gap at which an answer counts as proven; 0.0001 by default. */
+  gap?: number;
+  timeLimitSeconds?: number;
+  nodeLimit?: number;
+  onProgress?: (progress: SolveProgress) => void;
+  signal?: AbortSignal;
+};
+
+/** New limits of rows by name: `row <= upper`, `row >= lower`. */
+export type RowChange = { row: string; lower: number; upper: number };
+
+export type Solver = {
+  /** Solves a model in CPLEX LP text. */
+  solve: (lpText: string, options?: SolveOptions) => Promise<Solution>;
+  /** Solves one linear model again and again with changed rows, warm from the last answer. */
+  solveVariations: (lpText: string, variations: readonly RowChange[][], options?: SolveOptions) => Promise<Solution[]>;
+};
