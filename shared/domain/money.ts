@@ -6,7 +6,11 @@ export function priceForWeight(grams: number, tenthPencePerKg: number): number {
 }
 
 /** Refund for a box below its guarantee: missing grams x price / guarantee, rounded up in the buyer's favour. */
-export function refundForMissingGrams(box: { missingGrams: number; pricePence: number; guaranteedGrams: number }): number {
+export function refundForMissingGrams(box: {
+  missingGrams: number;
+  pricePence: number;
+  guaranteedGrams: number;
+}): number {
   return Math.ceil((box.missingGrams * box.pricePence) / box.guaranteedGrams);
 }
 

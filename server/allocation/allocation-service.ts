@@ -1,0 +1,5 @@
+import type { Deps } from '../deps.ts';
+
+export function replanDay(_deps: Deps, _dayId: string): Promise<void> {
+  return Promise.resolve();
+}

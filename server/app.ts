@@ -1,0 +1,70 @@
+import { toNodeHandler } from 'better-auth/node';
+import compression from 'compression';
+import express, { type Express, Router } from 'express';
+import helmet from 'helmet';
+import { AppError } from '#shared/errors.ts';
+import { addAllocationRoutes } from './allocation/allocation-routes.ts';
+import { addCarcaseRoutes } from './carcases/carcase-routes.ts';
+import { addCollectionRoutes } from './collections/collection-routes.ts';
+import type { Deps } from './deps.ts';
+import { addHerdRoutes } from './herd/herd-routes.ts';
+import { addHealthRoutes } from './http/health-routes.ts';
+import { clientAddress, requestId, sameOrigin, sanePath } from './http/guards.ts';
+import { pages } from './http/pages.ts';
+import { answerErrors } from './http/problem.ts';
+import type { Api } from './http/route.ts';
+import { inboundMail } from './mail/inbound.ts';
+import { addOfficeRoutes } from './office/office-routes.ts';
+import { addOrderRoutes } from './orders/order-routes.ts';
+import { addPackRoutes } from './packs/pack-routes.ts';
+import { paymentWebhook } from './payments/webhook.ts';
+import { addShopRoutes } from './shop/shop-routes.ts';
+import { addTradeRoutes } from './trade/trade-routes.ts';
+
+export type App = { express: Express; api: Api };
+
+/** `webRoot` is the folder that holds `dist` and `fonts`; without it only the API is served, as the tests of the API want. */
+export function createApp(deps: Deps, webRoot: string | null): App {
+  const app = express();
+  app.disable('x-powered-by');
+  app.set('trust proxy', 'loopback');
+  app.use(requestId, sanePath);
+  app.use(helmet({ contentSecurityPolicy: false, strictTransportSecurity: deps.origin.startsWith('https:') }));
+  app.use(compression());
+
+  app.post('/api/payments/webhook', express.raw({ type: '*/*', limit: '512kb' }), paymentWebhook(deps));
+  app.post('/api/mail/inbound', express.raw({ type: '*/*', limit: '1mb' }), inboundMail(deps));
+  app.all('/api/auth/{*any}', clientAddress, limitAuthBody, toNodeHandler(deps.auth));
+
+  const api: Api = { router: Router(), endpoints: [], auth: deps.auth };
+  for (const add of [
+    addHealthRoutes,
+    addShopRoutes,
+    addOrderRoutes,
+    addHerdRoutes,
+    addCarcaseRoutes,
+    addAllocationRoutes,
+    addTradeRoutes,
+    addPackRoutes,
+    addCollectionRoutes,
+    addOfficeRoutes,
+  ]) {
+    add(api, deps);
+  }
+  app.use(sameOrigin, express.json({ limit: '256kb' }), api.router);
+  app.use('/api', () => {
+    throw new AppError('NOT_FOUND', 'There is no such address in the API.');
+  });
+  if (webRoot) app.use(pages(webRoot));
+  app.use(answerErrors);
+  return { express: app, api };
+}
+
+/** better-auth reads bodies without a bound of its own. */
+const limitAuthBody: express.RequestHandler = (request, _response, next) => {
+  const length = Number(request.headers['content-length'] ?? 0);
+  if (length > 16_384 || (request.headers['transfer-encoding'] && request.method !== 'GET')) {
+    throw new AppError('TOO_LARGE', 'This is more than can be sent at once. Nothing was saved.');
+  }
+  next();
+};

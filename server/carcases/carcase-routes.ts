@@ -1,0 +1,4 @@
+import type { Deps } from '../deps.ts';
+import type { Api } from '../http/route.ts';
+
+export function addCarcaseRoutes(_api: Api, _deps: Deps): void {}

@@ -1,0 +1,83 @@
+import { createHash } from 'node:crypto';
+import fs from 'node:fs';
+import path from 'node:path';
+import { createRequestHandler } from 'expo-server/adapter/express';
+import express, { type RequestHandler, Router } from 'express';
+
+const YEAR_MS = 365 * 24 * 3_600_000;
+
+/** The exported web app: hashed files for a year, fonts, public files, and pages rendered for each request. */
+export function pages(root: string): Router {
+  const client = path.join(root, 'dist', 'client');
+  const router = Router();
+  router.use(precompressed(client));
+  router.use('/_expo/static', express.static(path.join(client, '_expo/static'), { immutable: true, maxAge: YEAR_MS }));
+  router.use('/assets', express.static(path.join(client, 'assets'), { immutable: true, maxAge: YEAR_MS }));
+  router.use('/fonts', express.static(path.join(root, 'fonts'), { immutable: true, maxAge: YEAR_MS }));
+  router.use(express.static(client, { index: false, maxAge: 3_600_000 }));
+  router.use(hashInlineScripts);
+  router.use(createRequestHandler({ build: path.join(root, 'dist', 'server') }));
+  return router;
+}
+
+/** Serves the .br or .gz that the build wrote beside a file, so that nothing is compressed twice. */
+function precompressed(client: string): RequestHandler {
+  const encodings = [
+    ['br', '.br'],
+    ['gzip', '.gz'],
+  ] as const;
+  return (request, response, next) => {
+    if (request.method !== 'GET' || !/^\/_expo\/static\/.*\.(js|css)$/.test(request.path)) return next();
+    const accepted = request.headers['accept-encoding'] ?? '';
+    const found = encodings.find(
+      ([name, ending]) =>
+        accepted.includes(name) && fs.existsSync(path.join(client, path.normalize(request.path)) + ending),
+    );
+    if (!found) return next();
+    response.setHeader('Content-Encoding', found[0]);
+    response.setHeader('Vary', 'Accept-Encoding');
+    response.type(path.extname(request.path));
+    request.url += found[1];
+    next();
+  };
+}
+
+/** Content-Security-Policy by hash: the router's inline scripts carry the page's data and change with it. */
+const hashInlineScripts: RequestHandler = (_request, response, next) => {
+  const chunks: Buffer[] = [];
+  const keep = (chunk: unknown): void => {
+    if (typeof chunk === 'string' || chunk instanceof Uint8Array) chunks.push(Buffer.from(chunk));
+  };
+  const end = response.end.bind(response);
+  response.write = (chunk: unknown) => {
+    keep(chunk);
+    return true;
+  };
+  response.end = ((chunk?: unknown) => {
+    keep(chunk);
+    const body = Buffer.concat(chunks);
+    if (!response.headersSent && String(response.getHeader('content-type')).includes('text/html')) {
+      response.setHeader('Content-Security-Policy', contentSecurityPolicy(body.toString('utf8')));
+      response.setHeader('Cache-Control', 'no-store');
+      response.setHeader('Content-Length', body.length);
+    }
+    return end(body);
+  }) as typeof response.end;
+  next();
+};
+
+function contentSecurityPolicy(html: string): string {
+  const inline = [...html.matchAll(/<script(?![^>]*\ssrc=)[^>]*>([\s\S]*?)<\/script>/g)].map((match) => match[1] ?? '');
+  const hashes = inline.map((script) => `'sha256-${createHash('sha256').update(script).digest('base64')}'`);
+  return [
+    "default-src 'self'",
+    `script-src 'self' ${hashes.join(' ')}`,
+    // React Native Web writes its rules into style elements.
+    "style-src 'self' 'unsafe-inline'",
+    "img-src 'self' data: blob:",
+    "object-src 'none'",
+    "base-uri 'none'",
+    "frame-ancestors 'none'",
+    "form-action 'self'",
+  ].join('; ');
+}

@@ -1,0 +1,33 @@
+import { Logger, run, type Runner, type TaskList } from 'graphile-worker';
+import { replanDay } from './allocation/allocation-service.ts';
+import type { Deps } from './deps.ts';
+import { log } from './http/log.ts';
+import { sendMail } from './mail/outbox.ts';
+import { settleRefund, sweepHolds } from './payments/payment-service.ts';
+import type { Jobs } from './queue.ts';
+
+/** What the worker does for each kind of job; the tests run the same list. */
+export function taskList(deps: Deps): TaskList {
+  return {
+    'send-mail': (payload) => sendMail(deps, (payload as Jobs['send-mail']).mailId),
+    'settle-refund': (payload) => settleRefund(deps, (payload as Jobs['settle-refund']).paymentId),
+    'replan-day': (payload) => replanDay(deps, (payload as Jobs['replan-day']).dayId),
+    'sweep-holds': () => sweepHolds(deps),
+  };
+}
+
+const logger = new Logger(() => (level, message) => {
+  if (level === 'error') log.error({ message }, 'worker');
+});
+
+/** Starts the worker. Each minute the sweep asks the payment company about every hold whose page has run out. */
+export function startWorker(deps: Deps, databaseUrl: string): Promise<Runner> {
+  return run({
+    connectionString: databaseUrl,
+    concurrency: 4,
+    noHandleSignals: true,
+    logger,
+    crontab: '* * * * * sweep-holds ?fill=2m',
+    taskList: taskList(deps),
+  });
+}

@@ -1,0 +1,96 @@
+import { z } from 'zod';
+import { ROLES } from '#shared/domain/roles.ts';
+import { Day, Grams, Id, Line, Pence, Rate, Version } from './fields-schema.ts';
+
+export const getMeSchema = {
+  answer: z.strictObject({
+    user: z.strictObject({ id: Id, name: z.string(), email: z.string(), role: z.enum(ROLES) }).nullable(),
+  }),
+};
+
+/** One thing that needs doing, and where to do it. */
+export const TodayItem = z.strictObject({
+  kind: z.enum([
+    'kill sheet',
+    'allocate',
+    'publish',
+    'out of date',
+    'reservation',
+    'trade account',
+    'fill',
+    'collection mails',
+    'mail failed',
+    'refund failed',
+    'shortfall',
+  ]),
+  title: z.string(),
+  detail: z.string(),
+  href: z.string(),
+});
+export type TodayItem = z.infer<typeof TodayItem>;
+export const getTodaySchema = {
+  answer: z.strictObject({
+    today: Day,
+    items: z.array(TodayItem),
+    days: z.array(
+      z.strictObject({ id: Id, day: Day, state: z.string(), carcases: z.int(), orders: z.int(), soldPence: z.int() }),
+    ),
+  }),
+};
+
+export const BoxKindLine = z.strictObject({
+  name: Line,
+  minGrams: z.int().min(0).max(100_000),
+  maxGrams: Grams,
+  minPacks: z.int().min(0).max(40),
+  maxPacks: z.int().min(1).max(40).nullable(),
+  cutIds: z.array(z.string().max(60)).min(1, 'Choose at least one cut.').max(40),
+});
+export const BoxKindEdit = z.strictObject({
+  version: Version,
+  name: Line,
+  summary: Line,
+  guaranteedGrams: Grams,
+  pricePence: Pence.min(1, 'The price must be above zero.'),
+  packagingPence: Pence,
+  demandBoxes: z.int().min(0).max(2000),
+  isActive: z.boolean(),
+  lines: z.array(BoxKindLine).min(1, 'A box needs at least one line.').max(20),
+});
+export type BoxKindEdit = z.infer<typeof BoxKindEdit>;
+export const BoxKind = z.strictObject({ ...BoxKindEdit.shape, id: Id, slug: z.string() });
+export type BoxKind = z.infer<typeof BoxKind>;
+
+export const Cut = z.strictObject({
+  id: z.string(),
+  name: z.string(),
+  cooking: z.string(),
+  tenthPencePerKg: Rate,
+  clearanceTenthPencePerKg: z.int(),
+  minPackGrams: z.int(),
+  maxPackGrams: z.int(),
+  looseDemandPacks: z.int(),
+  isSoldLoose: z.boolean(),
+  version: Version,
+});
+export type Cut = z.infer<typeof Cut>;
+
+export const listBoxKindsSchema = { answer: z.strictObject({ boxKinds: z.array(BoxKind), cuts: z.array(Cut) }) };
+/** Refused with RECIPE_INFEASIBLE when no packs could ever meet the recipe. */
+export const editBoxKindSchema = { params: z.strictObject({ boxKindId: Id }), body: BoxKindEdit, answer: BoxKind };
+
+export const Settings = z.strictObject({
+  /** A butcher's reservation may be worked in without the owner looking first. */
+  isReallocationAutomatic: z.boolean(),
+  vertebralColumnMonths: z.int().min(1).max(120),
+  isVertebralColumnRuleActive: z.boolean(),
+  deadweightTenthPencePerKg: Rate,
+  killPence: Pence,
+  butcheryTenthPencePerKg: Rate,
+});
+export type Settings = z.infer<typeof Settings>;
+export const getSettingsSchema = { answer: Settings };
+/** In force from today on; earlier days keep what they had. */
+export const editSettingsSchema = { body: Settings, answer: Settings };
+
+export const getHealthSchema = { answer: z.strictObject({ ok: z.literal(true) }) };

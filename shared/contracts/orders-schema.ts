@@ -1,0 +1,126 @@
+import { z } from 'zod';
+import { ORDER_STATES, PAYMENT_STATES } from '#shared/domain/order-state.ts';
+import { Count, Day, Email, Id, Instant, Line, Note, Phone } from './fields-schema.ts';
+
+export const BasketLine = z.strictObject({ offerId: Id, quantity: Count });
+export type BasketLine = z.infer<typeof BasketLine>;
+
+const BasketLines = z.array(BasketLine).min(1, 'The basket is empty.').max(40, 'At most forty lines in one order.');
+
+export const PricedLine = z.strictObject({
+  offerId: Id,
+  kind: z.enum(['box', 'loose']),
+  name: z.string(),
+  quantity: z.int(),
+  /** How many could be bought now. */
+  free: z.int(),
+  unitPricePence: z.int(),
+  linePence: z.int(),
+  /** Guaranteed weight of a box, upper weight of a loose pack. */
+  unitGrams: z.int(),
+});
+export type PricedLine = z.infer<typeof PricedLine>;
+
+export const priceBasketSchema = {
+  body: z.strictObject({ dayId: Id, lines: BasketLines }),
+  answer: z.strictObject({
+    dayId: Id,
+    day: Day,
+    cutOffAt: Instant,
+    isInTime: z.boolean(),
+    lines: z.array(PricedLine),
+    totalPence: z.int(),
+  }),
+};
+
+export const Checkout = z.strictObject({
+  /** Made by the browser once per basket, so that a second press finds the first order. */
+  basketKey: Id,
+  dayId: Id,
+  lines: BasketLines,
+  slotId: Id,
+  name: Line,
+  email: Email,
+  phone: Phone,
+  note: Note,
+});
+export type Checkout = z.infer<typeof Checkout>;
+
+export const placeOrderSchema = {
+  body: Checkout,
+  answer: z.strictObject({
+    orderNo: z.int(),
+    token: z.string(),
+    state: z.enum(ORDER_STATES),
+    paymentUrl: z.string().nullable(),
+  }),
+};
+
+export const Order = z.strictObject({
+  orderNo: z.int(),
+  token: z.string(),
+  state: z.enum(ORDER_STATES),
+  paymentState: z.enum(PAYMENT_STATES),
+  /** Where to go on paying while the payment page is still open. */
+  paymentUrl: z.string().nullable(),
+  paymentExpiresAt: Instant.nullable(),
+  name: z.string(),
+  email: z.string(),
+  note: z.string(),
+  day: Day,
+  cutOffAt: Instant,
+  canCancel: z.boolean(),
+  lines: z.array(
+    z.strictObject({
+      name: z.string(),
+      kind: z.enum(['box', 'loose']),
+      quantity: z.int(),
+      unitPricePence: z.int(),
+      linePence: z.int(),
+      unitGrams: z.int(),
+    }),
+  ),
+  totalPence: z.int(),
+  refundedPence: z.int(),
+  collection: z.strictObject({
+    name: z.string(),
+    addressLines: z.array(z.string()),
+    directions: z.string(),
+    bring: z.string(),
+    startsAt: Instant,
+    endsAt: Instant,
+  }),
+  packs: z.array(z.strictObject({ code: z.string(), cut: z.string(), grams: z.int(), box: z.string() })),
+});
+export type Order = z.infer<typeof Order>;
+
+const Token = z.strictObject({ token: z.string().regex(/^[A-Za-z0-9_-]{20,64}$/) });
+export const getOrderSchema = { params: Token, answer: Order };
+export const leavePaymentSchema = { params: Token, answer: Order };
+export const cancelOrderSchema = { params: Token, answer: Order };
+
+export const OrderSummary = z.strictObject({
+  id: Id,
+  orderNo: z.int(),
+  token: z.string(),
+  name: z.string(),
+  day: Day,
+  state: z.enum(ORDER_STATES),
+  paymentState: z.enum(PAYMENT_STATES),
+  totalPence: z.int(),
+  lines: z.array(z.string()),
+  startsAt: Instant,
+  pointName: z.string(),
+});
+export type OrderSummary = z.infer<typeof OrderSummary>;
+
+export const listMyOrdersSchema = { answer: z.strictObject({ orders: z.array(OrderSummary) }) };
+export const listOrdersSchema = {
+  query: z.strictObject({ dayId: Id.optional(), state: z.enum(ORDER_STATES).optional() }),
+  answer: z.strictObject({ orders: z.array(OrderSummary) }),
+};
+export const cancelOrderByOwnerSchema = {
+  params: z.strictObject({ orderId: Id }),
+  body: z.strictObject({ reason: Line }),
+  answer: OrderSummary,
+};
