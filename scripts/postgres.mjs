@@ -79,7 +79,6 @@ function canReach(folder, { uid, gid }) {
 
 /** Makes the cluster's folder, closed to everyone but the server's user. The parents keep their usual mode, so that this user gets through. */
 function prepareHome(wanted) {
-  mkdirSync(path.dirname(wanted), { recursive: true });
   const preferred = serverUser(wanted);
   let home = wanted;
   if (preferred && !canReach(wanted, preferred)) {
@@ -219,11 +218,11 @@ export async function removeCluster(home) {
  */
 export async function startPostgres({ home: wanted, port, variable = 'PG_PORT', durable = true, settings = {} }) {
   await ensurePostgres();
-  const place = prepareHome(wanted);
-  const cluster = { ...place, bin: binariesFor(place.home), durable };
-  const ownerFile = path.join(cluster.home, 'owner.json');
-  const { file, password } = readPassword(cluster);
-  return withLock(path.join(cluster.home, 'lock'), async () => {
+  return withLock(`${wanted}.lock`, async () => {
+    const place = prepareHome(wanted);
+    const cluster = { ...place, bin: binariesFor(place.home), durable };
+    const ownerFile = path.join(cluster.home, 'owner.json');
+    const { file, password } = readPassword(cluster);
     await ensureCluster(cluster, file);
     const found = findServer(path.join(cluster.home, 'data'));
     const owner = existsSync(ownerFile) ? JSON.parse(readFileSync(ownerFile, 'utf8')) : undefined;
