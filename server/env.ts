@@ -29,3 +29,6 @@ export function readEnv(): Env {
 export function tellPagesTheApi(port: number): void {
   process.env.API_ORIGIN = `http://127.0.0.1:${port}`;
 }
+
+/** Quiet under test, where every refusal is asserted by its answer. */
+export const logLevel = process.env.VITEST ? 'silent' : (process.env.LOG_LEVEL ?? 'info');

@@ -17,7 +17,7 @@ export function taskList(deps: Deps): TaskList {
 }
 
 const logger = new Logger(() => (level, message) => {
-  if (level === 'error') log.error({ message }, 'worker');
+  if (String(level) === 'error') log.error({ message }, 'worker');
 });
 
 /** Starts the worker. Each minute the sweep asks the payment company about every hold whose page has run out. */

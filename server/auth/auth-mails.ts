@@ -1,8 +1,8 @@
 import { randomUUID } from 'node:crypto';
 import type { Db } from '#db/client.ts';
-import { letterHtml, letterText, type LetterPart } from '../mail/letter-html.ts';
-import { queueMail } from '../mail/outbox.ts';
-import { getFarm } from '../farm/farm-queries.ts';
+import { letterHtml, letterText, type LetterPart } from '#server/mail/letter-html.ts';
+import { queueMail } from '#server/mail/outbox.ts';
+import { getFarm } from '#server/farm/farm-queries.ts';
 import type { AuthMail } from './auth.ts';
 
 export async function sendVerificationMail(db: Db, mail: AuthMail): Promise<void> {

@@ -1,7 +1,7 @@
 import { and, desc, eq, lte } from 'drizzle-orm';
 import { datedSetting, farm } from '#db/schema/farm.ts';
 import type { Day } from '#shared/domain/day.ts';
-import type { Db, Tx } from '../deps.ts';
+import type { Db, Tx } from '#server/deps.ts';
 
 export type Farm = typeof farm.$inferSelect;
 

@@ -1,8 +1,9 @@
 import pino from 'pino';
+import { logLevel } from '#server/env.ts';
 
 /** One line of JSON per event. Bodies, cookies and addresses of people are never logged. */
 export const log = pino({
-  level: process.env.NODE_ENV === 'test' ? 'silent' : (process.env.LOG_LEVEL ?? 'info'),
+  level: logLevel,
   base: null,
   redact: ['req.headers.cookie', 'req.headers.authorization', 'res.headers["set-cookie"]'],
 });

@@ -60,6 +60,8 @@ function asAppError(error: unknown, request: Request): AppError {
   return new AppError('INTERNAL', 'This did not work, through a fault of ours. Nothing was saved; please try again.');
 }
 
+// Express knows an error handler by its four parameters.
+// eslint-disable-next-line max-params -- see above
 export const answerErrors: ErrorRequestHandler = (error, request, response, next) => {
   if (response.headersSent) {
     next(error);

@@ -1,8 +1,8 @@
-import { Router, type Request, type Response } from 'express';
+import type { Request, Response, Router } from 'express';
 import type { Answer, Endpoint, EndpointSchema, Input } from '#shared/contracts/endpoint.ts';
 import { mayCall, type Role } from '#shared/domain/roles.ts';
 import { AppError } from '#shared/errors.ts';
-import type { Auth } from '../auth/auth.ts';
+import type { Auth } from '#server/auth/auth.ts';
 import { fieldsOf } from './problem.ts';
 
 export type Caller = { id: string; name: string; email: string; role: Role };

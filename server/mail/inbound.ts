@@ -1,5 +1,5 @@
 import type { RequestHandler } from 'express';
-import type { Deps } from '../deps.ts';
+import type { Deps } from '#server/deps.ts';
 
 /** POST /api/mail/inbound: delivery-status mails as the mail server hands them on. */
 export function inboundMail(_deps: Deps): RequestHandler {

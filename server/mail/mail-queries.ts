@@ -1,6 +1,6 @@
 import { desc, eq, sql } from 'drizzle-orm';
 import { mailMessage } from '#db/schema/mail.ts';
-import type { Db, Tx } from '../deps.ts';
+import type { Db, Tx } from '#server/deps.ts';
 
 export type MailRow = typeof mailMessage.$inferSelect;
 export type NewMailRow = typeof mailMessage.$inferInsert;
@@ -36,13 +36,13 @@ export async function recordAttempt(
     .where(eq(mailMessage.id, mailId));
 }
 
-export async function setMailState(
-  db: Db | Tx,
-  mailId: string,
-  state: MailRow['state'],
-  error: string | null,
-): Promise<void> {
-  await db.update(mailMessage).set({ state, lastError: error }).where(eq(mailMessage.id, mailId));
+/** Back into the queue with the same Message-ID, for a person's second try. */
+export async function requeueMail(db: Db | Tx, mailId: string): Promise<void> {
+  await db.update(mailMessage).set({ state: 'queued', attempts: 0 }).where(eq(mailMessage.id, mailId));
+}
+
+export async function markBounced(db: Db | Tx, mailId: string, reason: string): Promise<void> {
+  await db.update(mailMessage).set({ state: 'bounced', lastError: reason }).where(eq(mailMessage.id, mailId));
 }
 
 export async function findMailByMessageId(db: Db | Tx, messageId: string): Promise<MailRow | null> {

@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
-import type { Db, Deps, Tx } from '../deps.ts';
-import { enqueue } from '../queue.ts';
+import type { Db, Deps, Tx } from '#server/deps.ts';
+import { enqueue } from '#server/queue.ts';
 import { findMail, insertMail, recordAttempt } from './mail-queries.ts';
 import type { Attachment } from './mailer.ts';
 

@@ -1,4 +1,4 @@
-import type { Deps } from '../deps.ts';
-import type { Api } from '../http/route.ts';
+import type { Deps } from '#server/deps.ts';
+import type { Api } from '#server/http/route.ts';
 
 export function addOfficeRoutes(_api: Api, _deps: Deps): void {}

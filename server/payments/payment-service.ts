@@ -1,4 +1,4 @@
-import type { Deps } from '../deps.ts';
+import type { Deps } from '#server/deps.ts';
 
 export function settleRefund(_deps: Deps, _paymentId: string): Promise<void> {
   return Promise.resolve();
