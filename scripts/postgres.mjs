@@ -33,9 +33,11 @@ function installedVersions() {
   return versions.sort((a, b) => Number(b) - Number(a));
 }
 
+export const isPostgresInstalled = () => installedVersions().length > 0;
+
 /** Installs Debian's PostgreSQL when no binaries are found, without the cluster that the package would start by itself. */
 export async function ensurePostgres() {
-  if (installedVersions().length > 0) return;
+  if (isPostgresInstalled()) return;
   await installPackages(['postgresql'], {
     first: 'postgresql-common',
     before: [

@@ -3,8 +3,8 @@
 import { spawn } from 'node:child_process';
 import { existsSync, mkdirSync, readFileSync, readdirSync, rmSync, statfsSync } from 'node:fs';
 import path from 'node:path';
-import { removeCluster, startPostgres } from './postgres.mjs';
-import { installPackages } from './steps/debian-packages.mjs';
+import { ensurePostgres, isPostgresInstalled, removeCluster, startPostgres } from './postgres.mjs';
+import { asRoot, installPackages } from './steps/debian-packages.mjs';
 import { ensureDependencies } from './steps/dependencies.mjs';
 import { freePort } from './steps/ports.mjs';
 import { identify, stopProcess } from './steps/processes.mjs';
@@ -26,10 +26,15 @@ function chooseProjects(words) {
   return { projects: isByFolder ? [...new Set(folders)] : allProjects, filters };
 }
 
-async function ensurePrograms(projects) {
+async function ensurePrograms(projects, needsDatabase) {
   const missing = [];
   if (projects.includes('unit') && !existsSync('/usr/bin/cbc')) missing.push('coinor-cbc');
   if (projects.includes('browser') && !existsSync('/usr/bin/chromium')) missing.push('chromium');
+  const lacksPostgres = needsDatabase && !isPostgresInstalled();
+  const all = lacksPostgres ? [...missing, 'postgresql'] : missing;
+  // Asked for all of them at once, so that one instruction names everything.
+  if (all.length > 0) asRoot(all);
+  if (lacksPostgres) await ensurePostgres();
   if (missing.length > 0) await installPackages(missing);
 }
 
@@ -98,10 +103,10 @@ function readOutcome(report, code) {
 async function runTests() {
   requireNode();
   const { projects, filters } = chooseProjects(process.argv.slice(2));
-  await ensurePrograms(projects);
+  const needsDatabase = projects.some((name) => name !== 'unit');
+  await ensurePrograms(projects, needsDatabase);
   await ensureDependencies();
   const env = { ...process.env, NODE_ENV: 'test' };
-  const needsDatabase = projects.some((name) => name !== 'unit');
   if (needsDatabase) env.TEST_DATABASE_URL = (await startTestCluster()).url('postgres');
   if (projects.includes('browser')) await ensureWebApp();
   const report = path.join(dataDir, `test-report-${process.pid}.json`);

@@ -4,7 +4,7 @@ import { run } from './processes.mjs';
 import { Refusal, step } from './say.mjs';
 
 /** The words that go before a command to run it as root; refuses when this user may not. */
-function asRoot(names) {
+export function asRoot(names) {
   if (process.getuid() === 0) return [];
   if (spawnSync('sudo', ['-n', 'true'], { stdio: 'ignore' }).status === 0) return ['sudo', '-n'];
   throw new Refusal(

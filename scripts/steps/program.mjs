@@ -28,7 +28,7 @@ export const isStopping = () => stopping !== undefined;
 export function sentenceFor(error) {
   if (error instanceof Refusal) return error.message;
   if (error?.code === 'EACCES' || error?.code === 'EPERM') {
-    return `This user may not use ${error.path ?? 'a file that is needed'} (${error.code}): change its owner, or run as the user who made it.`;
+    return `This user may not use ${error.path ?? 'a file that is needed'} (${error.code}): it belongs to another user. Run as that user, or let that user remove it.`;
   }
   if (error?.code === 'ENOSPC') return 'The disk is full.';
   return error?.stack ?? String(error);
