@@ -1,5 +1,7 @@
 import { sql } from 'drizzle-orm';
 import { boolean, check, index, integer, jsonb, pgTable, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import type { AllocationAnswer, AllocationQuestion } from '#shared/domain/allocation-record.ts';
+import type { WayLock } from '#shared/engine/allocation/allocation-input.ts';
 import { carcase, cuttingDay } from './carcases.ts';
 import { createdAt, id, instant } from './columns.ts';
 import { boxKind, cut } from './products.ts';
@@ -14,9 +16,9 @@ export const allocation = pgTable(
       .references(() => cuttingDay.id),
     figuresVersion: integer().notNull(),
     /** Names of ways chosen by the owner, by side and choice. */
-    locks: jsonb().notNull(),
-    input: jsonb().notNull(),
-    plan: jsonb().notNull(),
+    locks: jsonb().$type<WayLock[]>().notNull(),
+    input: jsonb().$type<AllocationQuestion>().notNull(),
+    plan: jsonb().$type<AllocationAnswer>().notNull(),
     contributionPence: integer().notNull(),
     isProven: boolean().notNull(),
     state: text({ enum: ['draft', 'published', 'replaced'] })
