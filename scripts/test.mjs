@@ -1,20 +1,19 @@
 // npm test: everything the tests need, then vitest, then one line with the outcome.
 // npm test -- unit runs one project (unit, api, browser); any other word goes to vitest as a filter on file names.
 import { spawn } from 'node:child_process';
-import { existsSync, mkdirSync, readFileSync, readdirSync, rmSync, statfsSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, rmSync } from 'node:fs';
 import path from 'node:path';
-import { ensurePostgres, isPostgresInstalled, removeCluster, startPostgres } from './postgres.mjs';
+import { ensurePostgres, isPostgresInstalled } from './postgres.mjs';
 import { asRoot, installPackages } from './steps/debian-packages.mjs';
 import { ensureDependencies } from './steps/dependencies.mjs';
-import { freePort } from './steps/ports.mjs';
 import { identify, stopProcess } from './steps/processes.mjs';
 import { isStopping, onStop, program, sentenceFor } from './steps/program.mjs';
 import { say, step } from './steps/say.mjs';
 import { dataDir, requireNode, root } from './steps/settings.mjs';
+import { startTestCluster } from './steps/test-cluster.mjs';
 import { ensureWebApp } from './steps/web-app.mjs';
 
 const allProjects = ['unit', 'api', 'browser'];
-const roomInMemory = 512 * 1024 * 1024;
 
 /** `npm test -- api` names a project; `npm test -- tests/unit/money` names one through its folder. */
 function chooseProjects(words) {
@@ -28,7 +27,9 @@ function chooseProjects(words) {
 
 async function ensurePrograms(projects, needsDatabase) {
   const missing = [];
+  // Two solvers of other hands, which the tests of the allocation check ours against.
   if (projects.includes('unit') && !existsSync('/usr/bin/cbc')) missing.push('coinor-cbc');
+  if (projects.includes('unit') && !existsSync('/usr/bin/glpsol')) missing.push('glpk-utils');
   if (projects.includes('browser') && !existsSync('/usr/bin/chromium')) missing.push('chromium');
   const lacksPostgres = needsDatabase && !isPostgresInstalled();
   const all = lacksPostgres ? [...missing, 'postgresql'] : missing;
@@ -36,40 +37,6 @@ async function ensurePrograms(projects, needsDatabase) {
   if (all.length > 0) asRoot(all);
   if (lacksPostgres) await ensurePostgres();
   if (missing.length > 0) await installPackages(missing);
-}
-
-function memoryFolder() {
-  if (!existsSync('/dev/shm')) return undefined;
-  const { bavail, bsize } = statfsSync('/dev/shm');
-  return bavail * bsize > roomInMemory ? '/dev/shm' : undefined;
-}
-
-/** A killed run leaves its server and its files: both go before the next run, unless they are another user's. */
-async function clearLeftovers(folder) {
-  for (const name of readdirSync(folder)) {
-    const pid = /^wholeside-test-(\d+)$/.exec(name)?.[1];
-    if (!pid || identify(Number(pid))) continue;
-    try {
-      await removeCluster(path.join(folder, name));
-    } catch (error) {
-      if (error.code !== 'EACCES' && error.code !== 'EPERM') throw error;
-    }
-  }
-}
-
-/** A server of this run's own, on a free port and in memory where there is room. */
-async function startTestCluster() {
-  const folder = memoryFolder() ?? dataDir;
-  mkdirSync(folder, { recursive: true });
-  await clearLeftovers(folder);
-  const place = { home: path.join(folder, `wholeside-test-${process.pid}`), port: await freePort() };
-  return step(`Starting a PostgreSQL server for the tests in ${folder}`, async () => {
-    let home = place.home;
-    onStop(() => rmSync(home, { recursive: true, force: true }));
-    const cluster = await startPostgres({ ...place, durable: false, settings: { max_connections: 300 } });
-    home = cluster.home;
-    return cluster;
-  });
 }
 
 async function runVitest({ projects, filters, env, report }) {
@@ -107,7 +74,10 @@ async function runTests() {
   await ensurePrograms(projects, needsDatabase);
   await ensureDependencies();
   const env = { ...process.env, NODE_ENV: 'test' };
-  if (needsDatabase) env.TEST_DATABASE_URL = (await startTestCluster()).url('postgres');
+  if (needsDatabase) {
+    const cluster = await step('Starting a PostgreSQL server for the tests', startTestCluster);
+    env.TEST_DATABASE_URL = cluster.url('postgres');
+  }
   if (projects.includes('browser')) await ensureWebApp();
   const report = path.join(dataDir, `test-report-${process.pid}.json`);
   mkdirSync(dataDir, { recursive: true });

@@ -12,7 +12,8 @@ export function onStop(stop) {
   };
 }
 
-async function stopAll() {
+/** Stops whatever was registered, last one first. */
+export async function stopAll() {
   for (let stop = stops.pop(); stop; stop = stops.pop()) {
     try {
       await stop();
