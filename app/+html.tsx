@@ -1,12 +1,15 @@
 import { useServerDocumentContext } from 'expo-router/html';
 import type { ReactNode } from 'react';
+import { railCss } from '#components/rail/rail-css.ts';
 import { controlCss } from '#components/theme/control-css.ts';
 import { fontCss, fontPreloads } from '#components/theme/font-css.ts';
+import { kitCss } from '#components/theme/kit-css.ts';
 import { layoutCss } from '#components/theme/layout-css.ts';
+import { shellCss } from '#components/theme/shell-css.ts';
 import { themeCss } from '#components/theme/theme-css.ts';
 import { schemeScript } from '#components/theme/use-theme.ts';
 
-const css = fontCss + themeCss + layoutCss + controlCss;
+const css = fontCss + themeCss + layoutCss + controlCss + kitCss + shellCss + railCss;
 
 /** The document around every page. It runs on the server only. */
 export default function Html({ children }: { children: ReactNode }) {

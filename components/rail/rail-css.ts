@@ -9,8 +9,6 @@ const frame = `
 :root .rail-narrow{display:none}
 @container rail (max-width:419.98px){:root .rail-narrow{display:flex}:root .rail-wide{display:none}}
 :root .rail-primal{display:flex;flex-direction:column;align-items:stretch;flex:1 1 0;min-width:0;padding:0;margin:0;border:0;background:none;cursor:pointer;container-type:inline-size;font-size:.75rem;touch-action:manipulation}
-:root .rail-hook{align-self:center;width:8px;height:6px;margin-top:9px;margin-bottom:2px;box-sizing:border-box;border:2px solid var(--text);border-top:0;border-radius:0 0 5px 5px;position:relative}
-:root .rail-hook::before{content:'';position:absolute;right:-2px;bottom:3px;width:2px;height:10px;background:var(--text)}
 :root .rail-bar{display:flex;flex-direction:column;height:62px;background:var(--page);position:relative;overflow:hidden;print-color-adjust:exact;forced-color-adjust:none}
 :root .rail-tall .rail-bar{height:96px}
 :root .rail-sold{background:var(--sold);flex:none}

@@ -41,7 +41,7 @@ export function RailLine({ id, geometry, mode, chosenId, onChoose, visibleWhen }
           }}
           style={[css('rail-primal', at === chosenAt && 'rail-chosen'), { flexGrow: column.primal.grams }]}
         >
-          <span className="rail-hook" />
+          <span className="w-hook" />
           <Bar column={column} mode={mode} />
           <Label column={column} />
         </Pressable>
