@@ -1,4 +1,4 @@
-import { and, desc, eq, lte } from 'drizzle-orm';
+import { and, desc, eq, inArray, lte } from 'drizzle-orm';
 import { datedSetting, farm } from '#db/schema/farm.ts';
 import type { Day } from '#shared/domain/day.ts';
 import type { Db, Tx } from '#server/deps.ts';
@@ -28,4 +28,14 @@ export async function setSetting(db: Db | Tx, setting: { key: string; validFrom:
     .insert(datedSetting)
     .values(setting)
     .onConflictDoUpdate({ target: [datedSetting.key, datedSetting.validFrom], set: { value: setting.value } });
+}
+
+/** The values in force on a day of those settings that were set by then. */
+export async function listSettings(db: Db | Tx, keys: readonly string[], on: Day): Promise<Map<string, unknown>> {
+  const rows = await db
+    .selectDistinctOn([datedSetting.key], { key: datedSetting.key, value: datedSetting.value })
+    .from(datedSetting)
+    .where(and(inArray(datedSetting.key, [...keys]), lte(datedSetting.validFrom, on)))
+    .orderBy(datedSetting.key, desc(datedSetting.validFrom));
+  return new Map(rows.map((row) => [row.key, row.value]));
 }
