@@ -24,8 +24,6 @@ export type CheckoutRecord = {
   lineItems: WireLineItem[];
   details: IntentDetails;
   payer: Payer;
-  /** How far /control has let time run ahead for this session. */
-  agedSeconds: number;
   /** The form that was sent last: a second tap on Pay sends the same form again. */
   lastForm: string | null;
   problem: PaymentProblem | null;

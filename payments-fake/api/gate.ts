@@ -18,6 +18,10 @@ export function outage(fake: Fake): RequestHandler {
       response.destroy();
       return;
     }
+    if (fake.settings.failNext > 0) {
+      fake.settings.failNext -= 1;
+      throw new Fault(500, { type: 'api_error', message: 'An unknown error occurred.' });
+    }
     if (fake.settings.down) throw new Fault(503, { type: 'api_error', message: 'The API is down for the moment.' });
     next();
   };
@@ -61,11 +65,9 @@ function toFault(error: unknown): Fault | null {
   return isBodyFault ? invalidRequest(`The request body cannot be read: ${error.message}`) : null;
 }
 
+// eslint-disable-next-line max-params -- Express knows an error handler by its four parameters.
 export const answerFault: ErrorRequestHandler = (error: unknown, _request, response, next) => {
   const fault = toFault(error);
-  if (!fault) {
-    next(error);
-    return;
-  }
-  response.status(fault.status).json({ error: fault.body });
+  if (fault) response.status(fault.status).json({ error: fault.body });
+  else next(error);
 };

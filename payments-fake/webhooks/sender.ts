@@ -58,6 +58,11 @@ function fail(delivery: Delivery, retryMs: number): void {
   delivery.dueAt = Date.now() + retryMs * Math.min(2 ** (delivery.attempts - 1), longestWaitSteps);
 }
 
+function waitingIn({ store, settings }: SenderOptions): Delivery[] {
+  const waiting = [...store.deliveries.values()];
+  return settings.webhooks === 'out-of-order' ? waiting.reverse() : waiting;
+}
+
 /** One delivery at a time, so that 'deliver' keeps the order in which things happened. */
 export function createSender(options: SenderOptions): Sender {
   const { store, settings } = options;
@@ -68,10 +73,7 @@ export function createSender(options: SenderOptions): Sender {
   // What an earlier run did not deliver starts afresh.
   for (const left of store.deliveries.values()) Object.assign(left, { attempts: 0, dueAt: Date.now(), isGivenUp: false });
 
-  const inOrder = () => {
-    const waiting = [...store.deliveries.values()];
-    return settings.webhooks === 'out-of-order' ? waiting.reverse() : waiting;
-  };
+  const inOrder = () => waitingIn(options);
 
   async function attempt(delivery: Delivery): Promise<boolean> {
     const isDelivered = await post(options, delivery, stopping.signal);
