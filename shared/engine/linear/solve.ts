@@ -20,6 +20,8 @@ export type SolveOptions = {
   gap?: number;
   timeLimitSeconds?: number;
   nodeLimit?: number;
+  /** A known answer to begin from, by column; columns that it does not name begin at zero. */
+  start?: Readonly<Record<string, number>>;
   onProgress?: (progress: SolveProgress) => void;
   signal?: AbortSignal;
 };
