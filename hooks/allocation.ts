@@ -1,0 +1,33 @@
+import { queryOptions, useQuery } from '@tanstack/react-query';
+import type { allocateSchema, publishAllocationSchema } from '#shared/contracts/allocation-schema.ts';
+import { allocate, getAllocation, publishAllocation } from '#shared/contracts/allocation.ts';
+import { getAllocationModel } from '#shared/contracts/downloads.ts';
+import type { CallInput } from '#shared/contracts/endpoint.ts';
+import { call } from './api.ts';
+import { STALE } from './query-client.ts';
+import { useFarmMutation } from './use-farm-mutation.ts';
+
+export function allocationQuery(dayId: string) {
+  return queryOptions({
+    queryKey: ['allocations', dayId],
+    queryFn: ({ signal }) => call(getAllocation, { params: { dayId }, signal }),
+    staleTime: STALE.stock,
+  });
+}
+
+export function useAllocation(dayId: string) {
+  return useQuery(allocationQuery(dayId));
+}
+
+export function useAllocate() {
+  return useFarmMutation((input: CallInput<typeof allocateSchema>) => call(allocate, input));
+}
+
+export function usePublishAllocation() {
+  return useFarmMutation((input: CallInput<typeof publishAllocationSchema>) => call(publishAllocation, input));
+}
+
+/** Where the browser fetches the model as a file. */
+export function allocationModelHref(allocationId: string): string {
+  return getAllocationModel.path.replace(':allocationId', encodeURIComponent(allocationId));
+}

@@ -1,0 +1,118 @@
+import { queryOptions, useQuery } from '@tanstack/react-query';
+import type {
+  bookCarcasesSchema,
+  closeCuttingDaySchema,
+  enterKillSheetSchema,
+  enterWeightsSchema,
+  NewCuttingDay,
+} from '#shared/contracts/carcases-schema.ts';
+import {
+  addCuttingDay,
+  bookCarcases,
+  closeCuttingDay,
+  enterKillSheet,
+  enterWeights,
+  getCarcase,
+  getCuttingDay,
+  getSpecification,
+  listCollectionPoints,
+  listCuttingDays,
+  listSpecifications,
+} from '#shared/contracts/carcases.ts';
+import type { CallInput } from '#shared/contracts/endpoint.ts';
+import { call } from './api.ts';
+import { STALE } from './query-client.ts';
+import { useFarmMutation } from './use-farm-mutation.ts';
+
+export function cuttingDaysQuery() {
+  return queryOptions({
+    queryKey: ['cutting-days'],
+    queryFn: ({ signal }) => call(listCuttingDays, { signal }),
+    staleTime: STALE.office,
+  });
+}
+
+export function cuttingDayQuery(dayId: string) {
+  return queryOptions({
+    queryKey: ['cutting-days', dayId],
+    queryFn: ({ signal }) => call(getCuttingDay, { params: { dayId }, signal }),
+    staleTime: STALE.office,
+  });
+}
+
+export function carcaseQuery(carcaseId: string) {
+  return queryOptions({
+    queryKey: ['carcases', carcaseId],
+    queryFn: ({ signal }) => call(getCarcase, { params: { carcaseId }, signal }),
+    staleTime: STALE.office,
+  });
+}
+
+export function collectionPointsQuery() {
+  return queryOptions({
+    queryKey: ['collection-points'],
+    queryFn: ({ signal }) => call(listCollectionPoints, { signal }),
+    staleTime: STALE.office,
+  });
+}
+
+export function specificationsQuery() {
+  return queryOptions({
+    queryKey: ['specifications'],
+    queryFn: ({ signal }) => call(listSpecifications, { signal }),
+    staleTime: STALE.office,
+  });
+}
+
+export function specificationQuery(specificationId: string) {
+  return queryOptions({
+    queryKey: ['specifications', specificationId],
+    queryFn: ({ signal }) => call(getSpecification, { params: { specificationId }, signal }),
+    staleTime: STALE.office,
+  });
+}
+
+export function useCuttingDays() {
+  return useQuery(cuttingDaysQuery());
+}
+
+export function useCuttingDay(dayId: string) {
+  return useQuery(cuttingDayQuery(dayId));
+}
+
+export function useCarcase(carcaseId: string) {
+  return useQuery(carcaseQuery(carcaseId));
+}
+
+export function useCollectionPoints() {
+  return useQuery(collectionPointsQuery());
+}
+
+export function useSpecifications() {
+  return useQuery(specificationsQuery());
+}
+
+/** Waits until the edition is known. */
+export function useSpecification(specificationId: string | undefined) {
+  return useQuery({ ...specificationQuery(specificationId ?? ''), enabled: specificationId !== undefined });
+}
+
+export function useAddCuttingDay() {
+  return useFarmMutation((body: NewCuttingDay) => call(addCuttingDay, { body }));
+}
+
+export function useCloseCuttingDay() {
+  return useFarmMutation((input: CallInput<typeof closeCuttingDaySchema>) => call(closeCuttingDay, input));
+}
+
+export function useBookCarcases() {
+  return useFarmMutation((input: CallInput<typeof bookCarcasesSchema>) => call(bookCarcases, input));
+}
+
+export function useEnterKillSheet() {
+  return useFarmMutation((input: CallInput<typeof enterKillSheetSchema>) => call(enterKillSheet, input));
+}
+
+export function useEnterWeights() {
+  return useFarmMutation((input: CallInput<typeof enterWeightsSchema>) => call(enterWeights, input));
+}

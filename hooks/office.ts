@@ -1,0 +1,51 @@
+import { queryOptions, useQuery } from '@tanstack/react-query';
+import type { CallInput } from '#shared/contracts/endpoint.ts';
+import type { editBoxKindSchema, Settings } from '#shared/contracts/office-schema.ts';
+import { editBoxKind, editSettings, getSettings, getToday, listBoxKinds } from '#shared/contracts/office.ts';
+import { call } from './api.ts';
+import { STALE } from './query-client.ts';
+import { useFarmMutation } from './use-farm-mutation.ts';
+
+export function todayQuery() {
+  return queryOptions({
+    queryKey: ['today'],
+    queryFn: ({ signal }) => call(getToday, { signal }),
+    staleTime: STALE.stock,
+  });
+}
+
+export function boxKindsQuery() {
+  return queryOptions({
+    queryKey: ['box-kinds'],
+    queryFn: ({ signal }) => call(listBoxKinds, { signal }),
+    staleTime: STALE.office,
+  });
+}
+
+export function settingsQuery() {
+  return queryOptions({
+    queryKey: ['settings'],
+    queryFn: ({ signal }) => call(getSettings, { signal }),
+    staleTime: STALE.office,
+  });
+}
+
+export function useToday() {
+  return useQuery(todayQuery());
+}
+
+export function useBoxKinds() {
+  return useQuery(boxKindsQuery());
+}
+
+export function useSettings() {
+  return useQuery(settingsQuery());
+}
+
+export function useEditBoxKind() {
+  return useFarmMutation((input: CallInput<typeof editBoxKindSchema>) => call(editBoxKind, input));
+}
+
+export function useEditSettings() {
+  return useFarmMutation((body: Settings) => call(editSettings, { body }));
+}
