@@ -88,3 +88,11 @@ export async function removeWeighings(tx: Tx, carcaseId: string, nodes: readonly
   if (nodes.length === 0) return;
   await tx.delete(weighing).where(and(eq(weighing.carcaseId, carcaseId), inArray(weighing.node, [...nodes])));
 }
+
+/** Nothing of them is left unaccounted. */
+export async function markSoldThrough(tx: Tx, carcaseIds: readonly string[]): Promise<void> {
+  await tx
+    .update(carcase)
+    .set({ state: 'sold through', version: sql`${carcase.version} + 1` })
+    .where(inArray(carcase.id, [...carcaseIds]));
+}
