@@ -3,6 +3,7 @@ import type { CallInput } from '#shared/contracts/endpoint.ts';
 import type { editBoxKindSchema, Settings } from '#shared/contracts/office-schema.ts';
 import { editBoxKind, editSettings, getSettings, getToday, listBoxKinds } from '#shared/contracts/office.ts';
 import { call } from './api.ts';
+import { loadFarm } from './farm.ts';
 import { STALE } from './query-client.ts';
 import { useFarmMutation } from './use-farm-mutation.ts';
 
@@ -28,6 +29,12 @@ export function settingsQuery() {
     queryFn: ({ signal }) => call(getSettings, { signal }),
     staleTime: STALE.office,
   });
+}
+
+/** The farm's short name for the head of the page; the app's own until it is known. */
+export function useFarmName(): string {
+  const farm = useQuery({ queryKey: ['farm'], queryFn: loadFarm, staleTime: Infinity });
+  return farm.data?.name ?? 'Wholeside';
 }
 
 export function useToday() {

@@ -1,33 +1,19 @@
-import {
-  useForm,
-  type DefaultValues,
-  type FieldValues,
-  type Path,
-  type Resolver,
-  type UseFormReturn,
-} from 'react-hook-form';
+import { useForm, type DefaultValues, type FieldValues, type Path, type UseFormReturn } from 'react-hook-form';
 import type { z } from 'zod';
 import { AppError } from '#shared/errors.ts';
+import { lazyResolver } from './lazy-resolver.ts';
 
-/**
- * A form checked by the contract's own schema: on leaving a field, then on each change, and on sending. Schema and
- * checker are fetched when first needed, so that a page does not load them to be read. What is sent is as typed; the
- * server parses it again.
- */
+/** A form checked by the contract's own schema: on leaving a field, then on each change, and on sending. */
 export function useContractForm<Values extends FieldValues>(
-  load: () => Promise<z.ZodType<unknown, Values>>,
+  loadSchema: () => Promise<z.ZodType<Values, Values>>,
   defaultValues: DefaultValues<Values>,
-): UseFormReturn<Values> {
-  const resolver: Resolver<Values> = async (values, context, options) => {
-    const [{ zodResolver }, schema] = await Promise.all([import('@hookform/resolvers/zod'), load()]);
-    return zodResolver(schema, undefined, { raw: true })(values, context, options);
-  };
-  return useForm<Values>({ mode: 'onTouched', resolver, defaultValues });
+): UseFormReturn<Values, unknown, Values> {
+  return useForm<Values, unknown, Values>({ mode: 'onTouched', resolver: lazyResolver(loadSchema), defaultValues });
 }
 
-/** Sends what was typed; the fields that the server refuses say so themselves. Other errors stay with the mutation. */
+/** Sends what was typed; the fields that the server refuses say so themselves. The mutation keeps the error for the notice. */
 export function sendForm<Values extends FieldValues>(
-  form: UseFormReturn<Values>,
+  form: UseFormReturn<Values, unknown, Values>,
   send: (values: Values) => Promise<unknown>,
 ): () => void {
   const submit = form.handleSubmit(async (values) => {

@@ -1,0 +1,90 @@
+import { keepPreviousData, queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
+import {
+  cancelOrder,
+  getOrder,
+  leavePayment,
+  listMyOrders,
+  placeOrder,
+  priceBasket,
+  type BasketLine,
+  type Checkout,
+  type Order,
+} from '#shared/contracts/orders.ts';
+import { call } from './api.ts';
+import { useLoaded, type Loaded } from './loaded.ts';
+import { STALE } from './query-client.ts';
+
+/** While the payment company's word is on its way: often at first, then with patience. */
+const POLL_SOON_MS = 1_500;
+const POLL_LATER_MS = 10_000;
+const SOON_POLLS = 40;
+
+export function orderQuery(token: string) {
+  return queryOptions({
+    queryKey: ['orders', token],
+    queryFn: ({ signal }) => call(getOrder, { params: { token }, signal }),
+    staleTime: STALE.stock,
+    refetchInterval: ({ state }) => {
+      if (state.data?.state !== 'awaiting payment') return false;
+      return state.dataUpdateCount < SOON_POLLS ? POLL_SOON_MS : POLL_LATER_MS;
+    },
+  });
+}
+
+export function useOrder(token: string, loaded: Loaded<Order>) {
+  return useLoaded(orderQuery(token), loaded);
+}
+
+export function basketPriceQuery(dayId: string, lines: BasketLine[]) {
+  return queryOptions({
+    queryKey: ['basket', dayId, lines],
+    queryFn: ({ signal }) => call(priceBasket, { body: { dayId, lines }, signal }),
+    staleTime: STALE.stock,
+    placeholderData: keepPreviousData,
+  });
+}
+
+/** Prices, stock and the sum as the farm counts them; the former figures stay while a change is worked out. */
+export function useBasketPrice(dayId: string | undefined, lines: BasketLine[]) {
+  return useQuery({ ...basketPriceQuery(dayId ?? '', lines), enabled: dayId !== undefined && lines.length > 0 });
+}
+
+/** Goes to payment. Whatever the answer, stock and slots have moved: both are asked for again. */
+export function usePlaceOrder() {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (body: Checkout) => call(placeOrder, { body }),
+    onSettled: () =>
+      Promise.all(
+        [['basket'], ['collections'], ['shop'], ['cuts'], ['boxes']].map((queryKey) =>
+          client.invalidateQueries({ queryKey }),
+        ),
+      ),
+  });
+}
+
+export function useCancelOrder(token: string) {
+  return useOrderChange(token, () => call(cancelOrder, { params: { token } }));
+}
+
+export function useLeavePayment(token: string) {
+  return useOrderChange(token, () => call(leavePayment, { params: { token } }));
+}
+
+function useOrderChange(token: string, change: () => Promise<Order>) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: change,
+    onSuccess: (order) => client.setQueryData(orderQuery(token).queryKey, order),
+    onError: () => client.invalidateQueries({ queryKey: ['orders', token] }),
+  });
+}
+
+export function useMyOrders(isSignedIn: boolean) {
+  return useQuery({
+    queryKey: ['my-orders'],
+    queryFn: ({ signal }) => call(listMyOrders, { signal }),
+    staleTime: STALE.office,
+    enabled: isSignedIn,
+  });
+}
