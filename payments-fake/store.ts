@@ -116,6 +116,11 @@ export function openStore(dir?: string): Store {
   return { ...tables, changed, writeNow };
 }
 
+/** The id of what a member names, expanded or not; empty when it names nothing. */
+export function idOf(value: string | { id: string } | null): string {
+  return typeof value === 'string' ? value : (value?.id ?? '');
+}
+
 /** Finds what an id stands for, by its prefix. */
 export function findObject(store: Store, id: string): object | undefined {
   switch (id.split('_')[0]) {

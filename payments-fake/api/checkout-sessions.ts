@@ -103,7 +103,10 @@ function refuseOtherModes(params: Params): void {
   }
 }
 
-function readCustomer(fake: Fake, params: Params): Pick<SessionPlan, 'customer' | 'customerEmail' | 'customerCreation'> {
+function readCustomer(
+  fake: Fake,
+  params: Params,
+): Pick<SessionPlan, 'customer' | 'customerEmail' | 'customerCreation'> {
   const customer = params.text('customer');
   const email = params.text('customer_email');
   const creation = params.oneOf('customer_creation', ['always', 'if_required'] as const);

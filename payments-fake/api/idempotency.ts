@@ -8,7 +8,9 @@ const longestKey = 255;
 export type KeyedRequest = { key: string; endpoint: string; body: unknown };
 
 function fingerprint(body: unknown): string {
-  return createHash('sha256').update(canonicalText(toJson(body))).digest('hex');
+  return createHash('sha256')
+    .update(canonicalText(toJson(body)))
+    .digest('hex');
 }
 
 /** The answer that this key has had before. The same key for anything else is refused. */

@@ -8,7 +8,9 @@ export function toJson(value: unknown): Json {
   if (Array.isArray(value)) return value.map(toJson);
   if (typeof value !== 'object') throw new TypeError(`A ${typeof value} has no place in an answer`);
   const members: [string, unknown][] = Object.entries(value);
-  return Object.fromEntries(members.flatMap(([name, member]) => (member === undefined ? [] : [[name, toJson(member)]])));
+  return Object.fromEntries(
+    members.flatMap(([name, member]) => (member === undefined ? [] : [[name, toJson(member)]])),
+  );
 }
 
 /** The same text for the same content, in whatever order it was sent. */

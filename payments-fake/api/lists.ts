@@ -46,7 +46,10 @@ export function readCreated(params: Params): (item: { created: number }) => bool
 }
 
 /** A filter by a member that holds an id or a word. */
-export function readFilter<Name extends string>(params: Params, name: Name): (item: { [key in Name]?: unknown }) => boolean {
+export function readFilter<Name extends string>(
+  params: Params,
+  name: Name,
+): (item: { [key in Name]?: unknown }) => boolean {
   const wanted = params.text(name);
   return (item) => wanted === null || item[name] === wanted;
 }

@@ -1,7 +1,7 @@
 import type Stripe from 'stripe';
 import { buildCharge } from '../objects/charge.ts';
 import type { Fake } from '../fake.ts';
-import type { CardRecord, IntentRecord } from '../store.ts';
+import { type CardRecord, idOf, type IntentRecord } from '../store.ts';
 import { authenticationRequired, type Decline, findCardByToken, genericDecline, otherCard } from '../test-cards.ts';
 import { emit } from '../webhooks/emit.ts';
 
@@ -16,8 +16,7 @@ export type Attempt = {
 export const failedAuthentication: Decline = {
   code: 'payment_intent_authentication_failure',
   declineCode: '',
-  message:
-    'We are unable to authenticate your payment method. Please choose a different payment method and try again.',
+  message: 'We are unable to authenticate your payment method. Please choose a different payment method and try again.',
 };
 
 function errorOf(
@@ -104,7 +103,7 @@ export function attemptPayment(fake: Fake, attempt: Attempt): void {
 
 /** The cardholder answered their bank. Nothing happens when the intent no longer waits for that. */
 export function answerAuthentication(fake: Fake, record: IntentRecord, isProven: boolean): void {
-  const card = fake.store.cards.get(String(record.intent.payment_method));
+  const card = fake.store.cards.get(idOf(record.intent.payment_method));
   if (record.intent.status !== 'requires_action' || !card) return;
   const attempt = { record, card, isOffSession: false };
   if (isProven) succeed(fake, attempt, true);

@@ -3,7 +3,7 @@ import { buildCustomer } from '../objects/customer.ts';
 import { buildIntent } from '../objects/payment-intent.ts';
 import { buildPaymentMethod } from '../objects/payment-method.ts';
 import type { Fake } from '../fake.ts';
-import type { CheckoutRecord, IntentRecord, Payer } from '../store.ts';
+import { type CheckoutRecord, idOf, type IntentRecord, type Payer } from '../store.ts';
 import type { TestCard } from '../test-cards.ts';
 import { emit } from '../webhooks/emit.ts';
 import { answerAuthentication, attemptPayment, cancelIntent } from './attempt.ts';
@@ -23,7 +23,7 @@ function customerOf(fake: Fake, { session, details, payer }: CheckoutRecord): st
 /** One payment intent per session, made by the first try to pay. */
 function intentOf(fake: Fake, checkout: CheckoutRecord): IntentRecord {
   const { session, details } = checkout;
-  const known = fake.store.intents.get(String(session.payment_intent));
+  const known = fake.store.intents.get(idOf(session.payment_intent));
   if (known) return known;
   const intent = buildIntent({
     amount: session.amount_total ?? 0,
@@ -90,7 +90,7 @@ export function authenticate(fake: Fake, record: IntentRecord, isProven: boolean
 export function expireCheckout(fake: Fake, { session }: CheckoutRecord): void {
   session.status = 'expired';
   session.url = null;
-  const record = fake.store.intents.get(String(session.payment_intent));
+  const record = fake.store.intents.get(idOf(session.payment_intent));
   if (record && record.intent.status !== 'canceled') cancelIntent(fake, record, 'automatic');
   emit(fake, { type: 'checkout.session.expired', object: session });
   fake.store.changed();

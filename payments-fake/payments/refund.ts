@@ -2,7 +2,8 @@ import type Stripe from 'stripe';
 import { Fault, invalidRequest } from '../api/faults.ts';
 import { buildRefund, type RefundPlan } from '../objects/refund.ts';
 import type { Fake } from '../fake.ts';
-import type { RefundRecord } from '../store.ts';
+import { newId } from '../ids.ts';
+import { idOf, type RefundRecord } from '../store.ts';
 import { findCardByToken } from '../test-cards.ts';
 import { emit } from '../webhooks/emit.ts';
 
@@ -66,8 +67,8 @@ function settle(fake: Fake, record: RefundRecord): void {
   delete refund.pending_reason;
   if (settlesTo === 'failed') {
     refund.failure_reason = 'expired_or_canceled_card';
-    refund.failure_balance_transaction = `${String(refund.balance_transaction)}_back`;
-    const charge = fake.store.charges.get(String(refund.charge));
+    refund.failure_balance_transaction = newId('txn');
+    const charge = fake.store.charges.get(idOf(refund.charge));
     if (charge) move(charge, -refund.amount);
     emit(fake, { type: 'refund.failed', object: refund });
   }

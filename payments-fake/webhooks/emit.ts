@@ -5,7 +5,10 @@ import { newId } from '../ids.ts';
 /** What happened, with the object as it is just after. */
 export type Happening =
   | { type: 'checkout.session.completed' | 'checkout.session.expired'; object: Stripe.Checkout.Session }
-  | { type: 'payment_intent.succeeded' | 'payment_intent.payment_failed' | 'payment_intent.canceled'; object: Stripe.PaymentIntent }
+  | {
+      type: 'payment_intent.succeeded' | 'payment_intent.payment_failed' | 'payment_intent.canceled';
+      object: Stripe.PaymentIntent;
+    }
   | { type: 'charge.succeeded' | 'charge.failed' | 'charge.refunded'; object: Stripe.Charge }
   | { type: 'refund.created' | 'refund.updated' | 'refund.failed'; object: Stripe.Refund };
 

@@ -47,7 +47,8 @@ async function post(options: SenderOptions, delivery: Delivery, stop: AbortSigna
     if (!response.ok) options.log(`${event.type} ${event.id}: the receiver answered ${response.status}`);
     return response.ok;
   } catch (error) {
-    if (!stop.aborted) options.log(`${event.type} ${event.id}: ${error instanceof Error ? error.message : 'no answer'}`);
+    if (!stop.aborted)
+      options.log(`${event.type} ${event.id}: ${error instanceof Error ? error.message : 'no answer'}`);
     return false;
   }
 }
@@ -71,9 +72,8 @@ export function createSender(options: SenderOptions): Sender {
   let work: Promise<unknown> = Promise.resolve();
 
   // What an earlier run did not deliver starts afresh.
-  for (const left of store.deliveries.values()) Object.assign(left, { attempts: 0, dueAt: Date.now(), isGivenUp: false });
-
-  const inOrder = () => waitingIn(options);
+  for (const left of store.deliveries.values())
+    Object.assign(left, { attempts: 0, dueAt: Date.now(), isGivenUp: false });
 
   async function attempt(delivery: Delivery): Promise<boolean> {
     const isDelivered = await post(options, delivery, stopping.signal);
@@ -86,7 +86,7 @@ export function createSender(options: SenderOptions): Sender {
 
   async function sendDue(): Promise<void> {
     while (!stopping.signal.aborted && settings.webhooks !== 'hold') {
-      const due = inOrder().find((delivery) => !delivery.isGivenUp && delivery.dueAt <= Date.now());
+      const due = waitingIn(options).find((delivery) => !delivery.isGivenUp && delivery.dueAt <= Date.now());
       if (!due) break;
       await attempt(due);
     }
@@ -96,7 +96,7 @@ export function createSender(options: SenderOptions): Sender {
   function wake(): void {
     clearTimeout(timer);
     if (stopping.signal.aborted || settings.webhooks === 'hold') return;
-    const times = inOrder().flatMap((delivery) => (delivery.isGivenUp ? [] : [delivery.dueAt]));
+    const times = waitingIn(options).flatMap((delivery) => (delivery.isGivenUp ? [] : [delivery.dueAt]));
     if (times.length === 0) return;
     timer = setTimeout(() => (work = work.then(sendDue)), Math.max(0, Math.min(...times) - Date.now()));
   }
@@ -116,7 +116,7 @@ export function createSender(options: SenderOptions): Sender {
 
   async function flush(): Promise<{ delivered: number; failed: number }> {
     const round = work.then(async () => {
-      const waiting = inOrder();
+      const waiting = waitingIn(options);
       let delivered = 0;
       for (const delivery of waiting) if (await attempt(delivery)) delivered += 1;
       return { delivered, failed: waiting.length - delivered };
