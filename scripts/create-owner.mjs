@@ -9,7 +9,7 @@ async function createOwner() {
   requireNode();
   if (!process.env.DATABASE_URL) throw new Refusal('Set DATABASE_URL to the database that the owner is to be made in.');
   await ensureDependencies();
-  const args = ['--import', 'tsx', 'db/seed/create-owner.ts', ...process.argv.slice(2)];
+  const args = ['--import', 'tsx', 'scripts/create-owner.ts', ...process.argv.slice(2)];
   const child = spawn(process.execPath, args, { cwd: root, stdio: 'inherit' });
   return new Promise((resolve) => child.on('exit', (code) => resolve(code ?? 1)));
 }

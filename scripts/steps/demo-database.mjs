@@ -31,7 +31,7 @@ export async function migrateDemoDatabase(cluster, ports) {
 export async function seedDemoDatabase(databaseUrl, ports) {
   const env = demoEnvironment({ ports, databaseUrl });
   const said = await step('Seeding the demo farm', () =>
-    run(process.execPath, ['--import', 'tsx', 'db/seed/seed.ts'], { log: 'seed', env }),
+    run(process.execPath, ['--import', 'tsx', 'scripts/seed-demo.ts'], { log: 'seed', env }),
   );
   if (said.trim()) say(said.trimEnd().replace(/^/gm, '  '));
 }
