@@ -1,0 +1,1 @@
+export function withLock<T>(file: string, work: () => Promise<T>): Promise<T>;

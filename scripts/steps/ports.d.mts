@@ -1,0 +1,2 @@
+export function freePort(): Promise<number>;
+export function requireFreePorts(ports: Record<string, number>): Promise<void>;
