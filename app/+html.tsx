@@ -6,10 +6,11 @@ import { fontCss, fontPreloads } from '#components/theme/font-css.ts';
 import { kitCss } from '#components/theme/kit-css.ts';
 import { layoutCss } from '#components/theme/layout-css.ts';
 import { shellCss } from '#components/theme/shell-css.ts';
+import { shopCss } from '#components/theme/shop-css.ts';
 import { themeCss } from '#components/theme/theme-css.ts';
 import { schemeScript } from '#components/theme/use-theme.ts';
 
-const css = fontCss + themeCss + layoutCss + controlCss + kitCss + shellCss + railCss;
+const css = fontCss + themeCss + layoutCss + controlCss + kitCss + shellCss + shopCss + railCss;
 
 /** The document around every page. It runs on the server only. */
 export default function Html({ children }: { children: ReactNode }) {

@@ -15,7 +15,8 @@ const header = `
 :root .w-strip .w-nav{flex-wrap:nowrap;gap:24px}
 :root .w-strip .w-nav-link{white-space:nowrap}
 :root .w-foot{border-top:1px solid var(--line);margin-top:auto;padding-block:24px 40px}
-:root .w-foot-columns{display:flex;flex-direction:column;gap:20px}
+:root .w-foot-columns{display:flex;flex-direction:column;gap:24px}
+:root .w-foot-links{display:grid;grid-template-columns:repeat(2,minmax(0,auto));gap:0 32px;justify-content:start}
 @media (min-width:760px){:root .w-foot-columns{flex-direction:row;justify-content:space-between;align-items:flex-start;gap:40px}}
 @media print{:root .w-head,:root .w-foot,:root .w-strip,:root .w-skip{display:none}}
 `;

@@ -13,7 +13,7 @@ export function FormDay<Values extends FieldValues>({ control, name, ...date }: 
   return (
     <DateField
       {...date}
-      value={(bound.value) ?? ''}
+      value={bound.value ?? ''}
       onChange={bound.onChange}
       onBlur={bound.onBlur}
       error={fieldState.error?.message}

@@ -13,7 +13,7 @@ export function FormNumber<Values extends FieldValues>({ control, name, ...field
   return (
     <NumberField
       {...field}
-      value={(bound.value) ?? null}
+      value={bound.value ?? null}
       onChange={bound.onChange}
       onBlur={bound.onBlur}
       error={fieldState.error?.message}

@@ -13,7 +13,7 @@ export function FormSelect<Values extends FieldValues>({ control, name, ...selec
   return (
     <Select
       {...select}
-      value={(bound.value) ?? ''}
+      value={bound.value ?? ''}
       onChange={(value) => bound.onChange(value === '' && select.optional ? null : value)}
       onBlur={bound.onBlur}
       error={fieldState.error?.message}

@@ -19,7 +19,7 @@ export function FormText<Values extends FieldValues>(props: FormTextProps<Values
   return (
     <Field
       {...field}
-      value={(bound.value) ?? ''}
+      value={bound.value ?? ''}
       onChangeText={(text) => bound.onChange(emptyIsNull && text.trim() === '' ? null : text)}
       onBlur={bound.onBlur}
       error={fieldState.error?.message}

@@ -18,8 +18,8 @@ export function NavLink({ label, href, current, look = 'link' }: NavLinkProps) {
   );
 }
 
-/** Whether a page stands at a place or below it: `/office/herd/12` is at `/office/herd`. */
+/** Whether a page stands at a place or below it: `/office/herd/12` is at `/office/herd`. Only the start is at `/`. */
 export function isAt(path: string, { href }: NavItem): boolean {
   const place = typeof href === 'string' ? href : href.pathname;
-  return path === place || path.startsWith(`${place}/`);
+  return path === place || (place !== '/' && path.startsWith(`${place}/`));
 }

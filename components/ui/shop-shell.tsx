@@ -2,9 +2,7 @@ import { Link, type Href } from 'expo-router';
 import type { ReactNode } from 'react';
 import { View } from 'react-native';
 import { css } from '#components/theme/css.ts';
-import { NavLink, type NavItem } from './nav-link.tsx';
-import { SchemeSwitch } from './scheme-switch.tsx';
-import { isAt } from './nav-link.tsx';
+import { isAt, NavLink, type NavItem } from './nav-link.tsx';
 import { SkipLink } from './skip-link.tsx';
 
 type ShopShellProps = {
@@ -15,16 +13,12 @@ type ShopShellProps = {
   /** Path of the page, to mark where the reader is. */
   path: string;
   links: readonly NavItem[];
-  /** Lesser places, in the foot alone: terms, sign in, trade. */
-  footLinks?: readonly NavItem[];
-  /** Address, opening times and what the law asks to be said. */
-  foot?: ReactNode;
   children: ReactNode;
 };
 
-/** The shop's frame: the farm's name, the basket, the places, and a foot that repeats them. */
+/** The shop's frame: the farm's name, the places, the basket. Each page brings its own `main` and foot. */
 export function ShopShell(props: ShopShellProps) {
-  const { farmName, basketCount, links, path, footLinks = [] } = props;
+  const { farmName, basketCount, links, path } = props;
   return (
     <View style={css('w-shell')}>
       <SkipLink />
@@ -43,20 +37,7 @@ export function ShopShell(props: ShopShellProps) {
           </Link>
         </View>
       </View>
-      <View role="main" id="main" tabIndex={-1} style={css('w-page', 'w-main')}>
-        {props.children}
-      </View>
-      <View role="contentinfo" style={css('w-foot')}>
-        <View style={css('w-page', 'w-foot-columns')}>
-          <View style={css('w-stack-s')}>{props.foot}</View>
-          <View role="navigation" aria-label="All of the shop" style={css('w-stack-s')}>
-            {[...links, ...footLinks].map((link) => (
-              <NavLink key={link.label} {...link} current={isAt(path, link)} />
-            ))}
-          </View>
-          <SchemeSwitch />
-        </View>
-      </View>
+      {props.children}
     </View>
   );
 }

@@ -1,0 +1,44 @@
+import { router } from 'expo-router';
+import { View } from 'react-native';
+import { AnimalForm } from '#components/herd/animal-form.tsx';
+import { css } from '#components/theme/css.ts';
+import { ProblemNotice } from '#components/ui/problem-notice.tsx';
+import { TextLink } from '#components/ui/text-link.tsx';
+import { TitleBar } from '#components/ui/title-bar.tsx';
+import { useAddAnimal } from '#hooks/herd.ts';
+import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
+import { useTitle } from '#hooks/use-title.ts';
+import type { NewAnimal } from '#shared/contracts/herd.ts';
+
+const loadSchema = async () => (await import('#shared/contracts/herd-schema.ts')).NewAnimal;
+
+export default function AddAnimalScreen() {
+  const add = useAddAnimal();
+  const form = useContractForm<NewAnimal>(loadSchema, {
+    earTag: 'UK ',
+    breed: '',
+    sex: 'steer',
+    born: '',
+    damEarTag: null,
+    liveGrams: null,
+  });
+  useTitle('Add an animal');
+  const submit = sendForm(form, async (animal) => {
+    await add.mutateAsync(animal);
+    router.push('/office/herd');
+  });
+  return (
+    <View style={css('w-stack-l')}>
+      <View>
+        <TextLink href="/office/herd" place="alone" icon="back">
+          Herd
+        </TextLink>
+        <TitleBar title="Add an animal" />
+      </View>
+      <View style={css('w-stack', 't-measure')}>
+        <AnimalForm control={form.control} onSubmit={submit} busy={add.isPending} submitLabel="Add to the herd" />
+        <ProblemNotice error={add.error} title="The animal was not added." />
+      </View>
+    </View>
+  );
+}
