@@ -74,7 +74,7 @@ function Record({ animal, afresh, isSaved }: PartProps & { isSaved: boolean }) {
   return (
     <View style={css('w-stack')}>
       <Heading level={2}>Record</Heading>
-      {isSaved && !form.formState.isDirty ? <Notice kind="good" spoken title="This is what is recorded now." /> : null}
+      {isSaved ? <Notice kind="good" spoken title="This is what is recorded now." /> : null}
       <AnimalForm control={form.control} onSubmit={submit} busy={edit.isPending} submitLabel="Save" />
       <ProblemNotice error={edit.error} title="The record was not saved." onShowNewest={afresh} />
     </View>
