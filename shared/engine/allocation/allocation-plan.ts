@@ -90,6 +90,8 @@ export type AllocationPlan = {
   gap: number;
   /** Boxes taken off because their whole packs would not have met a recipe line. */
   packRounds: { variantId: string; lineId: string }[];
+  /** A line that whole packs could not meet even so: the plan may be looked at but not published. */
+  unfillable: { variantId: string; lineId: string; name: string } | null;
   /** The model of the last phase, earlier optima as rows: any other solver can check it. */
   lpText: string;
   milliseconds: number;

@@ -1,0 +1,120 @@
+import type { ChoiceSupply, SideSupply, WayYield } from '#shared/engine/cutout/cutout-types.ts';
+import type { Cut } from '#shared/engine/figures/specification.ts';
+import { LpModel, type Term } from '#shared/engine/linear/lp-model.ts';
+import { Namer } from '#shared/engine/linear/namer.ts';
+import type {
+  AllocationInput,
+  BoxVariant,
+  LooseDemand,
+  MeatState,
+  Priority,
+  RecipeLine,
+  TradeLine,
+} from './allocation-input.ts';
+import type { FittingUnit } from './trade-fit.ts';
+
+export type CutLine = Extract<TradeLine, { kind: 'cut' }>;
+
+/** A way of a choice; `primals` names the column that says 'cut this way' for each primal that the choice covers. */
+export type WayColumn = {
+  side: SideSupply;
+  choice: ChoiceSupply;
+  way: WayYield;
+  column: string;
+  primals: ReadonlyMap<string, string>;
+};
+export type UnitColumn = FittingUnit & { column: string };
+export type CellColumn = { line: RecipeLine; cutId: string; state: MeatState; column: string };
+export type BoxColumns = { variant: BoxVariant; boxes: string; floor: string; steps: string[]; cells: CellColumn[] };
+export type LooseColumns = {
+  demand: LooseDemand;
+  /** Grams of one pack as planned. */
+  packGrams: number;
+  floor: string;
+  steps: string[];
+  sources: { state: MeatState; column: string }[];
+};
+export type ShortColumn = { priority: Priority; column: string; penceEach: number };
+
+/**
+ * The mixed-integer program of one cutting day. Weights stand in kilograms (three decimals are grams), the objective
+ * in pence. Every column that the plan is read from is named here.
+ */
+export type AllocationModel = {
+  input: AllocationInput;
+  cuts: ReadonlyMap<string, Cut>;
+  lp: LpModel;
+  namer: Namer;
+  ways: WayColumn[];
+  units: UnitColumn[];
+  boxes: BoxColumns[];
+  loose: LooseColumns[];
+  tradeCuts: { line: CutLine; column: string }[];
+  minced: { cutId: string; column: string }[];
+  left: { cutId: string; state: MeatState; column: string }[];
+  shorts: ShortColumn[];
+  /** What takes from the supply of a cut and state, in kilograms. */
+  uses: Map<string, Term[]>;
+  /** What brings to it. */
+  yields: Map<string, Term[]>;
+  /** What must be in whole packs of a cut made on the day. */
+  packed: Map<string, Term[]>;
+};
+
+export function heapKey(cutId: string, state: MeatState): string {
+  return `${cutId} ${state}`;
+}
+
+export function addTerm(heaps: Map<string, Term[]>, key: string, term: Term): void {
+  const terms = heaps.get(key);
+  if (terms) terms.push(term);
+  else heaps.set(key, [term]);
+}
+
+/** Tenths of a penny per kilogram to pence per kilogram. */
+export function pencePerKg(tenthPencePerKg: number): number {
+  return tenthPencePerKg / 10;
+}
+
+export function emptyModel(input: AllocationInput): AllocationModel {
+  return {
+    input,
+    cuts: new Map(input.cuts.map((cut) => [cut.id, cut])),
+    lp: new LpModel(),
+    namer: new Namer(),
+    ways: [],
+    units: [],
+    boxes: [],
+    loose: [],
+    tradeCuts: [],
+    minced: [],
+    left: [],
+    shorts: [],
+    uses: new Map(),
+    yields: new Map(),
+    packed: new Map(),
+  };
+}
+
+export function getCut(model: Pick<AllocationModel, 'cuts'>, cutId: string): Cut {
+  const cut = model.cuts.get(cutId);
+  if (!cut) throw new RangeError(`the specification makes no ${cutId}`);
+  return cut;
+}
+
+export function stockGrams(input: AllocationInput, cutId: string, state: MeatState): number {
+  return input.stock
+    .filter((item) => item.cutId === cutId && item.state === state)
+    .reduce((sum, { grams }) => sum + grams, 0);
+}
+
+/** A column of what a confirmed promise falls short by. Without a promise there is none. */
+export function addShort(
+  model: AllocationModel,
+  short: Omit<ShortColumn, 'column'> & { name: string; most: number; isWhole: boolean },
+): Term[] {
+  if (short.most <= 0) return [];
+  const column = model.lp.addColumn(short.name, { upper: short.most, kind: short.isWhole ? 'integer' : 'continuous' });
+  model.shorts.push({ priority: short.priority, column, penceEach: short.penceEach });
+  return [[1, column]];
+}

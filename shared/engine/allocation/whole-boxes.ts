@@ -1,0 +1,68 @@
+import { checkBox } from '#shared/engine/box-fill/check-box.ts';
+import type { Cut } from '#shared/engine/figures/specification.ts';
+import type { BoxVariant, RecipeLine } from './allocation-input.ts';
+import type { PlannedBox } from './allocation-plan.ts';
+import { dealLine, type Cell, type PlannedContents } from './deal-packs.ts';
+import type { Heaps } from './heaps.ts';
+import { levelBoxes } from './level-boxes.ts';
+
+export type WholeBoxes = { contents: PlannedBox['contents']; failedLine: RecipeLine | null };
+
+function sumContents(boxes: readonly PlannedContents[]): PlannedBox['contents'] {
+  const cells = new Map<string, PlannedBox['contents'][number]>();
+  for (const pack of boxes.flat()) {
+    const key = `${pack.lineId} ${pack.cut.id} ${pack.state}`;
+    const cell = cells.get(key) ?? { lineId: pack.lineId, cutId: pack.cut.id, state: pack.state, grams: 0, packs: 0 };
+    cells.set(key, { ...cell, grams: cell.grams + pack.grams, packs: cell.packs + 1 });
+  }
+  return [...cells.keys()].sort().flatMap((key) => cells.get(key) ?? []);
+}
+
+function findFailure(variant: BoxVariant, boxes: readonly PlannedContents[]): RecipeLine | null {
+  for (const packs of boxes) {
+    const placed = packs.map((pack, index) => ({
+      id: String(index),
+      cutId: pack.cut.id,
+      grams: pack.grams,
+      state: pack.state,
+      lineId: pack.lineId,
+    }));
+    const check = checkBox(variant, placed);
+    if (check.isFilled) continue;
+    const lineId = check.missing[0]?.lineId ?? check.excess[0]?.lineId;
+    return variant.lines.find(({ id }) => id === lineId) ?? variant.lines[0] ?? null;
+  }
+  return null;
+}
+
+/**
+ * Turns the grams of one variant into whole packs, box by box, and looks at each with the checker of box fill. What is
+ * not used goes back to the heaps.
+ */
+export function makeWholeBoxes(
+  variant: BoxVariant,
+  plan: { boxes: number; cells: readonly Cell[] },
+  about: { cuts: ReadonlyMap<string, Cut>; heaps: Heaps },
+): WholeBoxes {
+  if (plan.boxes === 0) {
+    for (const { cut, state, grams } of plan.cells) about.heaps.add(cut.id, state, grams);
+    return { contents: [], failedLine: null };
+  }
+  const byLine = variant.lines.map((line) =>
+    dealLine(
+      plan.cells.filter((cell) => cell.line.id === line.id),
+      plan.boxes,
+      about.cuts,
+    ),
+  );
+  const boxes = Array.from({ length: plan.boxes }, (_, index) => byLine.flatMap((line) => line[index] ?? []));
+  for (const { cut, state, grams } of plan.cells) about.heaps.add(cut.id, state, grams);
+  for (const { cut, state, grams } of boxes.flat()) about.heaps.add(cut.id, state, -grams);
+  const cuts = [...about.cuts.values()];
+  levelBoxes(
+    boxes.map((packs) => ({ packs, recipe: variant })),
+    about.heaps,
+    cuts,
+  );
+  return { contents: sumContents(boxes), failedLine: findFailure(variant, boxes) };
+}
