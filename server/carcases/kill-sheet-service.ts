@@ -1,7 +1,7 @@
 import type { Carcase, KillSheet } from '#shared/contracts/carcases.ts';
 import type { Day } from '#shared/domain/day.ts';
 import { formatDayWithYear, formatGrams } from '#shared/domain/words.ts';
-import { scale } from '#shared/engine/rounding.ts';
+import { ACCEPTED_GRAMS, coldFromHot } from '#shared/engine/cutout/weight-chain.ts';
 import { AppError, type FieldErrors } from '#shared/errors.ts';
 import type { Deps, Tx } from '#server/deps.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
@@ -12,8 +12,7 @@ import { updateCarcase, type CarcaseOfDay } from './carcase-queries.ts';
 import { getCarcase, getCarcaseRow, refuseStaleCarcase } from './carcase-service.ts';
 import { lockCuttingDay, raiseFigures } from './cutting-day-queries.ts';
 
-const MIN_COLD_GRAMS = 50_000;
-const MAX_COLD_GRAMS = 700_000;
+const [MIN_COLD_GRAMS, MAX_COLD_GRAMS] = ACCEPTED_GRAMS.cold;
 
 export type KillSheetEntry = KillSheet & { carcaseId: string };
 
@@ -64,7 +63,7 @@ async function refuseFields(
 }
 
 function refuseWeight(sheet: KillSheetEntry): void {
-  const coldGrams = sheet.weighedAs === 'hot' ? scale(sheet.grams, 98, 100) : sheet.grams;
+  const coldGrams = sheet.weighedAs === 'hot' ? coldFromHot(sheet.grams) : sheet.grams;
   if (coldGrams >= MIN_COLD_GRAMS && coldGrams <= MAX_COLD_GRAMS) return;
   const sentence = `A cold carcase weighs between 50 kg and 700 kg; this one would weigh ${formatGrams(coldGrams)}.`;
   throw new AppError('WEIGHT_OUT_OF_RANGE', `${sentence} Nothing was saved.`, {

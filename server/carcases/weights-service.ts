@@ -1,4 +1,6 @@
 import type { Carcase } from '#shared/contracts/carcases.ts';
+import { SIDES } from '#shared/engine/cutout/cutout-types.ts';
+import type { Specification } from '#shared/engine/figures/specification.ts';
 import { AppError, type FieldErrors } from '#shared/errors.ts';
 import type { Deps } from '#server/deps.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
@@ -22,9 +24,9 @@ export async function enterWeights(deps: Deps, byUserId: string, entry: WeightsE
   return deps.db.transaction(async (tx) => {
     const { cuttingDayId } = await getCarcaseRow(tx, entry.carcaseId);
     const day = await lockCuttingDay(tx, cuttingDayId);
-    const { figures } = await loadCarcase(tx, entry.carcaseId);
+    const { day: cutouts, figures } = await loadCarcase(tx, entry.carcaseId);
     refuseBeforeKillOrAfterClose(figures, day?.state === 'closed');
-    refuseUnknownPaths(entry, figures);
+    refuseUnknownPaths(entry, cutouts.specification);
     if (!(await updateCarcase(tx, entry.carcaseId, { version: entry.version, values: {} }))) {
       throw refuseStaleCarcase(entry.version, figures.row.version);
     }
@@ -53,18 +55,37 @@ function refuseBeforeKillOrAfterClose({ row }: CarcaseFigures, isDayClosed: bool
   }
 }
 
-/** Known are the hung carcase and every node of its cutout below it, as it is to be cut. */
-function refuseUnknownPaths(entry: WeightsEntry, { cutout }: CarcaseFigures): void {
-  const known = new Set(['hung', ...cutout.nodes.filter((node) => node.level !== 'carcase').map((node) => node.path)]);
+/** Known are the hung carcase and every part that some way of the specification gives: what was weighed says which way. */
+function refuseUnknownPaths(entry: WeightsEntry, specification: Specification): void {
+  const known = pathsOf(specification);
   const seen = new Set<string>();
   const fields: FieldErrors = {};
-  for (const [index, { path, grams }] of entry.weights.entries()) {
-    // A weight of a way that is no longer planned can still be taken back.
-    if (!known.has(path) && grams !== null) fields[`weights.${index}.path`] = 'This carcase has no such part.';
+  for (const [index, { path }] of entry.weights.entries()) {
+    if (!known.has(path)) fields[`weights.${index}.path`] = 'This carcase has no such part.';
     if (seen.has(path)) fields[`weights.${index}.path`] = 'This part is named twice.';
     seen.add(path);
   }
   if (Object.keys(fields).length > 0) {
     throw new AppError('INVALID_INPUT', 'Nothing was saved: something is missing or not right.', { fields });
   }
+}
+
+function pathsOf(specification: Specification): Set<string> {
+  const paths = new Set<string>(['hung', ...SIDES]);
+  for (const side of SIDES) {
+    for (const quarter of specification.quarters) {
+      paths.add(`${side}/${quarter.id}`);
+      for (const primal of quarter.primals) {
+        const at = `${side}/${quarter.id}/${primal.id}`;
+        paths.add(at);
+        for (const lineId of linesOf(specification, primal.id)) paths.add(`${at}/${lineId}`);
+      }
+    }
+  }
+  return paths;
+}
+
+function linesOf(specification: Specification, primalId: string): string[] {
+  const lines = specification.choices.flatMap((choice) => choice.ways.flatMap((way) => way.lines));
+  return lines.filter((line) => line.takes.some((take) => take.primalId === primalId)).map((line) => line.id);
 }
