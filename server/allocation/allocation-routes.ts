@@ -1,4 +1,38 @@
+import { allocate, getAllocation, publishAllocation } from '#shared/contracts/allocation.ts';
+import { allocateSchema, getAllocationSchema, publishAllocationSchema } from '#shared/contracts/allocation-schema.ts';
+import { getAllocationModel } from '#shared/contracts/downloads.ts';
+import { getAllocationModelSchema } from '#shared/contracts/downloads-schema.ts';
 import type { Deps } from '#server/deps.ts';
-import type { Api } from '#server/http/route.ts';
+import { download, route, signedIn, type Api } from '#server/http/route.ts';
+import { getAllocation as findRow } from './allocation-queries.ts';
+import {
+  allocateDay,
+  getDayAllocations,
+  publishAllocation as publishDay,
+  viewAllocation,
+} from './allocation-service.ts';
 
-export function addAllocationRoutes(_api: Api, _deps: Deps): void {}
+export function addAllocationRoutes(api: Api, deps: Deps): void {
+  route(api, getAllocation, {
+    schema: getAllocationSchema,
+    handle: ({ params }) => getDayAllocations(deps, params.dayId),
+  });
+  route(api, allocate, {
+    schema: allocateSchema,
+    handle: async ({ params, body }) => viewAllocation(deps, await allocateDay(deps, params.dayId, body.locks)),
+  });
+  route(api, publishAllocation, {
+    schema: publishAllocationSchema,
+    handle: async ({ params, body }, caller) => {
+      const wish = { allocationId: params.allocationId, figuresVersion: body.figuresVersion };
+      return viewAllocation(deps, await publishDay(deps, { ...wish, byUserId: signedIn(caller).id }));
+    },
+  });
+  download(api, getAllocationModel, {
+    schema: getAllocationModelSchema,
+    handle: async ({ params }) => {
+      const row = await findRow(deps.db, params.allocationId);
+      return { contentType: 'text/plain; charset=utf-8', filename: 'allocation.lp', body: row.input.lpText };
+    },
+  });
+}

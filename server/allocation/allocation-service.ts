@@ -1,5 +1,156 @@
-import type { Deps } from '#server/deps.ts';
+import type { Allocation, Lock } from '#shared/contracts/allocation.ts';
+import { AppError } from '#shared/errors.ts';
+import { loadDayCutouts, type DayCutouts } from '#server/carcases/day-figures.ts';
+import { lockCuttingDay } from '#server/carcases/cutting-day-queries.ts';
+import type { Db, Deps, Tx } from '#server/deps.ts';
+import { readSettings } from '#server/farm/farm-settings.ts';
+import { recordAudit } from '#server/farm/audit-queries.ts';
+import {
+  addAllocation,
+  findLatestAllocation,
+  findPublishedAllocation,
+  getAllocation,
+  listBoxKinds,
+  listConfirmedLines,
+  listCuts,
+  listOffers,
+  type AllocationRow,
+  type ReservedLine,
+} from './allocation-queries.ts';
+import { buildDayInput } from './day-input.ts';
+import { describeAllocation, type AllocationFacts } from './describe-allocation.ts';
+import { publish } from './publish.ts';
+import { solveDay } from './solve-day.ts';
 
-export function replanDay(_deps: Deps, _dayId: string): Promise<void> {
-  return Promise.resolve();
+export type Wish = {
+  dayId: string;
+  locks: readonly Lock[];
+  /** Lines of a reservation that is not confirmed yet, worked in as if it were. */
+  asked?: readonly ReservedLine[];
+};
+
+/** A solved allocation that has not been kept yet. */
+export type SolvedDay = Omit<AllocationRow, 'id' | 'createdAt' | 'publishedAt' | 'state'>;
+
+/** Solves a cutting day as it stands now. Nothing is written. Throws NOT_FILLABLE while it has no carcase. */
+export async function solveAllocation(deps: Deps, { dayId, locks, asked = [] }: Wish): Promise<SolvedDay> {
+  const figures = await loadDayCutouts(deps.db, dayId);
+  if (figures.day.state === 'closed') {
+    throw new AppError('STATE_CHANGED', 'This cutting day is closed. Nothing was changed.');
+  }
+  if (figures.carcases.length === 0) {
+    throw new AppError('NOT_FILLABLE', 'There is no carcase on this day yet. Book animals for it, then allocate.');
+  }
+  const settings = await readSettings(deps.db, figures.day.day);
+  const input = buildDayInput({
+    sides: figures.sides,
+    specification: figures.specification,
+    cuts: await listCuts(deps.db),
+    kinds: await listBoxKinds(deps.db),
+    offers: await listOffers(deps.db, dayId),
+    reserved: await listConfirmedLines(deps.db, dayId),
+    asked,
+    locks,
+    butcheryTenthPencePerKg: settings.butcheryTenthPencePerKg,
+    minceClosedReason: null,
+  });
+  const { question, answer } = await solveDay(input, deps.solver);
+  return {
+    cuttingDayId: dayId,
+    figuresVersion: figures.day.figuresVersion,
+    locks: [...locks],
+    input: question,
+    plan: { ...answer, weighedCarcaseIds: weighedCarcases(figures) },
+    contributionPence: answer.plan.contributionPence,
+    isProven: answer.plan.isProven,
+  };
+}
+
+function weighedCarcases({ carcases }: DayCutouts): string[] {
+  return carcases.filter(({ cutout }) => cutout.cold.source === 'weighed').map(({ row }) => row.id);
+}
+
+/** Solves the day with the owner's locks and keeps the answer as a draft. */
+export async function allocateDay(deps: Deps, dayId: string, locks: readonly Lock[]): Promise<AllocationRow> {
+  return addAllocation(deps.db, await solveAllocation(deps, { dayId, locks }));
+}
+
+export type PublishWish = { allocationId: string; figuresVersion: number; byUserId: string | null };
+
+/** Puts an allocation on sale, in one transaction. The caller names the figures that it has seen. */
+export async function publishAllocation(deps: Deps, wish: PublishWish): Promise<AllocationRow> {
+  return deps.db.transaction(async (tx) => {
+    const row = await getAllocation(tx, wish.allocationId);
+    if (row.figuresVersion !== wish.figuresVersion) {
+      throw new AppError('STATE_CHANGED', 'You were looking at older figures. Nothing was published; look again.');
+    }
+    await publishRow(deps, tx, { row, byUserId: wish.byUserId });
+    return getAllocation(tx, row.id);
+  });
+}
+
+/** For callers that already hold a transaction: locks the day, then publishes. */
+export async function publishRow(
+  deps: Deps,
+  tx: Tx,
+  { row, byUserId }: { row: AllocationRow; byUserId: string | null },
+): Promise<void> {
+  const day = await lockCuttingDay(tx, row.cuttingDayId);
+  if (!day) throw new AppError('NOT_FOUND', 'There is no such cutting day.');
+  if (day.state === 'closed') throw new AppError('STATE_CHANGED', 'This cutting day is closed. Nothing was published.');
+  await publish(tx, { row, day, at: deps.clock.now(), byUserId });
+}
+
+/**
+ * Works the day out again after weights, trade or sales have moved. Publishes only if the owner has switched that on
+ * and the day is on sale already; otherwise the new answer waits as a draft.
+ */
+export async function replanDay(deps: Deps, dayId: string): Promise<void> {
+  const published = await findPublishedAllocation(deps.db, dayId);
+  if (!published) return;
+  try {
+    const row = await allocateDay(deps, dayId, published.locks);
+    const settings = await readSettings(deps.db, deps.clock.today());
+    if (!settings.isReallocationAutomatic) return;
+    await publishAllocation(deps, { allocationId: row.id, figuresVersion: row.figuresVersion, byUserId: null });
+  } catch (error) {
+    // The owner meets the refusal on Today, where the day stands as out of date.
+    if (!(error instanceof AppError)) throw error;
+    await recordAudit(deps.db, {
+      byUserId: null,
+      action: 're-planning refused',
+      subject: 'cutting day',
+      subjectId: dayId,
+      detail: { code: error.code, message: error.message },
+    });
+  }
+}
+
+export async function getDayAllocations(
+  deps: Deps,
+  dayId: string,
+): Promise<{ latest: Allocation | null; published: Allocation | null }> {
+  const facts = await loadFacts(deps.db, dayId);
+  const latest = await findLatestAllocation(deps.db, dayId);
+  const published = await findPublishedAllocation(deps.db, dayId);
+  return {
+    latest: latest && describeAllocation(latest, facts),
+    published: published && describeAllocation(published, facts),
+  };
+}
+
+export async function viewAllocation(deps: Deps, row: AllocationRow): Promise<Allocation> {
+  return describeAllocation(row, await loadFacts(deps.db, row.cuttingDayId));
+}
+
+async function loadFacts(db: Db, dayId: string): Promise<AllocationFacts> {
+  const figures = await loadDayCutouts(db, dayId);
+  const { deadweightTenthPencePerKg, killPence } = await readSettings(db, figures.day.day);
+  return {
+    figures,
+    offers: await listOffers(db, dayId),
+    reserved: await listConfirmedLines(db, dayId),
+    deadweightTenthPencePerKg,
+    killPence,
+  };
 }

@@ -10,4 +10,6 @@ export type AllocationAnswer = {
   limits: BoxLimit[];
   worths: CutWorth[];
   lockCosts: LockCost[];
+  /** Carcases whose kill sheet the figures rest on; the others are estimates. */
+  weighedCarcaseIds: string[];
 };

@@ -1,0 +1,131 @@
+import type { Allocation, PlannedChoice, PlannedSide } from '#shared/contracts/allocation.ts';
+import { priceForWeight } from '#shared/domain/money.ts';
+import { railOfPrimals } from '#shared/domain/rail-of-primals.ts';
+import { railBasis, spokenFor, type PrimalFill } from '#shared/domain/spoken-for.ts';
+import { formatCount, formatWeight } from '#shared/domain/words.ts';
+import type { SideSupply } from '#shared/engine/cutout/cutout-types.ts';
+import type { DayCutouts } from '#server/carcases/day-figures.ts';
+import type { AllocationRow, OfferRow, ReservedLine } from './allocation-queries.ts';
+
+export type AllocationFacts = {
+  figures: DayCutouts;
+  offers: readonly OfferRow[];
+  reserved: readonly ReservedLine[];
+  deadweightTenthPencePerKg: number;
+  killPence: number;
+};
+
+/** An allocation as the workbench shows it, with what is sold and held at this moment. */
+export function describeAllocation(row: AllocationRow, facts: AllocationFacts): Allocation {
+  const { input } = row.input;
+  const { plan, limits, worths } = row.plan;
+  const { day, carcases } = facts.figures;
+  const fills = spokenFor(railBasis(input, plan), countsOf(facts.offers));
+  const sides = input.sides.map((side) => describeSide(row, side, { facts, fill: fills.get(side.id) ?? new Map() }));
+  const coldGrams = carcases.reduce((sum, carcase) => sum + carcase.cutout.cold.grams, 0);
+  const cutName = (cutId: string) => input.cuts.find((cut) => cut.id === cutId)?.name ?? cutId;
+  const taken = (productKey: string) => {
+    const found = facts.offers.find((offer) => offer.productKey === productKey);
+    return { sold: found?.sold ?? 0, held: found?.held ?? 0 };
+  };
+  return {
+    id: row.id,
+    dayId: day.id,
+    day: day.day,
+    state: row.state,
+    createdAt: row.createdAt.toISOString(),
+    figuresVersion: row.figuresVersion,
+    isOutOfDate: row.figuresVersion !== day.figuresVersion,
+    isProven: row.isProven,
+    gapBasisPoints: Math.ceil(plan.gap * 10_000),
+    solveMs: Math.round(plan.milliseconds),
+    contributionPence: row.contributionPence - facts.killPence * carcases.length,
+    deadweightPence: priceForWeight(coldGrams, facts.deadweightTenthPencePerKg),
+    coldGrams,
+    productGrams: plan.cuts.reduce((sum, cut) => sum + cut.madeGrams, 0),
+    locks: row.locks.map(({ carcaseId, side, choiceId, wayId }) => ({ carcaseId, side, choiceId, wayId })),
+    sides,
+    boxes: plan.boxes.map((box) => ({
+      boxKindId: box.kindId,
+      name: box.name,
+      count: box.boxes,
+      ...taken(`box:${box.kindId}`),
+      limitedBy: (limits.find((limit) => limit.variantId === box.variantId)?.lines ?? []).map(
+        (line) => `${line.name}: ${formatWeight(line.shortGrams)} short for one more`,
+      ),
+    })),
+    loose: plan.loose.map((item) => ({
+      cutId: item.cutId,
+      name: cutName(item.cutId),
+      packs: item.packs,
+      grams: item.grams,
+      ...taken(`loose:${item.cutId}`),
+    })),
+    trade: describeTrade(row, facts.reserved),
+    cuts: plan.cuts.map(({ stockGrams: _stock, ...cut }) => ({
+      ...cut,
+      name: cutName(cut.cutId),
+      worthPencePerKg: worths.find((worth) => worth.cutId === cut.cutId)?.pencePerKg ?? null,
+    })),
+    shortfalls: plan.shortfalls.map((shortfall) => ({
+      name: shortfall.name,
+      missing:
+        shortfall.unit === 'grams'
+          ? formatWeight(shortfall.short)
+          : formatCount(shortfall.short, shortfall.unit.slice(0, -1), shortfall.unit),
+    })),
+  };
+}
+
+export function countsOf(offers: readonly OfferRow[]) {
+  return {
+    boxes: offers.flatMap(({ boxKindId, sold, held }) => (boxKindId ? [{ kindId: boxKindId, sold, held }] : [])),
+    loose: offers.flatMap(({ kind, cutId, sold, held }) => (kind === 'loose' && cutId ? [{ cutId, sold, held }] : [])),
+  };
+}
+
+type SideFacts = { facts: AllocationFacts; fill: ReadonlyMap<string, PrimalFill> };
+
+function describeSide(row: AllocationRow, side: SideSupply, { facts, fill }: SideFacts): PlannedSide {
+  const { figures, reserved } = facts;
+  const carcase = figures.carcases.find((candidate) => candidate.row.id === side.carcaseId);
+  return {
+    carcaseId: side.carcaseId,
+    side: side.side,
+    earTag: carcase?.row.animal.earTag ?? '',
+    title: carcase ? `${carcase.row.animal.breed} ${carcase.row.animal.sex}` : '',
+    sideGrams: side.grams,
+    source: row.plan.weighedCarcaseIds.includes(side.carcaseId) ? 'weighed' : 'estimated',
+    rail: railOfPrimals(figures.specification, fill),
+    choices: side.choices.map((choice) => describeChoice(row, { side, choice, reserved })),
+  };
+}
+
+type ChoiceFacts = { side: SideSupply; choice: SideSupply['choices'][number]; reserved: readonly ReservedLine[] };
+
+function describeChoice(row: AllocationRow, { side, choice, reserved }: ChoiceFacts): PlannedChoice {
+  const isHere = (place: { carcaseId: string; side: string; choiceId: string }) =>
+    place.carcaseId === side.carcaseId && place.side === side.side && place.choiceId === choice.choiceId;
+  const fate = row.plan.plan.fates.find(isHere);
+  const soldLine = fate?.soldPrimals[0]?.tradeLineId;
+  return {
+    choiceId: choice.choiceId,
+    name: choice.name,
+    primalIds: choice.primals.map((primal) => primal.primalId),
+    wayId: fate?.wayId ?? null,
+    soldTo: reserved.find((line) => line.id === soldLine)?.businessName ?? null,
+    isLocked: row.locks.some(isHere),
+    lockCostPence: row.plan.lockCosts.find(isHere)?.costPence ?? null,
+    ways: choice.ways.map(({ wayId, name, closedReason }) => ({ wayId, name, closedReason })),
+  };
+}
+
+function describeTrade(row: AllocationRow, reserved: readonly ReservedLine[]): Allocation['trade'] {
+  return row.plan.plan.trade.flatMap((planned) => {
+    const line = reserved.find((candidate) => candidate.id === planned.lineId);
+    if (!line) return [];
+    const { reservationNo, businessName } = line;
+    const grams = planned.cutGrams + planned.units.reduce((sum, unit) => sum + unit.grams, 0);
+    return [{ reservationNo, businessName, name: planned.name, grams }];
+  });
+}
