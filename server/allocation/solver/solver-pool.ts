@@ -70,8 +70,12 @@ class SolverPool {
     });
   }
 
-  warm(): Promise<void> {
-    return (this.threads[0] ?? this.addThread()).ready;
+  /** Holds the process while it waits, as a question does. */
+  async warm(): Promise<void> {
+    const thread = this.threads[0] ?? this.addThread();
+    thread.worker.ref();
+    await thread.ready;
+    if (!thread.job) thread.worker.unref();
   }
 
   async stop(): Promise<void> {

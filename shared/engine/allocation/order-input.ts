@@ -28,7 +28,7 @@ function orderSide(side: SideSupply): SideSupply {
 function orderBox(box: BoxVariant): BoxVariant {
   return {
     ...box,
-    lines: box.lines.map((line) => ({ ...line, cutIds: [...line.cutIds].sort() })).sort(by(({ id }) => id)),
+    lines: box.lines.map((line) => ({ ...line, cutIds: [...new Set(line.cutIds)].sort() })).sort(by(({ id }) => id)),
     steps: [...box.steps].sort((a, b) => b.valuePence - a.valuePence || a.boxes - b.boxes),
   };
 }
@@ -65,7 +65,7 @@ export function orderInput(input: AllocationInput): AllocationInput {
     boxes: input.boxes.map(orderBox).sort(by(({ id }) => id)),
     loose: input.loose.map(orderLoose).sort(by(({ cutId }) => cutId)),
     trade: input.trade.map(orderTrade).sort(by(({ id }) => id)),
-    mince: input.mince && { ...input.mince, allowedCutIds: [...input.mince.allowedCutIds].sort() },
+    mince: input.mince && { ...input.mince, allowedCutIds: [...new Set(input.mince.allowedCutIds)].sort() },
     locks: [...input.locks].sort(by((lock) => `${lock.carcaseId}/${lock.side} ${lock.choiceId} ${lock.wayId}`)),
   };
 }
