@@ -4,6 +4,7 @@ import { spawn } from 'node:child_process';
 import { existsSync, mkdirSync, readFileSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import { ensurePostgres, isPostgresInstalled } from './postgres.mjs';
+import { isChromiumInstalled } from './steps/chromium.mjs';
 import { asRoot, installPackages } from './steps/debian-packages.mjs';
 import { ensureDependencies } from './steps/dependencies.mjs';
 import { identify, stopProcess } from './steps/processes.mjs';
@@ -30,7 +31,7 @@ async function ensurePrograms(projects, needsDatabase) {
   // Two solvers of other hands, which the tests of the allocation check ours against.
   if (projects.includes('unit') && !existsSync('/usr/bin/cbc')) missing.push('coinor-cbc');
   if (projects.includes('unit') && !existsSync('/usr/bin/glpsol')) missing.push('glpk-utils');
-  if (projects.includes('browser') && !existsSync('/usr/bin/chromium')) missing.push('chromium');
+  if (projects.includes('browser') && !isChromiumInstalled()) missing.push('chromium');
   const lacksPostgres = needsDatabase && !isPostgresInstalled();
   const all = lacksPostgres ? [...missing, 'postgresql'] : missing;
   // Asked for all of them at once, so that one instruction names everything.

@@ -51,21 +51,23 @@ async function precompress(folder) {
   );
 }
 
+/** The environment of an export: offline, without telemetry, and with nobody at a keyboard. */
+export const exportSettings = () => ({
+  ...process.env,
+  NODE_ENV: 'production',
+  EXPO_PUBLIC_FOLDER: 'assets/public',
+  EXPO_OFFLINE: '1',
+  EXPO_NO_TELEMETRY: '1',
+  CI: '1',
+});
+
 async function build(hash) {
   const fresh = path.join(root, `dist-${process.pid}`);
   const expo = path.join(root, 'node_modules/expo/bin/cli');
-  const env = {
-    ...process.env,
-    NODE_ENV: 'production',
-    EXPO_PUBLIC_FOLDER: 'assets/public',
-    EXPO_OFFLINE: '1',
-    EXPO_NO_TELEMETRY: '1',
-    CI: '1',
-  };
   try {
     await run(process.execPath, [expo, 'export', '-p', 'web', '--output-dir', path.basename(fresh)], {
       log: 'web-app',
-      env,
+      env: exportSettings(),
     });
     await precompress(path.join(fresh, 'client'));
     writeFileSync(path.join(fresh, path.basename(stamp)), hash);
