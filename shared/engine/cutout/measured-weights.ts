@@ -62,9 +62,14 @@ function settle(known: Known, grams: number, scales: Scales): void {
   const parts = divide(known, grams);
   const total = sum([...parts.values()]);
   const isLeaf = node.children.length === 0;
-  const { children: _children, ...shown } = node;
   scales.nodes.push({
-    ...shown,
+    path: node.path,
+    parentPath: node.parentPath,
+    level: node.level,
+    kind: node.kind,
+    name: node.name,
+    cutId: node.cutId,
+    estimatedGrams: node.estimatedGrams,
     grams,
     source: known.firmGrams === null ? 'estimated' : 'weighed',
     weighingDifferenceGrams: isLeaf ? 0 : grams - total,

@@ -29,6 +29,7 @@ const plainFault = (node: string, sentence: string): SpecificationFault => ({
 });
 
 function repeated(ids: readonly string[]): string[] {
+  if (new Set(ids).size === ids.length) return [];
   return [...new Set(ids.filter((id, at) => ids.indexOf(id) !== at))];
 }
 
@@ -44,25 +45,29 @@ function listSideFaults(specification: Specification): SpecificationFault[] {
 function listWayFaults(choice: Choice, way: Way): SpecificationFault[] {
   const node = `${choice.id}/${way.id}`;
   const faults: SpecificationFault[] = [];
-  for (const primalId of choice.primalIds) {
-    for (const tissue of TISSUES) {
-      const sum = way.lines
-        .flatMap((line) => line.takes)
-        .reduce((all, take) => (take.primalId === primalId ? all + take[tissue] : all), 0);
-      faults.push(...sumFault(`${node}/${primalId}/${tissue}`, `${way.name}: ${tissue} of ${primalId}`, [sum, WHOLE]));
+  const sums = new Map(choice.primalIds.map((id) => [id, { meat: 0, fat: 0, bone: 0, loss: 0 }]));
+  for (const line of way.lines) {
+    const seen = new Set<string>();
+    for (const take of line.takes) {
+      const sum = sums.get(take.primalId);
+      if (!sum) faults.push(plainFault(node, `${way.name} takes from ${take.primalId}, which it does not cover.`));
+      else for (const tissue of TISSUES) sum[tissue] += take[tissue];
+      if (seen.has(take.primalId)) {
+        faults.push(plainFault(node, `${way.name}: ${line.id} names ${take.primalId} twice.`));
+      }
+      seen.add(take.primalId);
     }
   }
-  const strangers = way.lines.flatMap((line) => line.takes).filter((take) => !choice.primalIds.includes(take.primalId));
-  for (const { primalId } of strangers) {
-    faults.push(plainFault(node, `${way.name} takes from ${primalId}, which ${choice.name} does not cover.`));
+  for (const [primalId, sum] of sums) {
+    for (const tissue of TISSUES) {
+      if (sum[tissue] === WHOLE) continue;
+      faults.push(
+        ...sumFault(`${node}/${primalId}/${tissue}`, `${way.name}: ${tissue} of ${primalId}`, [sum[tissue], WHOLE]),
+      );
+    }
   }
   for (const id of repeated(way.lines.map((line) => line.id))) {
     faults.push(plainFault(node, `${way.name} names ${id} twice.`));
-  }
-  for (const line of way.lines) {
-    if (repeated(line.takes.map((take) => take.primalId)).length > 0) {
-      faults.push(plainFault(node, `${way.name}: ${line.id} names a primal twice.`));
-    }
   }
   return faults;
 }

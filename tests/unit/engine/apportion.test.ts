@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { expect, test } from 'vitest';
 import { apportion } from '#shared/engine/apportion.ts';
 import { divideHalfAway, roundHalfAway, scale } from '#shared/engine/rounding.ts';
