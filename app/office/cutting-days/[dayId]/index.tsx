@@ -1,0 +1,116 @@
+import { useLocalSearchParams } from 'expo-router';
+import { useState } from 'react';
+import { View } from 'react-native';
+import { BookingForm, type Booking } from '#components/carcases/booking-form.tsx';
+import { CarcaseTable } from '#components/carcases/carcase-table.tsx';
+import { CloseDay } from '#components/carcases/close-day.tsx';
+import { DayPlaces } from '#components/office/day-places.tsx';
+import { css } from '#components/theme/css.ts';
+import { ButtonLink } from '#components/ui/button-link.tsx';
+import { Heading } from '#components/ui/heading.tsx';
+import { Notice } from '#components/ui/notice.tsx';
+import { ProblemNotice } from '#components/ui/problem-notice.tsx';
+import { Skeleton } from '#components/ui/skeleton.tsx';
+import { StateView } from '#components/ui/state-view.tsx';
+import { Text } from '#components/ui/text.tsx';
+import { TitleBar } from '#components/ui/title-bar.tsx';
+import { useBookCarcases, useCloseCuttingDay, useCuttingDay } from '#hooks/carcases.ts';
+import { useAnimals } from '#hooks/herd.ts';
+import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
+import { useTitle } from '#hooks/use-title.ts';
+import type { CuttingDay } from '#shared/contracts/carcases.ts';
+import type { Animal } from '#shared/contracts/herd.ts';
+import { formatEarTag } from '#shared/domain/ear-tag.ts';
+import { formatCount, formatDay, formatDayTime, formatKilograms } from '#shared/domain/words.ts';
+
+const loadSchema = async () => (await import('#shared/contracts/carcases-schema.ts')).bookCarcasesSchema.body;
+
+export default function CuttingDayScreen() {
+  const { dayId } = useLocalSearchParams<{ dayId: string }>();
+  const day = useCuttingDay(dayId);
+  return (
+    <StateView
+      query={day}
+      what="this cutting day"
+      waiting={<Skeleton shape="rows" count={4} />}
+      missing={{ title: 'No such cutting day', words: 'Look for it in the list of cutting days.' }}
+    >
+      {(data) => <Ready day={data} />}
+    </StateView>
+  );
+}
+
+function Ready({ day }: { day: CuttingDay }) {
+  const close = useCloseCuttingDay();
+  // Counts up so that the booking form starts afresh after a booking.
+  const [booked, setBooked] = useState(0);
+  const isClosed = day.state === 'closed';
+  useTitle(`Cutting day ${formatDay(day.day)}`);
+  const closeDay = () => close.mutateAsync({ params: { dayId: day.id }, body: { version: day.version } });
+  return (
+    <View style={css('w-stack-l')}>
+      <TitleBar
+        title={formatDay(day.day)}
+        above={`Cutting day · ${day.state} · ${formatCount(day.carcases.length, 'carcase')} · ${formatKilograms(day.coldGrams)} cold · ${formatCount(day.orders, 'order')}`}
+        actions={<ButtonLink href={`/office/cutting-days/${day.id}/allocation`} label="Allocation" />}
+      />
+      <DayPlaces dayId={day.id} role="owner" path={`/office/cutting-days/${day.id}`} />
+      <Text tone="quiet">{`Orders until ${formatDayTime(day.cutOffAt)}. Cut by “${day.specificationName}”.`}</Text>
+      <CarcaseTable carcases={day.carcases} />
+      {isClosed ? (
+        <Notice kind="info" title="This day is closed." kept="Its weights, orders and plan stay as they are." />
+      ) : (
+        <>
+          <View style={css('w-stack')}>
+            <Heading level={2}>Book animals</Heading>
+            <Book key={booked} day={day} onBooked={() => setBooked(booked + 1)} />
+          </View>
+          <CloseDay busy={close.isPending} onClose={closeDay} error={close.error} />
+        </>
+      )}
+    </View>
+  );
+}
+
+function Book({ day, onBooked }: { day: CuttingDay; onBooked: () => void }) {
+  const animals = useAnimals();
+  const book = useBookCarcases();
+  const form = useContractForm<Booking>(loadSchema, { animalIds: [], killDay: '', cuttingDayId: day.id });
+  const submit = sendForm(form, async (body) => {
+    await book.mutateAsync({ body });
+    onBooked();
+  });
+  return (
+    <StateView query={animals} what="the herd">
+      {(data) => (
+        <View style={css('w-stack')}>
+          <BookingForm
+            control={form.control}
+            animals={choicesOf(data.animals)}
+            latestKillDay={day.day}
+            onSubmit={submit}
+            busy={book.isPending}
+          />
+          <ProblemNotice error={book.error} title="Nothing was booked." />
+        </View>
+      )}
+    </StateView>
+  );
+}
+
+/** Animals in the field, the oldest first: they are the nearest to being ready. */
+function choicesOf(animals: readonly Animal[]) {
+  return animals
+    .filter((animal) => !animal.carcase)
+    .toSorted((a, b) => a.born.localeCompare(b.born))
+    .map((animal) => ({
+      id: animal.id,
+      label: formatEarTag(animal.earTag),
+      note: [
+        `${animal.breed} ${animal.sex}`,
+        formatCount(animal.ageMonths, 'month'),
+        animal.liveGrams === null ? 'not weighed' : `${formatKilograms(animal.liveGrams)} live`,
+        ...(animal.withdrawalClearDay ? [`withdrawal to ${formatDay(animal.withdrawalClearDay)}`] : []),
+      ].join(', '),
+    }));
+}

@@ -1,0 +1,58 @@
+import { router } from 'expo-router';
+import { View } from 'react-native';
+import { NewDayForm } from '#components/carcases/new-day-form.tsx';
+import { css } from '#components/theme/css.ts';
+import { ProblemNotice } from '#components/ui/problem-notice.tsx';
+import { StateView } from '#components/ui/state-view.tsx';
+import { TextLink } from '#components/ui/text-link.tsx';
+import { TitleBar } from '#components/ui/title-bar.tsx';
+import { useAddCuttingDay, useCollectionPoints, useSpecifications } from '#hooks/carcases.ts';
+import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
+import { useTitle } from '#hooks/use-title.ts';
+import type { NewCuttingDay } from '#shared/contracts/carcases.ts';
+
+const loadSchema = async () => (await import('#shared/contracts/carcases-schema.ts')).NewCuttingDay;
+
+export default function NewCuttingDayScreen() {
+  const specifications = useSpecifications();
+  const points = useCollectionPoints();
+  const add = useAddCuttingDay();
+  const form = useContractForm<NewCuttingDay>(loadSchema, {
+    day: '',
+    cutOffDay: '',
+    cutOffTime: '18:00',
+    specificationId: '',
+    collections: [],
+  });
+  useTitle('Plan a cutting day');
+  const submit = sendForm(form, async (body) => {
+    const day = await add.mutateAsync(body);
+    router.push(`/office/cutting-days/${day.id}`);
+  });
+  return (
+    <View style={css('w-stack-l')}>
+      <View>
+        <TextLink href="/office/cutting-days" place="alone" icon="back">
+          Cutting days
+        </TextLink>
+        <TitleBar title="Plan a cutting day" />
+      </View>
+      <StateView query={specifications} what="the cutting specifications">
+        {({ specifications: list }) => (
+          <StateView query={points} what="the collection points">
+            {({ points: places }) => (
+              <NewDayForm
+                control={form.control}
+                specifications={list}
+                points={places}
+                onSubmit={submit}
+                busy={add.isPending}
+              />
+            )}
+          </StateView>
+        )}
+      </StateView>
+      <ProblemNotice error={add.error} title="The day was not planned." />
+    </View>
+  );
+}
