@@ -11,6 +11,7 @@ const frame = `
 :root .rail-primal{display:flex;flex-direction:column;align-items:stretch;flex:1 1 0;min-width:0;padding:0;margin:0;border:0;background:none;cursor:pointer;container-type:inline-size;font-size:.75rem;touch-action:manipulation}
 :root .rail-bar{display:flex;flex-direction:column;height:62px;background:var(--page);position:relative;overflow:hidden;print-color-adjust:exact;forced-color-adjust:none}
 :root .rail-tall .rail-bar{height:96px}
+@container rail (min-width:760px){:root .rail-tall .rail-bar{height:132px}}
 :root .rail-sold{background:var(--sold);flex:none}
 :root .rail-held{background:${hatch('var(--held)', 'var(--heldHatch)')};flex:none}
 :root .rail-free{background:var(--free);flex:1 0 0;box-shadow:inset 0 0 0 1px var(--freeEdge)}
@@ -19,7 +20,7 @@ const frame = `
 :root .rail-primal:focus-visible{outline-offset:1px;z-index:2}
 :root .rail-chosen .rail-bar{box-shadow:0 0 0 3px var(--text)}
 :root .rail-chosen{z-index:1}
-:root .rail-label{height:1.35em;margin-top:5px;line-height:1.35;font-size:1em;color:var(--quiet);text-align:center;white-space:nowrap;overflow:visible;display:flex;flex-direction:row;justify-content:center}
+:root .rail-label{font-family:'Public Sans','Public Sans stand-in',system-ui,sans-serif;height:1.35em;margin-top:5px;line-height:1.35;font-size:1em;color:var(--quiet);text-align:center;white-space:nowrap;overflow:visible;display:flex;flex-direction:row;justify-content:center}
 :root .rail-chosen .rail-label{color:var(--text);font-weight:700}
 :root .rail-label>span{display:none}
 `;

@@ -1,7 +1,7 @@
 const marks = `
 :root .w-hook{display:block;flex:none;align-self:center;width:8px;height:6px;margin-top:9px;margin-bottom:2px;box-sizing:border-box;border:2px solid var(--text);border-top:0;border-radius:0 0 5px 5px;position:relative;print-color-adjust:exact}
 :root .w-hook::before{content:'';position:absolute;right:-2px;bottom:3px;width:2px;height:11px;background:var(--text)}
-:root .w-badge{display:inline-flex;flex-direction:row;align-items:center;gap:7px;font-size:.875rem;line-height:1.45;font-weight:600;color:var(--text);white-space:nowrap}
+:root .w-badge{display:inline-flex;flex-direction:row;align-items:center;gap:7px;font-family:'Public Sans','Public Sans stand-in',system-ui,sans-serif;font-size:.875rem;line-height:1.45;font-weight:600;font-variant-numeric:tabular-nums lining-nums;color:var(--text);white-space:nowrap}
 :root .w-badge::before{content:'';flex:none;width:11px;height:11px;box-sizing:border-box;print-color-adjust:exact;forced-color-adjust:none}
 :root .w-badge-free{color:var(--good)}
 :root .w-badge-free::before{background:var(--free);border:1.5px solid var(--freeEdge)}
@@ -52,6 +52,8 @@ const tables = `
 :root .w-definition-strong dt,:root .w-definition-strong dd{color:var(--text);font-weight:700}
 :root .w-definitions-ruled{gap:0;border-top:1px solid var(--line)}
 :root .w-definitions-ruled>.w-definition{border-bottom:1px solid var(--line);padding-block:12px}
+:root .w-definitions-facts>.w-definition{display:grid;grid-template-columns:minmax(6.5rem,9rem) minmax(0,1fr)}
+:root .w-definitions-facts dd{text-align:start;margin:0}
 :root .w-definitions-ruled dt{color:var(--text);font-weight:600}
 `;
 

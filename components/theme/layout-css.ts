@@ -22,15 +22,15 @@ const responsive = `
 :root .w-tiles{display:grid;grid-template-columns:repeat(auto-fill,minmax(min(100%,16rem),1fr));gap:24px}
 :root .w-fields{display:grid;grid-template-columns:repeat(auto-fit,minmax(min(100%,13rem),1fr));gap:16px 20px;align-items:start}
 :root .w-buttons{display:flex;flex-direction:column;gap:12px;align-items:stretch}
-:root .w-only-wide{display:none}
+:root .w-only-wide.w-only-wide{display:none}
 @media (min-width:760px){
 :root .w-page{padding-inline:32px}
 :root .w-main{padding-block:28px 72px}
 :root .w-columns{grid-template-columns:minmax(0,1fr) minmax(0,1fr);gap:48px}
 :root .w-columns-side{grid-template-columns:minmax(0,2fr) minmax(0,1fr)}
 :root .w-buttons{flex-direction:row;flex-wrap:wrap;align-items:center}
-:root .w-only-narrow{display:none}
-:root .w-only-wide{display:flex}
+:root .w-only-narrow.w-only-narrow{display:none}
+:root .w-only-wide.w-only-wide{display:flex}
 }
 @media (min-width:760px) and (max-width:999.98px){:root .w-columns-office{grid-template-columns:minmax(0,1fr)}}
 @media (min-width:1000px){:root .w-columns-office{grid-template-columns:minmax(0,1fr) 18rem;gap:36px}}

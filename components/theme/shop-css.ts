@@ -22,9 +22,10 @@ const hero = `
 :root .w-hero{display:flex;flex-direction:column;gap:10px;min-width:0}
 :root .w-sections{display:flex;flex-direction:column;gap:48px;min-width:0}
 :root .w-section{display:flex;flex-direction:column;gap:14px;min-width:0}
+:root .w-hero+.rail{margin-top:8px}
 :root .w-prose{display:flex;flex-direction:column;gap:12px;max-width:38rem}
 :root .w-steps{display:grid;grid-template-columns:minmax(0,1fr);gap:24px 48px;margin:0;padding:0;list-style:none}
-:root .w-step{display:grid;grid-template-columns:72px minmax(0,1fr);gap:4px 16px;align-items:start}
+:root .w-step{display:grid;grid-template-columns:72px minmax(0,1fr);gap:4px 16px;align-items:start;align-content:start}
 :root .w-step-words{display:flex;flex-direction:column;gap:4px;min-width:0}
 @media (min-width:760px){
 :root .w-sections{gap:72px}
@@ -45,6 +46,7 @@ const box = `
 `;
 
 const choices = `
+:root .w-label-chips{padding-bottom:8px}
 :root .w-chips{display:flex;flex-direction:row;flex-wrap:wrap;gap:8px;border:0;margin:0;padding:0;min-width:0}
 :root .w-chip{display:inline-flex;align-items:center;min-height:44px;padding:6px 14px;box-sizing:border-box;border:1.5px solid var(--edge);border-radius:3px;color:var(--text);font-size:1rem;line-height:1.25;cursor:pointer;position:relative;font-variant-numeric:tabular-nums lining-nums}
 :root .w-chip input{position:absolute;inset:0;opacity:0;margin:0;width:100%;height:100%;cursor:pointer}

@@ -13,9 +13,10 @@ body{margin:0;background:var(--page);color:var(--text);font:400 1rem/1.5 'Public
 const sans = `font-family:'Public Sans','Public Sans stand-in',system-ui,sans-serif`;
 const clarendon = `font-family:'Besley','Besley stand-in',Georgia,serif`;
 
+// Besley's noughts of one width are drawn light in every weight: prices take its ordinary figures.
 const type = `
 :root .t-text{${sans};font-weight:400;font-size:1rem;line-height:1.5;color:var(--text);margin:0}
-:root .t-lead{font-size:1.125rem;line-height:1.5}
+:root .t-lead{font-size:1.125rem;line-height:1.5;text-wrap:pretty}
 :root .t-small{font-size:.875rem;line-height:1.45}
 :root .t-tiny{font-size:.75rem;line-height:1.35}
 :root .t-strong{font-weight:600}
@@ -36,7 +37,7 @@ const type = `
 :root .t-section{${clarendon};font-weight:700;font-size:1.375rem;line-height:1.2;color:var(--text);margin:0}
 :root .t-item{${clarendon};font-weight:700;font-size:1.25rem;line-height:1.25;color:var(--text);margin:0}
 :root .t-sub{${sans};font-weight:700;font-size:1.0625rem;line-height:1.35;color:var(--text);margin:0}
-:root .t-price{${clarendon};font-weight:700;font-size:1.375rem;line-height:1.2;color:var(--text);font-variant-numeric:tabular-nums lining-nums;white-space:nowrap}
+:root .t-price{${clarendon};font-weight:700;font-size:1.375rem;line-height:1.2;color:var(--text);font-variant-numeric:lining-nums;white-space:nowrap}
 :root .t-price-large{font-size:1.875rem;line-height:1.15}
 :root .t-mark{${clarendon};font-weight:700;font-size:1.25rem;line-height:1.2;color:var(--text);letter-spacing:-.005em}
 @media (min-width:760px){

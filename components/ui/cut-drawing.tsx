@@ -44,3 +44,12 @@ export function CutDrawing({ kind, size = 64 }: { kind: CutDrawingKind; size?: n
     </svg>
   );
 }
+
+/** The drawing for a way of cooking; what has no drawing of its own is shown as a braise. */
+export function drawingOf(cooking: string): CutDrawingKind {
+  return isDrawn(cooking) ? cooking : 'braise';
+}
+
+function isDrawn(cooking: string): cooking is CutDrawingKind {
+  return cooking in shapes;
+}

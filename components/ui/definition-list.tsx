@@ -8,10 +8,18 @@ export type Definition = {
   strong?: boolean;
 };
 
+type DefinitionListProps = {
+  items: readonly Definition[];
+  ruled?: boolean;
+  /** Values in words rather than figures: they start in a column of their own. */
+  facts?: boolean;
+};
+
 /** Pairs of a word and its figure, one under the other: totals, the facts of an animal. */
-export function DefinitionList({ items, ruled = false }: { items: readonly Definition[]; ruled?: boolean }) {
+export function DefinitionList({ items, ruled = false, facts = false }: DefinitionListProps) {
+  const look = ['w-definitions', ruled && 'w-definitions-ruled', facts && 'w-definitions-facts'];
   return (
-    <dl className={ruled ? 'w-definitions w-definitions-ruled' : 'w-definitions'}>
+    <dl className={look.filter(Boolean).join(' ')}>
       {items.map((item) => (
         <div key={item.term} className={item.strong ? 'w-definition w-definition-strong' : 'w-definition'}>
           <dt>

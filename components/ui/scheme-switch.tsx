@@ -1,8 +1,8 @@
 import { useTheme, type SchemeChoice } from '#components/theme/use-theme.ts';
-import { RadioGroup } from './radio-group.tsx';
+import { ChipGroup } from './chip-group.tsx';
 
 const choices = [
-  { value: 'device', label: 'As the device' },
+  { value: 'device', label: 'As device' },
   { value: 'light', label: 'Light' },
   { value: 'dark', label: 'Dark' },
 ] as const satisfies { value: SchemeChoice; label: string }[];
@@ -11,10 +11,10 @@ const choices = [
 export function SchemeSwitch() {
   const { choice, choose } = useTheme();
   return (
-    <RadioGroup
+    <ChipGroup
       label="Light or dark"
       value={choice}
-      choices={choices}
+      chips={choices}
       onChange={(value) => {
         const chosen = choices.find((one) => one.value === value);
         if (chosen) choose(chosen.value);

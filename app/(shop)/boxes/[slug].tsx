@@ -1,0 +1,104 @@
+import { useLoaderData, useLocalSearchParams } from 'expo-router';
+import type { GenerateMetadataFunction, LoaderFunction } from 'expo-server';
+import { useState } from 'react';
+import { View } from 'react-native';
+import { BoxBuy } from '#components/boxes/box-buy.tsx';
+import { BoxContents } from '#components/boxes/box-contents.tsx';
+import { BoxHead } from '#components/boxes/box-head.tsx';
+import { BoxJsonLd } from '#components/boxes/box-json-ld.tsx';
+import { BoxWaiting } from '#components/boxes/box-waiting.tsx';
+import { DistanceFacts } from '#components/shop/distance-facts.tsx';
+import { KeepingAdvice } from '#components/shop/keeping-advice.tsx';
+import { LoadedView } from '#components/shop/loaded-view.tsx';
+import { ShopPage } from '#components/shop/shop-page.tsx';
+import { css } from '#components/theme/css.ts';
+import { ButtonLink } from '#components/ui/button-link.tsx';
+import { loadFarm, type Farm } from '#hooks/farm.ts';
+import { load, type Loaded } from '#hooks/loaded.ts';
+import { pageMetadata } from '#hooks/page-metadata.ts';
+import { useBox } from '#hooks/shop.ts';
+import { chooseDay, quantityOf, setQuantity, useBasket } from '#hooks/use-basket.ts';
+import { useTitle } from '#hooks/use-title.ts';
+import { getBox, type Box } from '#shared/contracts/shop.ts';
+import { formatMoney, formatWeight } from '#shared/domain/words.ts';
+
+type Page = { farm: Farm | null; box: Loaded<Box> };
+
+export const generateMetadata: GenerateMetadataFunction = async (request, params) => {
+  const box = await load(getBox, { params: { slug: String(params.slug) } });
+  if (box.state !== 'ready') return pageMetadata(request, { title: 'There is no such box', hidden: true });
+  return pageMetadata(request, { title: titleOf(box.data), description: describe(box.data) });
+};
+
+export const loader: LoaderFunction<Page> = async (_request, params) => {
+  const [farm, box] = await Promise.all([loadFarm(), load(getBox, { params: { slug: String(params.slug) } })]);
+  return { farm, box };
+};
+
+function titleOf(box: Box): string {
+  return `${box.name} · ${formatWeight(box.guaranteedGrams)} of beef for ${formatMoney(box.pricePence)}`;
+}
+
+function describe(box: Box): string {
+  return `${box.summary}. At least ${formatWeight(box.guaranteedGrams)}, about ${box.servings} servings, from our own cattle. Collect at your time.`;
+}
+
+export default function BoxScreen() {
+  const { slug } = useLocalSearchParams<{ slug: string }>();
+  const page = useLoaderData<typeof loader>();
+  const query = useBox(slug, page.box);
+  useTitle(query.data && titleOf(query.data));
+  return (
+    <ShopPage farm={page.farm}>
+      <LoadedView
+        loaded={page.box}
+        query={query}
+        what="this box"
+        waiting={<BoxWaiting />}
+        missing={{
+          title: 'There is no such box',
+          words: 'It may have been taken off the counter. What is coming stands on the first page.',
+          children: <ButtonLink href="/" label="See the boxes" />,
+        }}
+      >
+        {(box) => <BoxPage box={box} farm={page.farm} />}
+      </LoadedView>
+    </ShopPage>
+  );
+}
+
+function BoxPage({ box, farm }: { box: Box; farm: Farm | null }) {
+  const basket = useBasket();
+  const [chosenId, setChosenId] = useState<string>();
+  const open = box.days.filter((day) => day.isInTime);
+  const firstFree = open.find((day) => box.offers.some((offer) => offer.dayId === day.id && offer.free > 0));
+  const basketDay = basket.items.length > 0 ? open.find((day) => day.id === basket.dayId) : undefined;
+  const dayId = chosenId ?? (basketDay ?? firstFree ?? open[0])?.id;
+  const item = { kind: 'box' as const, productId: box.slug, name: box.name };
+  return (
+    <View style={css('w-sections')}>
+      <View style={css('w-columns', 'w-columns-side')}>
+        <View style={css('w-section')}>
+          <BoxHead box={box} />
+          <BoxContents lines={box.lines} />
+        </View>
+        <View style={css('w-stay')}>
+          <BoxBuy
+            box={box}
+            dayId={dayId}
+            onDay={setChosenId}
+            quantity={basket.dayId === dayId ? quantityOf(basket, item) : 0}
+            onQuantity={(quantity) => {
+              if (dayId) chooseDay(dayId);
+              setQuantity(item, quantity);
+            }}
+            movesFrom={basketDay && basketDay.id !== dayId ? basketDay.day : undefined}
+          />
+        </View>
+      </View>
+      <KeepingAdvice />
+      <DistanceFacts seller={farm ? [farm.businessName, ...farm.addressLines].join(', ') : undefined} />
+      <BoxJsonLd box={box} farmName={farm?.name ?? box.name} />
+    </View>
+  );
+}

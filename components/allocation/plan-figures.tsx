@@ -1,0 +1,24 @@
+import { DefinitionList } from '#components/ui/definition-list.tsx';
+import { Money } from '#components/ui/money.tsx';
+import type { Allocation } from '#shared/contracts/allocation.ts';
+import { formatMoney, formatRate, formatWeight } from '#shared/domain/words.ts';
+import { gainTenthPencePerKg, leftOverGrams } from './plan-words.ts';
+
+/** What the plan is worth, beside what the same carcases would bring sold deadweight. */
+export function PlanFigures({ plan }: { plan: Allocation }) {
+  return (
+    <DefinitionList
+      items={[
+        { term: 'Contribution', value: <Money pence={plan.contributionPence} look="price" /> },
+        { term: 'Sold deadweight', value: formatMoney(plan.deadweightPence) },
+        { term: 'Gain on deadweight', value: formatRate(gainTenthPencePerKg(plan)), note: 'per kg of cold weight' },
+        { term: 'Left over', value: formatWeight(leftOverGrams(plan)) },
+        {
+          term: plan.isProven ? 'Proven within' : 'Best so far, within',
+          value: `${(plan.gapBasisPoints / 100).toFixed(2)} %`,
+        },
+        { term: 'Worked out in', value: `${(plan.solveMs / 1000).toFixed(1)} s` },
+      ]}
+    />
+  );
+}

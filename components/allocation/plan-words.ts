@@ -1,0 +1,41 @@
+import type { Allocation, PlannedSide } from '#shared/contracts/allocation.ts';
+import { shortEarTag } from '#shared/domain/ear-tag.ts';
+import { ratePerKg } from '#shared/domain/money.ts';
+import { formatCount, formatDay, formatKilograms, formatMoney } from '#shared/domain/words.ts';
+
+/** `Angus steer 00214, left`. */
+export function nameSide({ title, earTag, side }: Pick<PlannedSide, 'title' | 'earTag' | 'side'>): string {
+  return `${title} ${shortEarTag(earTag)}, ${side}`;
+}
+
+/** `Cutting day Thu 10 Dec · 2 carcases · 640 kg cold · 448 kg of product`. */
+export function describePlan(plan: Pick<Allocation, 'day' | 'sides' | 'coldGrams' | 'productGrams'>): string {
+  const carcases = new Set(plan.sides.map((side) => side.carcaseId)).size;
+  return [
+    `Cutting day ${formatDay(plan.day)}`,
+    formatCount(carcases, 'carcase'),
+    `${formatKilograms(plan.coldGrams)} cold`,
+    `${formatKilograms(plan.productGrams)} of product`,
+  ].join(' · ');
+}
+
+/** What the plan brings beyond selling the carcases deadweight, in tenths of a penny per kg of cold weight. */
+export function gainTenthPencePerKg(
+  plan: Pick<Allocation, 'contributionPence' | 'deadweightPence' | 'coldGrams'>,
+): number {
+  return plan.coldGrams === 0 ? 0 : ratePerKg(plan.contributionPence - plan.deadweightPence, plan.coldGrams);
+}
+
+export function leftOverGrams(plan: Pick<Allocation, 'cuts'>): number {
+  return plan.cuts.reduce((sum, cut) => sum + cut.leftGrams, 0);
+}
+
+export function boxCount(plan: Pick<Allocation, 'boxes'>): number {
+  return plan.boxes.reduce((sum, box) => sum + box.count, 0);
+}
+
+/** `+ £41.20`, `− £18.60`, `no difference`. */
+export function signedMoney(pence: number): string {
+  if (pence === 0) return 'no difference';
+  return `${pence > 0 ? '+' : '−'} ${formatMoney(Math.abs(pence))}`;
+}
