@@ -17,7 +17,7 @@ export type IntentDetails = {
 export type Payer = { email: string | null; name: string | null };
 
 /** What the page says about the last try: the sentence, and the field it belongs to. */
-export type PaymentProblem = { field: string; message: string };
+type PaymentProblem = { field: string; message: string };
 
 export type CheckoutRecord = {
   session: Stripe.Checkout.Session;
@@ -38,7 +38,7 @@ export type KeptAnswer = { endpoint: string; fingerprint: string; status: number
 export type Delivery = { id: string; eventId: string; attempts: number; dueAt: number; isGivenUp: boolean };
 
 /** Every table is kept oldest first. */
-export type Tables = {
+type Tables = {
   checkouts: Map<string, CheckoutRecord>;
   intents: Map<string, IntentRecord>;
   charges: Map<string, Stripe.Charge>;

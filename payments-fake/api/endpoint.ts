@@ -7,7 +7,7 @@ import { findKeptAnswer, keepAnswer, type KeyedRequest } from './idempotency.ts'
 import { Params } from './params.ts';
 
 /** `id` is the one in the address, or empty. */
-export type Call = { params: Params; id: string };
+type Call = { params: Params; id: string };
 export type Handler = (call: Call) => object;
 
 type Answer = Pick<KeptAnswer, 'status' | 'body'>;

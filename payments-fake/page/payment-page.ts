@@ -5,7 +5,7 @@ import { testCards } from '../test-cards.ts';
 import type { FieldErrors, FieldName, Typed } from './card-form.ts';
 import { type Html, html } from './html.ts';
 
-export function price(amount: number | null, currency: string | null): string {
+function price(amount: number | null, currency: string | null): string {
   const format = new Intl.NumberFormat('en-GB', { style: 'currency', currency: currency ?? 'gbp' });
   return format.format((amount ?? 0) / 100);
 }

@@ -13,7 +13,7 @@ export type Attempt = {
 };
 
 /** What a card without a decline of its own is refused for when the cardholder fails to prove who they are. */
-export const failedAuthentication: Decline = {
+const failedAuthentication: Decline = {
   code: 'payment_intent_authentication_failure',
   declineCode: '',
   message: 'We are unable to authenticate your payment method. Please choose a different payment method and try again.',

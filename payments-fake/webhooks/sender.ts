@@ -68,7 +68,7 @@ function waitingIn({ store, settings }: SenderOptions): Delivery[] {
 export function createSender(options: SenderOptions): Sender {
   const { store, settings } = options;
   const stopping = new AbortController();
-  let timer: NodeJS.Timeout | undefined;
+  let timer: ReturnType<typeof setTimeout> | undefined;
   let work: Promise<unknown> = Promise.resolve();
 
   // What an earlier run did not deliver starts afresh.

@@ -9,7 +9,7 @@ export const SECRET_KEY = 'sk_test_of_these_tests';
 export type Received = { body: string; signature: string };
 
 /** A webhook address that answers as it is told and keeps what it got. */
-export async function startReceiver() {
+async function startReceiver() {
   const received: Received[] = [];
   const answers: number[] = [];
   const waiting: (() => void)[] = [];
