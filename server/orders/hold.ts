@@ -1,0 +1,66 @@
+import type { BasketLine } from '#shared/contracts/orders.ts';
+import { formatDayTime } from '#shared/domain/words.ts';
+import { AppError } from '#shared/errors.ts';
+import type { Tx } from '#server/deps.ts';
+import { getProducts, mergeLines, outOfStock, type Product } from './basket.ts';
+import { findSlot, freeHeld, freeSlot, freeSold, sellHeld, takeFree, takeSlot } from './stock-queries.ts';
+
+export type HoldRequest = { day: { id: string; day: string }; lines: readonly BasketLine[]; slotId: string };
+export type HeldLine = Product & { quantity: number };
+
+/** Takes every line and the slot, or throws and, with the transaction, takes nothing. */
+export async function take(tx: Tx, request: HoldRequest, into: 'held' | 'sold'): Promise<HeldLine[]> {
+  const { day, slotId } = request;
+  const lines = mergeLines(request.lines);
+  const taken = new Set<string>();
+  for (const line of lines) {
+    if (!(await takeFree(tx, line, { dayId: day.id, into }))) break;
+    taken.add(line.offerId);
+  }
+  const products = await getProducts(tx, day.id, request.lines);
+  const wanted = lines.flatMap((line) => {
+    const product = products.get(line.offerId);
+    return product ? [{ ...product, quantity: line.quantity }] : [];
+  });
+  const missing = wanted.filter((line) => !taken.has(line.offerId));
+  if (missing.length > 0) {
+    const short = missing.filter((line) => line.free < line.quantity);
+    if (short.length > 0) throw outOfStock(day, request.lines, short);
+    throw new AppError('STATE_CHANGED', 'Stock moved at this very moment. Nothing was taken; please press again.');
+  }
+  if (!(await takeSlot(tx, slotId, day.id))) throw await slotRefusal(tx, request);
+  return wanted;
+}
+
+async function slotRefusal(tx: Tx, { day, slotId }: HoldRequest): Promise<AppError> {
+  const slot = await findSlot(tx, slotId);
+  if (slot?.cuttingDayId !== day.id) {
+    return new AppError('INVALID_INPUT', 'Choose a collection time of this cutting day. Nothing was taken.', {
+      fields: { slotId: 'This time belongs to another day.' },
+    });
+  }
+  return new AppError(
+    'SLOT_FULL',
+    `The time on ${formatDayTime(slot.startsAt)} has just filled up. Nothing was taken; please choose another time.`,
+    { fields: { slotId: 'This time is full.' }, figures: { left: 0 } },
+  );
+}
+
+export type Taken = { lines: readonly BasketLine[]; slotId: string };
+
+/** Gives back what an open checkout held. */
+export async function release(tx: Tx, { lines, slotId }: Taken): Promise<void> {
+  for (const line of mergeLines(lines)) await freeHeld(tx, line);
+  await freeSlot(tx, slotId);
+}
+
+/** Gives back what was paid for. */
+export async function unsell(tx: Tx, { lines, slotId }: Taken): Promise<void> {
+  for (const line of mergeLines(lines)) await freeSold(tx, line);
+  await freeSlot(tx, slotId);
+}
+
+/** The slot stays as it is: it was counted when the order went to payment. */
+export async function sell(tx: Tx, lines: readonly BasketLine[]): Promise<void> {
+  for (const line of mergeLines(lines)) await sellHeld(tx, line);
+}

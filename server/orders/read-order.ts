@@ -1,0 +1,122 @@
+import type { Order, OrderSummary } from '#shared/contracts/orders.ts';
+import { calendarFile } from '#shared/domain/calendar-file.ts';
+import { AppError } from '#shared/errors.ts';
+import type { Db, Deps, Tx } from '#server/deps.ts';
+import { getFarm } from '#server/farm/farm-queries.ts';
+import type { OrderFacts } from '#server/mail/order-facts.ts';
+import { listPayments } from '#server/payments/payment-queries.ts';
+import {
+  findOrder,
+  getCollection,
+  listLines,
+  listOrderPacks,
+  listOrderRows,
+  type LineRow,
+  type OrderFilter,
+  type OrderRow,
+} from './order-queries.ts';
+import { findDay } from './stock-queries.ts';
+
+export function noSuchOrder(): AppError {
+  return new AppError('NOT_FOUND', 'There is no such order. Please open the link from your mail once more.');
+}
+
+export async function getOrderByToken(db: Db, token: string): Promise<OrderRow> {
+  const order = await findOrder(db, { token });
+  if (!order) throw noSuchOrder();
+  return order;
+}
+
+export async function readOrder(deps: Deps, token: string): Promise<Order> {
+  const order = await getOrderByToken(deps.db, token);
+  const [lines, collection, packs, payments, day] = await Promise.all([
+    listLines(deps.db, order.id),
+    getCollection(deps.db, order.slotId),
+    listOrderPacks(deps.db, order.id),
+    listPayments(deps.db, order.id),
+    getDay(deps.db, order.cuttingDayId),
+  ]);
+  const now = deps.clock.now();
+  const isOpen = order.isHeld && order.sessionExpiresAt !== null && now < order.sessionExpiresAt;
+  const { orderNo, state, paymentState, name, email, note, totalPence } = order;
+  return {
+    ...{ orderNo, token, state, paymentState, name, email, note, totalPence },
+    paymentUrl: isOpen ? order.sessionUrl : null,
+    paymentExpiresAt: isOpen ? (order.sessionExpiresAt?.toISOString() ?? null) : null,
+    day: day.day,
+    cutOffAt: day.cutOffAt.toISOString(),
+    canCancel: order.state === 'confirmed' && now < day.cutOffAt,
+    lines: lines.map(viewLine),
+    refundedPence: payments
+      .filter((row) => row.kind === 'refund' && row.state === 'done')
+      .reduce((sum, row) => sum + row.amountPence, 0),
+    collection: {
+      ...collection,
+      startsAt: collection.startsAt.toISOString(),
+      endsAt: collection.endsAt.toISOString(),
+    },
+    packs: packs.map(({ code, cut, grams, line, quantity, copy }) => ({
+      ...{ code, cut, grams },
+      box: quantity > 1 ? `${line}, ${copy} of ${quantity}` : line,
+    })),
+  };
+}
+
+function viewLine(line: LineRow): Order['lines'][number] {
+  const isBox = line.kind === 'box';
+  return {
+    name: line.name,
+    kind: isBox ? 'box' : 'loose',
+    quantity: line.quantity,
+    unitPricePence: line.unitPricePence,
+    linePence: line.quantity * line.unitPricePence,
+    unitGrams: (isBox ? line.boxGrams : line.upperGrams) ?? 0,
+  };
+}
+
+export async function getDay(db: Db | Tx, dayId: string) {
+  const day = await findDay(db, dayId);
+  if (!day) throw new Error(`The cutting day ${dayId} has gone.`);
+  return day;
+}
+
+export async function readSummaries(db: Db | Tx, filter: OrderFilter): Promise<OrderSummary[]> {
+  const rows = await listOrderRows(db, filter);
+  return rows.map((row) => ({ ...row, startsAt: row.startsAt.toISOString() }));
+}
+
+/** What the mails and the calendar tell of an order. */
+export async function readOrderFacts(deps: Deps, db: Db | Tx, order: OrderRow): Promise<OrderFacts> {
+  const farm = await getFarm(db);
+  const day = await getDay(db, order.cuttingDayId);
+  const lines = await listLines(db, order.id);
+  const { name, businessName, email, phone } = farm;
+  return {
+    farm: { name, businessName, email, phone },
+    orderId: order.id,
+    orderNo: order.orderNo,
+    name: order.name,
+    url: `${deps.origin}/orders/${order.token}`,
+    day: day.day,
+    cutOffAt: day.cutOffAt,
+    lines: lines.map(viewLine),
+    totalPence: order.totalPence,
+    collection: await getCollection(db, order.slotId),
+  };
+}
+
+export function orderCalendar(facts: OrderFacts, order: OrderRow, madeAt: Date): string {
+  const { collection } = facts;
+  return calendarFile({
+    uid: `order-${order.id}@wholeside.example`,
+    sequence: order.version,
+    madeAt,
+    startsAt: collection.startsAt,
+    endsAt: collection.endsAt,
+    title: `Collect your beef from ${facts.farm.name}`,
+    place: [collection.name, ...collection.addressLines].join(', '),
+    description: `Order ${order.orderNo}. ${collection.directions}\n${collection.bring}`,
+    url: facts.url,
+    isCancelled: order.state === 'cancelled',
+  });
+}

@@ -1,0 +1,89 @@
+import { and, asc, eq, lt } from 'drizzle-orm';
+import { customerOrder, payment, webhookEvent } from '#db/schema/orders.ts';
+import type { Db, Tx } from '#server/deps.ts';
+
+export type PaymentRow = typeof payment.$inferSelect;
+
+/** Oldest first; a charge before the refund that was written with it. */
+export function listPayments(db: Db | Tx, orderId: string): Promise<PaymentRow[]> {
+  return db
+    .select()
+    .from(payment)
+    .where(eq(payment.orderId, orderId))
+    .orderBy(asc(payment.createdAt), asc(payment.kind), asc(payment.id));
+}
+
+export async function findPayment(db: Db | Tx, paymentId: string): Promise<PaymentRow | null> {
+  const rows = await db.select().from(payment).where(eq(payment.id, paymentId));
+  return rows[0] ?? null;
+}
+
+export async function findPaymentByProviderId(db: Db | Tx, providerId: string): Promise<PaymentRow | null> {
+  const rows = await db.select().from(payment).where(eq(payment.providerId, providerId));
+  return rows[0] ?? null;
+}
+
+/** False when this charge is written down already. */
+export async function insertCharge(
+  tx: Tx,
+  charge: { orderId: string; providerId: string; amountPence: number },
+): Promise<boolean> {
+  const rows = await tx
+    .insert(payment)
+    .values({ ...charge, kind: 'charge', reason: 'order', state: 'done' })
+    .onConflictDoNothing({ target: payment.providerId })
+    .returning({ id: payment.id });
+  return rows.length === 1;
+}
+
+/** One refund a reason: null when it has been asked for before. */
+export async function insertRefund(
+  tx: Tx,
+  refund: { orderId: string; reason: string; amountPence: number },
+): Promise<string | null> {
+  const rows = await tx
+    .insert(payment)
+    .values({ ...refund, kind: 'refund', state: 'asked' })
+    .onConflictDoNothing()
+    .returning({ id: payment.id });
+  return rows[0]?.id ?? null;
+}
+
+export async function updatePayment(
+  db: Db | Tx,
+  paymentId: string,
+  change: Partial<Pick<PaymentRow, 'state' | 'providerId' | 'error'>>,
+): Promise<void> {
+  await db.update(payment).set(change).where(eq(payment.id, paymentId));
+}
+
+/** False when this event has been here before. */
+export async function insertEvent(
+  tx: Tx,
+  event: { eventId: string; type: string; payload: unknown },
+): Promise<boolean> {
+  const rows = await tx
+    .insert(webhookEvent)
+    .values(event)
+    .onConflictDoNothing()
+    .returning({ id: webhookEvent.eventId });
+  return rows.length === 1;
+}
+
+export async function hasEvent(db: Db, eventId: string): Promise<boolean> {
+  const rows = await db
+    .select({ id: webhookEvent.eventId })
+    .from(webhookEvent)
+    .where(eq(webhookEvent.eventId, eventId));
+  return rows.length > 0;
+}
+
+/** Holds that went to payment before `since`: their word may have been lost. */
+export function listHeldOrders(db: Db, since: Date) {
+  return db
+    .select()
+    .from(customerOrder)
+    .where(and(eq(customerOrder.isHeld, true), lt(customerOrder.reachedPaymentAt, since)))
+    .orderBy(asc(customerOrder.reachedPaymentAt))
+    .limit(200);
+}
