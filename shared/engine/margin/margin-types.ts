@@ -1,3 +1,5 @@
+import type { Day } from '#shared/domain/day.ts';
+
 /** Tenths of a penny per kg on or off the base. */
 export type PriceGrid = {
   name: string;
@@ -8,7 +10,7 @@ export type PriceGrid = {
   adjustments: Readonly<Record<string, Readonly<Record<string, number>>>>;
   /** Applies from this cold weight (grams) upwards, the last one that is reached. */
   weightSteps: readonly { fromGrams: number; adjustment: number }[];
-  /** Applies from this age in whole months upwards when the carcase is older than it. */
+  /** The last one that the carcase is older than, by the day: exactly thirty months is not over thirty. */
   ageSteps: readonly { overMonths: number; adjustment: number }[];
 };
 
@@ -16,7 +18,9 @@ export type DeadweightInput = {
   coldGrams: number;
   conformation: string;
   fatClass: string;
-  ageMonths: number | null;
+  /** Null when not known: the carcase then counts as older than every step. */
+  bornDay: Day | null;
+  killDay: Day;
   baseTenthPencePerKg: number;
   grid: PriceGrid;
   levyPence: number;
@@ -67,3 +71,23 @@ export type JointProduct = {
 };
 
 export type JointShare = { id: string; netRealisablePence: number; sharePence: number; marginPence: number };
+
+/** What one sale, or a cost with no sale, brings to the account. Costs stand under the names of `DirectCosts`. */
+export type MarginEntry = {
+  carcaseId: string | null;
+  dayId: string | null;
+  channel: string | null;
+  /** The kind of box it went in. */
+  boxKindId: string | null;
+  cutId: string | null;
+  incomePence: number;
+  costs: Partial<DirectCosts>;
+  /** Deadweight value that this entry stands for, and the cold weight behind it. */
+  deadweightPence: number;
+  coldGrams: number;
+};
+
+export type MarginDimension = 'carcaseId' | 'dayId' | 'channel' | 'boxKindId' | 'cutId';
+
+/** What the card company keeps: parts per 100,000 of the price, and a fixed sum. */
+export type CardFee = { ratePpht: number; fixedPence: number };

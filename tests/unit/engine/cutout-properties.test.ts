@@ -12,8 +12,8 @@ const settings = { numRuns: 60, seed: 20261201 };
 
 const anyFacts: fc.Arbitrary<Partial<CarcaseFacts>> = fc.record({
   coldGrams: fc.integer({ min: 82_000, max: 700_000 }),
-  conformation: fc.option(fc.constantFrom(...CONFORMATIONS)),
-  fatClass: fc.option(fc.constantFrom(...FAT_CLASSES)),
+  conformation: fc.option(fc.constantFrom(...CONFORMATIONS), { nil: null }),
+  fatClass: fc.option(fc.constantFrom(...FAT_CLASSES), { nil: null }),
   bornDay: fc.constantFrom('2024-11-20', '2023-01-01', null),
   hanging: fc.record({
     method: fc.constantFrom('whole side' as const, 'in the bag' as const),
