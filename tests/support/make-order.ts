@@ -1,0 +1,95 @@
+import { randomUUID } from 'node:crypto';
+import { eq } from 'drizzle-orm';
+import supertest from 'supertest';
+import { offer } from '#db/schema/allocations.ts';
+import { collectionSlot, customerOrder, payment } from '#db/schema/orders.ts';
+import type { World } from './harness.ts';
+import { makeBoxKind, makeBoxOffer, makeCut, makeCuttingDay, makeFarm, makeLooseOffer, makeSlot } from './make-farm.ts';
+
+export type Stall = Awaited<ReturnType<typeof makeStall>>;
+
+/** A day with a box and a loose cut on sale, and one collection time. */
+export async function makeStall(world: World, more: { boxes?: number; packs?: number; slots?: number } = {}) {
+  const { db, clock } = world;
+  const today = clock.today();
+  const farm = await makeFarm(db);
+  const day = await makeCuttingDay(db, today);
+  const cut = await makeCut(db, 'rump-steak', { name: 'Rump steak' });
+  const box = await makeBoxKind(db, 'hearth', { name: 'Hearth', cutIds: [cut.id] });
+  const boxOffer = await makeBoxOffer(db, day.id, box, more.boxes ?? 20);
+  const looseOffer = await makeLooseOffer(db, day.id, cut.id, {
+    offered: more.packs ?? 20,
+    pricePence: 1_300,
+    upperGrams: 650,
+  });
+  const slot = await makeSlot(db, day.id, today, { capacity: more.slots ?? 300 });
+  return { farm, day, cut, box, boxOffer, looseOffer, slot };
+}
+
+/** What the browser sends to go to payment: one box, unless told otherwise. */
+export function basketFor(stall: Stall, more: Record<string, unknown> = {}) {
+  return {
+    basketKey: randomUUID(),
+    dayId: stall.day.id,
+    lines: [{ offerId: stall.boxOffer.id, quantity: 1 }],
+    slotId: stall.slot.id,
+    name: 'Ada Fell',
+    email: 'ada@example.com',
+    phone: '07700 900123',
+    note: '',
+    ...more,
+  };
+}
+
+export type Placed = { orderNo: number; token: string; state: string; paymentUrl: string | null };
+
+export async function place(world: World, basket: ReturnType<typeof basketFor>, cookie?: string): Promise<Placed> {
+  const answer = await world.request(cookie).post('/api/orders').send(basket);
+  if (answer.status !== 200) throw new Error(`Placing answered ${answer.status}: ${answer.text}`);
+  return answer.body as Placed;
+}
+
+export const CARDS = { good: '4242424242424242', declined: '4000000000000002', failingRefund: '4000000000007726' };
+
+/** Fills in the payment company's own page, as a person does. The status of its answer: 303 leads back to the shop. */
+export async function payOn(url: string | null, card = CARDS.good): Promise<number> {
+  const { origin, pathname } = new URL(url ?? '');
+  const answer = await supertest(origin)
+    .post(pathname)
+    .type('form')
+    .send({ email: 'ada@example.com', name: 'Ada Fell', card, expiry: '08 / 40', cvc: '123', formId: randomUUID() });
+  return answer.status;
+}
+
+/** Pays, and hands over every message of the payment company that waits. */
+export async function payFor(world: World, placed: Placed, card = CARDS.good): Promise<void> {
+  await payOn(placed.paymentUrl, card);
+  await world.payments.flush();
+}
+
+/** An order that is paid and confirmed. */
+export async function makeConfirmedOrder(world: World, stall: Stall, more: Record<string, unknown> = {}) {
+  const placed = await place(world, basketFor(stall, more));
+  await payFor(world, placed);
+  return getOrderRow(world, placed.token);
+}
+
+export async function getOrderRow({ db }: World, token: string) {
+  const [row] = await db.select().from(customerOrder).where(eq(customerOrder.token, token));
+  if (!row) throw new Error('There is no such order.');
+  return row;
+}
+
+export async function countersOf({ db }: World, offerId: string) {
+  const [row] = await db.select().from(offer).where(eq(offer.id, offerId));
+  return { offered: row?.offered, held: row?.held, sold: row?.sold };
+}
+
+export async function takenOf({ db }: World, slotId: string): Promise<number | undefined> {
+  const [row] = await db.select().from(collectionSlot).where(eq(collectionSlot.id, slotId));
+  return row?.taken;
+}
+
+export function paymentsOf({ db }: World, orderId: string) {
+  return db.select().from(payment).where(eq(payment.orderId, orderId)).orderBy(payment.createdAt, payment.kind);
+}
