@@ -1,14 +1,15 @@
 import { divideHalfAway } from '#shared/engine/rounding.ts';
 import type { CarcaseFacts } from './cutout-types.ts';
 
-type Point = readonly [day: number, ppht: number];
+/** A day, and parts per 100,000 lost by then. */
+export type LossPoint = readonly [day: number, ppht: number];
 
 /**
  * Weight lost from cold to hung, parts per 100,000. Common practice, and screens say so. The whole side loses nothing up
  * to day 2 (it is in the 2 % between hot and cold), then 0.10 % a day to day 14 and 0.07 % a day after. The bag's figures
  * are the purge and shrink of vacuum-packed primals; published ones for rib-eye and strip loin lie at 0.2 to 1.2 %.
  */
-const HANGING: Readonly<Record<CarcaseFacts['hanging']['method'], readonly Point[]>> = {
+const HANGING: Readonly<Record<CarcaseFacts['hanging']['method'], readonly LossPoint[]>> = {
   'whole side': [
     [2, 0],
     [14, 1_200],
@@ -24,7 +25,7 @@ const HANGING: Readonly<Record<CarcaseFacts['hanging']['method'], readonly Point
 };
 
 /** Dry surface that is cut off a hung side and thrown away; common practice. Beyond day 35 it is taken as at day 35. */
-const SURFACE_TRIM: readonly Point[] = [
+const SURFACE_TRIM: readonly LossPoint[] = [
   [14, 0],
   [21, 500],
   [28, 1_500],
@@ -33,7 +34,7 @@ const SURFACE_TRIM: readonly Point[] = [
 ];
 
 /** Piecewise linear; level before the first point, and on at the last slope after the last. */
-function interpolate(points: readonly Point[], day: number): number {
+export function lossAt(points: readonly LossPoint[], day: number): number {
   const [first] = points;
   if (!first || day <= first[0]) return first?.[1] ?? 0;
   let from = first;
@@ -49,10 +50,10 @@ function interpolate(points: readonly Point[], day: number): number {
 
 /** Parts per 100,000 of cold weight lost after so many whole days; at most half. */
 export function hangingLossPpht(hanging: CarcaseFacts['hanging']): number {
-  return Math.min(50_000, interpolate(HANGING[hanging.method], hanging.days));
+  return Math.min(50_000, lossAt(HANGING[hanging.method], hanging.days));
 }
 
 /** Parts per 100,000 of the hung side that go from meat to loss as dried surface. None in the bag. */
 export function surfaceTrimPpht(hanging: CarcaseFacts['hanging']): number {
-  return hanging.method === 'whole side' ? interpolate(SURFACE_TRIM, hanging.days) : 0;
+  return hanging.method === 'whole side' ? lossAt(SURFACE_TRIM, hanging.days) : 0;
 }
