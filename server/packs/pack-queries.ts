@@ -1,0 +1,149 @@
+import { and, asc, desc, eq, inArray, sql } from 'drizzle-orm';
+import { offer } from '#db/schema/allocations.ts';
+import { carcase, cuttingDay } from '#db/schema/carcases.ts';
+import { animal } from '#db/schema/herd.ts';
+import { customerOrder, orderLine } from '#db/schema/orders.ts';
+import { pack, packAssignment, stockMovement } from '#db/schema/packs.ts';
+import { cut } from '#db/schema/products.ts';
+import { reservation, reservationLine, tradeAccount } from '#db/schema/trade.ts';
+import type { Db, Tx } from '#server/deps.ts';
+
+export type PackRow = typeof pack.$inferSelect & { cut: string; earTag: string };
+export type AssignmentRow = typeof packAssignment.$inferSelect;
+export type NewPack = typeof pack.$inferInsert;
+
+function selectPacks(db: Db | Tx) {
+  return db
+    .select({ pack, cut: cut.name, earTag: animal.earTag })
+    .from(pack)
+    .innerJoin(cut, eq(cut.id, pack.cutId))
+    .innerJoin(carcase, eq(carcase.id, pack.carcaseId))
+    .innerJoin(animal, eq(animal.id, carcase.animalId));
+}
+
+/** The newest first: the pack that was just weighed is the one to look at. */
+export async function listPacks(db: Db | Tx, dayId: string): Promise<PackRow[]> {
+  const rows = await selectPacks(db).where(eq(pack.cuttingDayId, dayId)).orderBy(desc(pack.createdAt), asc(pack.code));
+  return rows.map(({ pack: row, ...names }) => ({ ...row, ...names }));
+}
+
+export async function findPack(db: Db | Tx, packId: string): Promise<PackRow | null> {
+  const rows = await selectPacks(db).where(eq(pack.id, packId));
+  return rows[0] ? { ...rows[0].pack, cut: rows[0].cut, earTag: rows[0].earTag } : null;
+}
+
+export async function insertPacks(tx: Tx, rows: NewPack[]): Promise<{ id: string; grams: number }[]> {
+  return tx.insert(pack).values(rows).returning({ id: pack.id, grams: pack.grams });
+}
+
+export async function setPackGrams(tx: Tx, packId: string, grams: number): Promise<void> {
+  await tx.update(pack).set({ grams }).where(eq(pack.id, packId));
+}
+
+/** Where each pack lies: the place that its latest movement names. */
+export async function readPlaces(db: Db | Tx, packIds: readonly string[]) {
+  const rows = await db
+    .selectDistinctOn([stockMovement.packId], {
+      id: stockMovement.id,
+      packId: stockMovement.packId,
+      place: stockMovement.toPlace,
+    })
+    .from(stockMovement)
+    .where(inArray(stockMovement.packId, [...packIds]))
+    .orderBy(stockMovement.packId, desc(stockMovement.createdAt), desc(stockMovement.id));
+  return new Map(rows.map((row) => [row.packId, row]));
+}
+
+export function listAssignments(db: Db | Tx, packIds: readonly string[]): Promise<AssignmentRow[]> {
+  return db
+    .select()
+    .from(packAssignment)
+    .where(and(eq(packAssignment.isLive, true), inArray(packAssignment.packId, [...packIds])));
+}
+
+export async function insertAssignments(tx: Tx, rows: (typeof packAssignment.$inferInsert)[]): Promise<void> {
+  if (rows.length > 0) await tx.insert(packAssignment).values(rows);
+}
+
+export async function endAssignments(tx: Tx, packIds: readonly string[]): Promise<void> {
+  await tx
+    .update(packAssignment)
+    .set({ isLive: false })
+    .where(and(eq(packAssignment.isLive, true), inArray(packAssignment.packId, [...packIds])));
+}
+
+/** Everything of the day that packs must fill: boxes and loose packs of paid orders, in the order in which they came. */
+export function listOrderWork(db: Db | Tx, dayId: string) {
+  return db
+    .select({
+      lineId: orderLine.id,
+      orderId: customerOrder.id,
+      orderNo: customerOrder.orderNo,
+      orderName: customerOrder.name,
+      state: customerOrder.state,
+      version: customerOrder.version,
+      item: orderLine.name,
+      quantity: orderLine.quantity,
+      unitPricePence: orderLine.unitPricePence,
+      kind: offer.kind,
+      boxKindId: offer.boxKindId,
+      cutId: offer.cutId,
+      upperGrams: offer.upperGrams,
+    })
+    .from(orderLine)
+    .innerJoin(customerOrder, eq(customerOrder.id, orderLine.orderId))
+    .innerJoin(offer, eq(offer.id, orderLine.offerId))
+    .where(
+      and(
+        eq(customerOrder.cuttingDayId, dayId),
+        inArray(customerOrder.state, ['confirmed', 'packed', 'ready', 'collected', 'delivered', 'missed']),
+      ),
+    )
+    .orderBy(asc(customerOrder.orderNo), asc(orderLine.name));
+}
+export type OrderWork = Awaited<ReturnType<typeof listOrderWork>>[number];
+
+/** Cuts that butchers have confirmed, in grams. What leaves whole needs no pack. */
+export async function listTradeWork(db: Db | Tx, dayId: string) {
+  const rows = await db
+    .select({
+      lineId: reservationLine.id,
+      orderNo: reservation.reservationNo,
+      orderName: tradeAccount.businessName,
+      item: cut.name,
+      cutId: cut.id,
+      grams: reservationLine.grams,
+    })
+    .from(reservationLine)
+    .innerJoin(reservation, eq(reservation.id, reservationLine.reservationId))
+    .innerJoin(tradeAccount, eq(tradeAccount.id, reservation.accountId))
+    .innerJoin(cut, eq(cut.id, reservationLine.cutId))
+    .where(and(eq(reservation.cuttingDayId, dayId), inArray(reservation.state, ['confirmed', 'dispatched'])))
+    .orderBy(asc(reservation.reservationNo), asc(cut.name));
+  return rows.map((row) => ({ ...row, grams: row.grams ?? 0 }));
+}
+export type TradeWork = Awaited<ReturnType<typeof listTradeWork>>[number];
+
+export async function moveOrder(tx: Tx, orderId: string, state: 'packed' | 'confirmed'): Promise<void> {
+  await tx
+    .update(customerOrder)
+    .set({ state, version: sql`${customerOrder.version} + 1` })
+    .where(eq(customerOrder.id, orderId));
+}
+
+export async function markCut(tx: Tx, carcaseId: string): Promise<void> {
+  await tx
+    .update(carcase)
+    .set({ state: 'cut' })
+    .where(and(eq(carcase.id, carcaseId), inArray(carcase.state, ['killed', 'hanging'])));
+}
+
+export async function readCut(db: Db | Tx, cutId: string) {
+  const rows = await db.select().from(cut).where(eq(cut.id, cutId));
+  return rows[0] ?? null;
+}
+
+export async function readDayOf(db: Db | Tx, dayId: string) {
+  const rows = await db.select().from(cuttingDay).where(eq(cuttingDay.id, dayId));
+  return rows[0] ?? null;
+}
