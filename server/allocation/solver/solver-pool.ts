@@ -1,3 +1,4 @@
+import { clearTimeout, setTimeout } from 'node:timers';
 import { Worker } from 'node:worker_threads';
 import { EngineError } from '#shared/engine/engine-error.ts';
 import type {
