@@ -1,4 +1,11 @@
-import { keepPreviousData, queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
+import {
+  keepPreviousData,
+  queryOptions,
+  useMutation,
+  useQuery,
+  useQueryClient,
+  type QueryClient,
+} from '@tanstack/react-query';
 import {
   cancelOrder,
   getOrder,
@@ -35,6 +42,11 @@ export function useOrder(token: string, loaded: Loaded<Order>) {
   return useLoaded(orderQuery(token), loaded);
 }
 
+/** The order that a basket went to payment with, from wherever the shop's reader is now. */
+export function useOpenOrder(token: string) {
+  return useQuery(orderQuery(token));
+}
+
 export function basketPriceQuery(dayId: string, lines: BasketLine[]) {
   return queryOptions({
     queryKey: ['basket', dayId, lines],
@@ -54,13 +66,13 @@ export function usePlaceOrder() {
   const client = useQueryClient();
   return useMutation({
     mutationFn: (body: Checkout) => call(placeOrder, { body }),
-    onSettled: () =>
-      Promise.all(
-        [['basket'], ['collections'], ['shop'], ['cuts'], ['boxes']].map((queryKey) =>
-          client.invalidateQueries({ queryKey }),
-        ),
-      ),
+    onSettled: () => forgetStock(client),
   });
+}
+
+function forgetStock(client: QueryClient) {
+  const kinds = [['basket'], ['collections'], ['shop'], ['cuts'], ['boxes']];
+  return Promise.all(kinds.map((queryKey) => client.invalidateQueries({ queryKey })));
 }
 
 export function useCancelOrder(token: string) {
@@ -75,7 +87,10 @@ function useOrderChange(token: string, change: () => Promise<Order>) {
   const client = useQueryClient();
   return useMutation({
     mutationFn: change,
-    onSuccess: (order) => client.setQueryData(orderQuery(token).queryKey, order),
+    onSuccess: (order) => {
+      client.setQueryData(orderQuery(token).queryKey, order);
+      return forgetStock(client);
+    },
     onError: () => client.invalidateQueries({ queryKey: ['orders', token] }),
   });
 }

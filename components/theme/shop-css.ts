@@ -62,7 +62,8 @@ const choices = `
 
 const cuts = `
 :root .w-cut{display:grid;grid-template-columns:64px minmax(0,1fr) auto;gap:4px 14px;align-items:start;padding-block:16px;border:0 solid var(--line);border-bottom-width:1px}
-:root .w-cut-words{display:flex;flex-direction:column;gap:2px;min-width:0}
+:root .w-cut-words{grid-column:2/-1;min-width:0}
+:root .w-cut>.w-drawing{grid-row:1/3}
 :root .w-cut-price{display:flex;flex-direction:column;align-items:flex-end;gap:2px;text-align:end}
 :root .w-cut-buy{grid-column:2/-1;display:flex;flex-direction:row;flex-wrap:wrap;align-items:center;justify-content:space-between;gap:8px 16px;min-height:48px}
 :root .w-stick{position:sticky;bottom:0;z-index:3;background:var(--page);border:0 solid var(--line);border-top-width:1px;padding-block:12px max(12px,env(safe-area-inset-bottom));margin-top:auto}
@@ -70,6 +71,7 @@ const cuts = `
 `;
 
 const basket = `
+:root .w-rows-plain{display:flex;flex-direction:column;margin:0;padding:0;border:0 solid var(--line);border-top-width:1px}
 :root .w-item{display:grid;grid-template-columns:minmax(0,1fr) auto;gap:8px 16px;align-items:center;padding-block:16px;border:0 solid var(--line);border-bottom-width:1px}
 :root .w-item-words{display:flex;flex-direction:column;gap:2px;min-width:0;align-self:start}
 :root .w-item-price{align-self:start;text-align:end}
