@@ -8,7 +8,10 @@ import { insertStartingProducts } from '#db/seed/starting-products.ts';
 import type { Deps } from '#server/deps.ts';
 import { addDays } from '#shared/domain/day.ts';
 import { demoDays } from './demo-days.ts';
+import { onDay } from './demo-deps.ts';
 import { seedDays } from './seed-days.ts';
+import { openSale } from './seed-sale.ts';
+import { seedTrade } from './seed-trade.ts';
 
 /** The same farm on every run, with its days counted from today. */
 const SEED = 1_764;
@@ -26,5 +29,10 @@ export async function seedDemoFarm(deps: Deps): Promise<void> {
     const herd = await insertHerd(tx, chance, { today, killDays });
     return { points, specificationId, people, herd };
   });
-  await seedDays(deps, { ...ground, days, ownerId: ground.people.ownerId });
+  const { ownerId } = ground.people;
+  const seeded = await seedDays(deps, { ...ground, days, ownerId });
+  await seedTrade(deps, ground.people, seeded);
+  await openSale(onDay(deps, addDays(days.past.day, -12)), seeded.past, ownerId);
+  await openSale(onDay(deps, addDays(today, -1)), seeded.next, ownerId);
+  await openSale(onDay(deps, addDays(today, -1)), seeded.second, ownerId);
 }
