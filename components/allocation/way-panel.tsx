@@ -11,6 +11,13 @@ import { nameSide } from './plan-words.ts';
 /** The choice that leaves the way to the plan. */
 const FREE = 'free';
 
+const PANEL_ID = 'ways';
+
+/** Takes the reader to the panel once it is drawn. */
+export function goToWays(): void {
+  requestAnimationFrame(() => document.getElementById(PANEL_ID)?.focus());
+}
+
 type WayPanelProps = {
   side: PlannedSide;
   primalIds: readonly string[];
@@ -23,7 +30,13 @@ type WayPanelProps = {
 export function WayPanel({ side, primalIds, locks, onLock }: WayPanelProps) {
   const choices = choicesOf(side, primalIds);
   return (
-    <View role="region" aria-label={`Ways of ${nameSide(side)}`} style={css('w-panel', 'w-stack')}>
+    <View
+      role="region"
+      id={PANEL_ID}
+      tabIndex={-1}
+      aria-label={`Ways of ${nameSide(side)}`}
+      style={css('w-panel', 'w-stack')}
+    >
       {choices.length === 0 ? <Text>This primal is cut in one way only.</Text> : null}
       {choices.map((choice) => {
         const lock = findLock(locks, { carcaseId: side.carcaseId, side: side.side, choiceId: choice.choiceId });

@@ -1,0 +1,27 @@
+import { View } from 'react-native';
+import { css } from '#components/theme/css.ts';
+import { Text } from '#components/ui/text.tsx';
+import type { PlannedSide } from '#shared/contracts/allocation.ts';
+import { nameSide } from './plan-words.ts';
+import { WaysTable } from './ways-table.tsx';
+
+type WaysSectionProps = {
+  sides: readonly PlannedSide[];
+  onChoose: (side: PlannedSide, primalId: string) => void;
+};
+
+/** Folded away: the rails say the same to the eye. */
+export function WaysSection({ sides, onChoose }: WaysSectionProps) {
+  return (
+    <View style={css('w-stack')}>
+      {sides.map((side) => (
+        <details key={`${side.carcaseId} ${side.side}`} className="w-ruled">
+          <summary className="w-nav-link">
+            <Text weight="strong">{`Ways of ${nameSide(side)}`}</Text>
+          </summary>
+          <WaysTable side={side} onChoose={(primalId) => onChoose(side, primalId)} />
+        </details>
+      ))}
+    </View>
+  );
+}
