@@ -18,12 +18,14 @@ export type PromiseInput = {
 export type BoxPromise = {
   /** Boxes that may be offered, by variant; never above the plan and never below what is sold and held. */
   boxes: { variantId: string; planned: number; promised: number; floor: number }[];
-  /** Share of scenarios in which the promised boxes can all be filled. */
+  /** Loose packs that may be offered, by cut, on the same terms. */
+  loose: { cutId: string; planned: number; promised: number; floor: number }[];
+  /** Share of scenarios in which the promised boxes and packs can all be filled. */
   jointConfidence: number;
   /** Largest share of the plan's offers that is safe at this confidence, in parts per 100,000. */
   safeSharePpht: number;
   /** True when what is sold and held itself is not safe at this confidence. */
   isFloorAtRisk: boolean;
-  /** Boxes short by variant over the scenarios, only when the floor is at risk. */
+  /** What is missing for the floor, over the scenarios in which something is; only when the floor is at risk. */
   floorShortfall: { shareOfScenarios: number; meanShortGrams: number; worstShortGrams: number } | null;
 };
