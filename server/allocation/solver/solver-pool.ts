@@ -1,4 +1,4 @@
-import { clearTimeout, setTimeout } from 'node:timers';
+import { setTimeout as sleep } from 'node:timers/promises';
 import { Worker } from 'node:worker_threads';
 import { EngineError } from '#shared/engine/engine-error.ts';
 import type {
@@ -29,7 +29,7 @@ type Job = {
   /** Takes the job's own listeners and timers off. */
   release: () => void;
 };
-type Thread = { worker: Worker; ready: Promise<void>; job: Job | null; idleTimer: NodeJS.Timeout | null };
+type Thread = { worker: Worker; ready: Promise<void>; job: Job | null; idle: AbortController | null };
 
 /** How long a thread may overrun its own time limit before it is ended from outside. */
 const GRACE_SECONDS = 5;
@@ -87,7 +87,7 @@ class SolverPool {
 
   private addThread(): Thread {
     const worker = new Worker(new URL('./solver-worker.mjs', import.meta.url), { execArgv: [] });
-    const thread: Thread = { worker, ready: Promise.resolve(), job: null, idleTimer: null };
+    const thread: Thread = { worker, ready: Promise.resolve(), job: null, idle: null };
     thread.ready = new Promise((resolve) => {
       worker.on('message', (message: Message) => {
         if (message.kind === 'ready') resolve();
@@ -117,7 +117,7 @@ class SolverPool {
   private start(thread: Thread, job: Job): void {
     const { lpText, options, variations } = job.task;
     const { signal: _signal, onProgress, ...plain } = options;
-    if (thread.idleTimer) clearTimeout(thread.idleTimer);
+    thread.idle?.abort();
     thread.job = job;
     thread.worker.ref();
     const count = variations?.length ?? 1;
@@ -144,8 +144,11 @@ class SolverPool {
     thread.job = null;
     thread.worker.unref();
     if (this.threads.indexOf(thread) > 0) {
-      thread.idleTimer = setTimeout(() => void this.end(thread, failed('its thread was idle')), IDLE_MILLISECONDS);
-      thread.idleTimer.unref();
+      thread.idle = new AbortController();
+      sleep(IDLE_MILLISECONDS, undefined, { ref: false, signal: thread.idle.signal }).then(
+        () => this.end(thread, failed('its thread was idle')),
+        () => undefined,
+      );
     }
     if (message.kind === 'answer') this.settle(job, () => job.resolve(message.answer));
     else this.settle(job, () => job.reject(failed(message.message)));
@@ -173,7 +176,7 @@ class SolverPool {
     const place = this.threads.indexOf(thread);
     if (place < 0) return;
     this.threads.splice(place, 1);
-    if (thread.idleTimer) clearTimeout(thread.idleTimer);
+    thread.idle?.abort();
     const job = thread.job;
     thread.job = null;
     if (job) this.settle(job, () => job.reject(reason));
