@@ -14,18 +14,21 @@ const MOST_ROUNDS = 10;
 /** Pence by which an earlier optimum may be missed later: below any price, above a solver's tolerance. */
 const SHORT_TOLERANCE = 0.01;
 
+/** Relative gap of the second model: its packs are whole, its ways are settled. */
+const PACK_GAP = 0.0005;
+const LEAST_SECONDS = 1;
+
 export type AllocateOptions = SolveOptions;
 
 type Solved = { solution: Solution; lpText: string };
+/** One model on its way to an answer: earlier optima and boxes taken off are rows of its text. */
 type Session = {
   model: AllocationModel;
   solver: Solver;
   options: AllocateOptions;
-  /** Earlier optima, fixed. */
   fixed: Row[];
-  /** Boxes taken off. */
   caps: Map<string, Row>;
-  spentMilliseconds: number;
+  clock: { spentMilliseconds: number };
   isProven: boolean;
 };
 
@@ -33,14 +36,15 @@ type Session = {
 function remaining(session: Session): SolveOptions {
   const { timeLimitSeconds } = session.options;
   if (timeLimitSeconds === undefined) return session.options;
-  return { ...session.options, timeLimitSeconds: Math.max(0.5, timeLimitSeconds - session.spentMilliseconds / 1000) };
+  const left = timeLimitSeconds - session.clock.spentMilliseconds / 1000;
+  return { ...session.options, timeLimitSeconds: Math.max(LEAST_SECONDS, left) };
 }
 
-async function solve(session: Session, about: WriteOptions & { rows: readonly Row[] }): Promise<Solved> {
-  const extraRows = [...about.rows, ...session.caps.values()];
+async function solve(session: Session, about: WriteOptions): Promise<Solved> {
+  const extraRows = [...(about.extraRows ?? []), ...session.fixed, ...session.caps.values()];
   const lpText = session.model.lp.write({ ...about, extraRows });
   const solution = await session.solver.solve(lpText, remaining(session));
-  session.spentMilliseconds += solution.milliseconds;
+  session.clock.spentMilliseconds += solution.milliseconds;
   return { solution, lpText };
 }
 
@@ -48,7 +52,7 @@ function isProof(session: Session, solution: Solution): boolean {
   return solution.status === 'optimal' || (session.options.nodeLimit !== undefined && solution.hasAnswer);
 }
 
-function fixRow(priority: Priority, terms: readonly Term[], pence: number): Row {
+function shortRow(priority: Priority, terms: readonly Term[], pence: number): Row {
   return { name: `shortfall_${priority}`, terms, sense: '<=', right: pence };
 }
 
@@ -64,28 +68,54 @@ async function fixShortfalls(session: Session): Promise<void> {
     const terms = shortTerms(session.model, priority);
     if (terms.length === 0) continue;
     const title = `Least shortfall of priority ${priority}, in pence of what it would have brought`;
-    const { solution } = await solve(session, { sense: 'Minimize', objective: terms, title, rows: session.fixed });
+    const { solution } = await solve(session, { sense: 'Minimize', objective: terms, title });
     if (!solution.hasAnswer) throw failed('The least shortfall could not be found in time.');
     session.isProven &&= isProof(session, solution);
-    session.fixed.push(fixRow(priority, terms, Math.max(0, solution.objective) + SHORT_TOLERANCE));
+    session.fixed.push(shortRow(priority, terms, Math.max(0, solution.objective) + SHORT_TOLERANCE));
   }
 }
 
 const TITLE = 'Contribution of one cutting day in pence; weights in kilograms';
 
-/** Nothing short is tried first: it is the usual case, and then one solve answers all phases at once. */
-async function solveFirst(session: Session): Promise<Solved> {
-  const none = PRIORITIES.flatMap((priority) => {
+/**
+ * The greatest contribution after the least shortfall. `hoped` pence short by priority are tried first: nothing short is
+ * the usual case, and then one solve answers all phases at once.
+ */
+async function solvePhases(session: Session, hoped: ReadonlyMap<Priority, number>): Promise<Solved> {
+  const rows = PRIORITIES.flatMap((priority) => {
     const terms = shortTerms(session.model, priority);
-    return terms.length > 0 ? [fixRow(priority, terms, 0)] : [];
+    return terms.length > 0 ? [shortRow(priority, terms, hoped.get(priority) ?? 0)] : [];
   });
-  const hopeful = await solve(session, { title: TITLE, rows: none });
+  const hopeful = await solve(session, { title: TITLE, extraRows: rows });
   if (hopeful.solution.hasAnswer) {
-    session.fixed = none;
+    session.fixed.push(...rows);
     return hopeful;
   }
   await fixShortfalls(session);
-  return await solve(session, { title: TITLE, rows: session.fixed });
+  return await solve(session, { title: TITLE });
+}
+
+/** What the answer falls short by, in the pence of the model's rows. */
+function shortPence(session: Session, { solution }: Solved): Map<Priority, number> {
+  return new Map(
+    PRIORITIES.map((priority) => {
+      const terms = shortTerms(session.model, priority);
+      const pence = terms.reduce((sum, [each, column]) => sum + each * (solution.columns[column] ?? 0), 0);
+      return [priority, pence > SHORT_TOLERANCE ? pence + SHORT_TOLERANCE : 0];
+    }),
+  );
+}
+
+/** The second model keeps the ways and unit sales of the first and makes every pack whole. */
+function packSession(session: Session, { solution }: Solved): Session {
+  const model = buildModel(session.model.input, { isPacked: true });
+  const columns = [...model.ways.map(({ column }) => column), ...model.units.map(({ column }) => column)];
+  const fixed = columns.map((column): Row => {
+    const right = Math.round(solution.columns[column] ?? 0);
+    return { name: `keep_${column}`, terms: [[1, column]], sense: '=', right };
+  });
+  const gap = Math.max(PACK_GAP, session.options.gap ?? 0);
+  return { ...session, model, options: { ...session.options, gap }, fixed, caps: new Map(), isProven: true };
 }
 
 /** Contribution of the last box of a variant per gram of these cuts in it; the least is given up first. */
@@ -120,18 +150,18 @@ function takeOff(session: Session, draft: Draft): { variantId: string; lineId: s
   return { variantId: chosen.variant.id, lineId: failure.line.id };
 }
 
-async function solveWhole(
-  session: Session,
-): Promise<{ solved: Solved; draft: Draft; packRounds: AllocationPlan['packRounds'] }> {
+type Whole = { draft: Draft; packRounds: AllocationPlan['packRounds'] };
+
+async function makeWhole(session: Session, hoped: ReadonlyMap<Priority, number>): Promise<Whole> {
   const packRounds: AllocationPlan['packRounds'] = [];
-  let solved = await solveFirst(session);
+  let solved = await solvePhases(session, hoped);
   for (;;) {
-    if (!solved.solution.hasAnswer) throw failed('No plan was found in time.');
+    if (!solved.solution.hasAnswer) throw failed('No whole packs were found in time.');
     const draft = readPlan(session.model, solved.solution);
     const round = packRounds.length < MOST_ROUNDS ? takeOff(session, draft) : null;
-    if (!round) return { solved, draft, packRounds };
+    if (!round) return { draft, packRounds };
     packRounds.push(round);
-    solved = await solve(session, { title: TITLE, rows: session.fixed });
+    solved = await solve(session, { title: TITLE });
   }
 }
 
@@ -146,25 +176,22 @@ export async function allocate(
 ): Promise<AllocationPlan> {
   const ordered = orderInput(input);
   checkInput(ordered);
-  const session: Session = {
-    model: buildModel(ordered),
-    solver,
-    options,
-    fixed: [],
-    caps: new Map(),
-    spentMilliseconds: 0,
-    isProven: true,
-  };
-  const { solved, draft, packRounds } = await solveWhole(session);
+  const clock = { spentMilliseconds: 0 };
+  const about = { solver, options, clock, isProven: true };
+  const session: Session = { ...about, model: buildModel(ordered), fixed: [], caps: new Map() };
+  const solved = await solvePhases(session, new Map());
+  if (!solved.solution.hasAnswer) throw failed('No plan was found in time.');
+  const { draft, packRounds } = await makeWhole(packSession(session, solved), shortPence(session, solved));
   const { failures, ...plan } = draft;
   const [failure] = failures;
   return {
     ...plan,
     isProven: session.isProven && isProof(session, solved.solution),
     gap: solved.solution.gap,
+    wholePackPence: Math.round(solved.solution.objective) - plan.contributionPence,
     packRounds,
     unfillable: failure ? { variantId: failure.variant.id, lineId: failure.line.id, name: failure.line.name } : null,
     lpText: solved.lpText,
-    milliseconds: session.spentMilliseconds,
+    milliseconds: clock.spentMilliseconds,
   };
 }

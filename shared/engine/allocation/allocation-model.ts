@@ -24,7 +24,8 @@ export type WayColumn = {
   primals: ReadonlyMap<string, string>;
 };
 export type UnitColumn = FittingUnit & { column: string };
-export type CellColumn = { line: RecipeLine; cutId: string; state: MeatState; column: string };
+/** `packs` is set in the second model only, where packs are whole. */
+export type CellColumn = { line: RecipeLine; cutId: string; state: MeatState; column: string; packs: string | null };
 export type BoxColumns = { variant: BoxVariant; boxes: string; floor: string; steps: string[]; cells: CellColumn[] };
 export type LooseColumns = {
   demand: LooseDemand;
@@ -33,6 +34,7 @@ export type LooseColumns = {
   floor: string;
   steps: string[];
   sources: { state: MeatState; column: string }[];
+  packs: string | null;
 };
 export type ShortColumn = { priority: Priority; column: string; penceEach: number };
 
@@ -41,6 +43,8 @@ export type ShortColumn = { priority: Priority; column: string; penceEach: numbe
  * in pence. Every column that the plan is read from is named here.
  */
 export type AllocationModel = {
+  /** The second model: packs of every cut in every line are whole. */
+  isPacked: boolean;
   input: AllocationInput;
   cuts: ReadonlyMap<string, Cut>;
   lp: LpModel;
@@ -76,8 +80,9 @@ export function pencePerKg(tenthPencePerKg: number): number {
   return tenthPencePerKg / 10;
 }
 
-export function emptyModel(input: AllocationInput): AllocationModel {
+export function emptyModel(input: AllocationInput, isPacked: boolean): AllocationModel {
   return {
+    isPacked,
     input,
     cuts: new Map(input.cuts.map((cut) => [cut.id, cut])),
     lp: new LpModel(),

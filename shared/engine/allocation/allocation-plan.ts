@@ -88,6 +88,8 @@ export type AllocationPlan = {
   isProven: boolean;
   /** Relative, of the last phase. */
   gap: number;
+  /** What whole packs cost against the optimum of the model, where a cut may be shared to the gram. */
+  wholePackPence: number;
   /** Boxes taken off because their whole packs would not have met a recipe line. */
   packRounds: { variantId: string; lineId: string }[];
   /** A line that whole packs could not meet even so: the plan may be looked at but not published. */

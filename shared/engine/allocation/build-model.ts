@@ -49,15 +49,18 @@ function addSupply(model: AllocationModel, cutId: string, state: MeatState): voi
   model.lp.addRow(`supply_${name}`, [...(model.uses.get(key) ?? []), [1, column], ...made], ['=', stock]);
 }
 
-/** The program of one cutting day from an input in order (see `orderInput`). */
-export function buildModel(input: AllocationInput): AllocationModel {
-  const model = emptyModel(input);
+/**
+ * The program of one cutting day from an input in order (see `orderInput`). With `isPacked` the packs of every cut in
+ * every line are whole numbers: too many for the plan itself, but soon answered once ways and unit sales are fixed.
+ */
+export function buildModel(input: AllocationInput, { isPacked = false } = {}): AllocationModel {
+  const model = emptyModel(input, isPacked);
   for (const { id } of input.cuts) model.namer.name('k', id);
   addSides(model);
   if (input.mince) addMince(model, input.mince);
   addDemand(model);
   for (const { id } of input.cuts) {
-    if (model.packed.has(id)) addPacks(model, id);
+    if (!isPacked && model.packed.has(id)) addPacks(model, id);
     for (const state of ['fresh', 'frozen'] as const) addSupply(model, id, state);
   }
   for (const line of model.namer.legend) model.lp.addComment(line);

@@ -1,3 +1,4 @@
+import type { Cut } from '#shared/engine/figures/specification.ts';
 import type { Term } from '#shared/engine/linear/lp-model.ts';
 import type { BoxVariant, LooseDemand, MeatState, MinceRule, RecipeLine } from './allocation-input.ts';
 import {
@@ -11,6 +12,7 @@ import {
   type BoxColumns,
   type CellColumn,
   type CutLine,
+  type LooseColumns,
 } from './allocation-model.ts';
 import { packableRange } from './check-recipe.ts';
 
@@ -24,6 +26,29 @@ function hasSupply(model: AllocationModel, cutId: string, state: MeatState): boo
   return state === 'fresh' && model.yields.has(heapKey(cutId, 'fresh'));
 }
 
+/** `minPackGrams n <= grams <= maxPackGrams n` for a whole number of packs. */
+function addWholePacks(model: AllocationModel, cutId: string, column: string): string {
+  const cut = getCut(model, cutId);
+  const packs = model.lp.addColumn(`packs_${column}`, { kind: 'integer' });
+  model.lp.addRow(
+    `heavy_${column}`,
+    [
+      [1, column],
+      [-cut.minPackGrams / 1000, packs],
+    ],
+    ['>=', 0],
+  );
+  model.lp.addRow(
+    `light_${column}`,
+    [
+      [1, column],
+      [-cut.maxPackGrams / 1000, packs],
+    ],
+    ['<=', 0],
+  );
+  return packs;
+}
+
 function addCells(model: AllocationModel, line: RecipeLine, name: string): CellColumn[] {
   return line.cutIds.flatMap((cutId) =>
     statesOf(line)
@@ -32,7 +57,8 @@ function addCells(model: AllocationModel, line: RecipeLine, name: string): CellC
         const column = model.lp.addColumn(`in_${name}_${model.namer.name('k', cutId)}_${state}`);
         addTerm(model.uses, heapKey(cutId, state), [1, column]);
         if (state === 'fresh') addTerm(model.packed, cutId, [1, column]);
-        return { line, cutId, state, column };
+        const packs = model.isPacked ? addWholePacks(model, cutId, column) : null;
+        return { line, cutId, state, column, packs };
       }),
   );
 }
@@ -46,6 +72,12 @@ function addPackRows(
   const [first] = cells;
   const range = first && packableRange(first.line, model.cuts);
   if (!first || !range) return;
+  if (model.isPacked) {
+    const whole: Term[] = cells.flatMap(({ packs }) => (packs ? [[1, packs]] : []));
+    model.lp.addRow(`packs_least_${about.name}`, [...whole, [-range.minPacks, about.boxes]], ['>=', 0]);
+    model.lp.addRow(`packs_most_${about.name}`, [...whole, [-range.maxPacks, about.boxes]], ['<=', 0]);
+    return;
+  }
   const allowed = first.line.cutIds.map((id) => getCut(model, id));
   const packs = (size: 'minPackGrams' | 'maxPackGrams'): Term[] =>
     cells.map(({ cutId, column }) => [1000 / getCut(model, cutId)[size], column]);
@@ -100,36 +132,81 @@ export function plannedPackGrams(cut: { minPackGrams: number; maxPackGrams: numb
   return Math.round((cut.minPackGrams + cut.maxPackGrams) / 2);
 }
 
+type LooseDraft = { name: string; cut: Cut; demand: LooseDemand; packGrams: number };
+
+/** Value of one planned pack in pence: its own rate, less what is counted on its grams already. */
+function packValue(model: AllocationModel, draft: LooseDraft, rate: number): number {
+  const packing = pencePerKg(model.input.packingTenthPencePerKg);
+  const counted = model.isPacked ? gramValue(model, draft) : 0;
+  return (pencePerKg(rate) - packing - counted) * (draft.packGrams / 1000);
+}
+
+/** With whole packs a lighter pack brings less: its grams count at the lowest rate, the rest goes by the pack. */
+function gramValue(model: AllocationModel, { cut, demand }: LooseDraft): number {
+  const rates = [cut.tenthPencePerKg, ...demand.steps.map(({ tenthPencePerKg }) => tenthPencePerKg)];
+  return pencePerKg(Math.min(...rates)) - pencePerKg(model.input.packingTenthPencePerKg);
+}
+
+function addLooseSources(model: AllocationModel, draft: LooseDraft): LooseColumns['sources'] {
+  const { cutId } = draft.demand;
+  const states = (['fresh', 'frozen'] as const).filter((state) => hasSupply(model, cutId, state));
+  return states.map((state) => {
+    const cost = model.isPacked ? gramValue(model, draft) : 0;
+    const column = model.lp.addColumn(`loose_${draft.name}_${state}`, { cost });
+    addTerm(model.uses, heapKey(cutId, state), [1, column]);
+    if (state === 'fresh') addTerm(model.packed, cutId, [1, column]);
+    return { state, column };
+  });
+}
+
+/** Grams follow packs: of the middle of the range in the plan, of any allowed weight where packs are whole. */
+function addLooseGrams(
+  model: AllocationModel,
+  draft: LooseDraft,
+  about: { packs: readonly string[]; grams: readonly Term[] },
+): string | null {
+  const { lp } = model;
+  const { name, cut, packGrams } = draft;
+  if (!model.isPacked) {
+    const planned = about.packs.map((column): Term => [-packGrams / 1000, column]);
+    lp.addRow(`loose_grams_${name}`, [...about.grams, ...planned], ['=', 0]);
+    return null;
+  }
+  const whole = lp.addColumn(`loose_packs_${name}`, { kind: 'integer' });
+  lp.addRow(`loose_count_${name}`, [[1, whole], ...about.packs.map((column): Term => [-1, column])], ['=', 0]);
+  lp.addRow(`loose_heavy_${name}`, [...about.grams, [-cut.minPackGrams / 1000, whole]], ['>=', 0]);
+  lp.addRow(`loose_light_${name}`, [...about.grams, [-cut.maxPackGrams / 1000, whole]], ['<=', 0]);
+  return whole;
+}
+
 function addLoose(model: AllocationModel, demand: LooseDemand): void {
-  const { lp, input } = model;
+  const { lp } = model;
   const cut = getCut(model, demand.cutId);
   const name = model.namer.name('k', demand.cutId);
   const packGrams = plannedPackGrams(cut);
-  const kg = packGrams / 1000;
-  const packing = pencePerKg(input.packingTenthPencePerKg);
-  const value = (rate: number) => (pencePerKg(rate) - packing) * kg;
-  const floor = lp.addColumn(`loose_sold_${name}`, { cost: value(cut.tenthPencePerKg), upper: demand.floor });
-  const steps = demand.steps.map((step, index) =>
-    lp.addColumn(`loose_more${index + 1}_${name}`, { cost: value(step.tenthPencePerKg), upper: step.packs }),
-  );
-  const states = (['fresh', 'frozen'] as const).filter((state) => hasSupply(model, demand.cutId, state));
-  const sources = states.map((state) => {
-    const column = lp.addColumn(`loose_${name}_${state}`);
-    addTerm(model.uses, heapKey(demand.cutId, state), [1, column]);
-    if (state === 'fresh') addTerm(model.packed, demand.cutId, [1, column]);
-    return { state, column };
+  const draft: LooseDraft = { name, cut, demand, packGrams };
+  const floor = lp.addColumn(`loose_sold_${name}`, {
+    cost: packValue(model, draft, cut.tenthPencePerKg),
+    upper: demand.floor,
   });
-  const packs: Term[] = [floor, ...steps].map((column) => [-kg, column]);
-  lp.addRow(`loose_grams_${name}`, [...sources.map(({ column }): Term => [1, column]), ...packs], ['=', 0]);
+  const steps = demand.steps.map((step, index) =>
+    lp.addColumn(`loose_more${index + 1}_${name}`, {
+      cost: packValue(model, draft, step.tenthPencePerKg),
+      upper: step.packs,
+    }),
+  );
+  const sources = addLooseSources(model, draft);
+  const grams = sources.map(({ column }): Term => [1, column]);
+  const packs = addLooseGrams(model, draft, { packs: [floor, ...steps], grams });
   const short = addShort(model, {
     name: `short_loose_${name}`,
     most: demand.floor,
     isWhole: false,
     priority: demand.priority,
-    penceEach: Math.max(1, pencePerKg(cut.tenthPencePerKg) * kg),
+    penceEach: Math.max(1, (pencePerKg(cut.tenthPencePerKg) * packGrams) / 1000),
   });
   lp.addRow(`loose_floor_${name}`, [[1, floor], ...short], ['=', demand.floor]);
-  model.loose.push({ demand, packGrams, floor, steps, sources });
+  model.loose.push({ demand, packGrams, floor, steps, sources, packs });
 }
 
 function addCutLine(model: AllocationModel, line: CutLine): void {

@@ -105,33 +105,24 @@ function readMince(reading: Reading): number {
   return total;
 }
 
-function readLoose(reading: Reading, { demand, packGrams, floor, steps, sources }: LooseColumns): PlannedLoose {
-  const { heaps, model } = reading;
-  const cut = getCut(model, demand.cutId);
-  const cap = demand.floor + demand.steps.reduce((sum, step) => sum + step.packs, 0);
-  const wanted = [floor, ...steps].reduce((sum, column) => sum + value(reading, column), 0);
-  const grams = sources.reduce((sum, { column }) => sum + wholeGrams(reading, column), 0);
-  const there = Math.min(
-    grams,
-    sources.reduce((sum, { state }) => sum + heaps.get(demand.cutId, state), 0),
-  );
-  const most = Math.min(cap, Math.floor(there / cut.minPackGrams));
-  const least = Math.ceil(there / cut.maxPackGrams);
-  const packs = Math.max(0, Math.min(most, Math.max(least, Math.round(Math.min(wanted, there / packGrams)))));
-  let open = Math.min(there, packs * cut.maxPackGrams);
-  let taken = 0;
-  for (const { state } of sources) {
-    const part = heaps.take(demand.cutId, state, open);
+function readLoose(reading: Reading, columns: LooseColumns): PlannedLoose {
+  const { demand, sources } = columns;
+  const cut = getCut(reading.model, demand.cutId);
+  const packs = columns.packs ? Math.round(value(reading, columns.packs)) : 0;
+  let open = packs * cut.maxPackGrams;
+  let grams = 0;
+  for (const { state, column } of sources) {
+    const part = reading.heaps.take(demand.cutId, state, Math.min(open, wholeGrams(reading, column)));
     open -= part;
-    taken += part;
+    grams += part;
   }
-  balanceOf(reading, demand.cutId).looseGrams += taken;
+  balanceOf(reading, demand.cutId).looseGrams += grams;
   return {
     cutId: demand.cutId,
     packs,
-    grams: taken,
+    grams,
     short: Math.max(0, demand.floor - packs),
-    incomePence: looseIncome(demand, { packs, grams: taken, tenthPencePerKg: cut.tenthPencePerKg }),
+    incomePence: looseIncome(demand, { packs, grams, tenthPencePerKg: cut.tenthPencePerKg }),
   };
 }
 
@@ -158,11 +149,12 @@ function boxIncome(variant: BoxVariant, boxes: number): number {
 /** Sets the grams of every box aside first, so that what is left on the heaps is spare for all of them. */
 function setAside(reading: Reading, columns: BoxColumns): { boxes: number; cells: Cell[] } {
   const boxes = Math.round(value(reading, columns.boxes));
-  const cells = columns.cells.map(({ line, cutId, state, column }) => ({
+  const cells = columns.cells.map(({ line, cutId, state, column, packs }) => ({
     line,
     cut: getCut(reading.model, cutId),
     state,
     grams: reading.heaps.take(cutId, state, wholeGrams(reading, column)),
+    packs: packs ? Math.round(value(reading, packs)) : 0,
   }));
   return { boxes, cells };
 }

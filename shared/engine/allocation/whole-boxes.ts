@@ -48,14 +48,11 @@ export function makeWholeBoxes(
     for (const { cut, state, grams } of plan.cells) about.heaps.add(cut.id, state, grams);
     return { contents: [], failedLine: null };
   }
-  const byLine = variant.lines.map((line) =>
-    dealLine(
-      plan.cells.filter((cell) => cell.line.id === line.id),
-      plan.boxes,
-      about.cuts,
-    ),
-  );
-  const boxes = Array.from({ length: plan.boxes }, (_, index) => byLine.flatMap((line) => line[index] ?? []));
+  const boxes = Array.from({ length: plan.boxes }, (): PlannedContents => []);
+  for (const line of variant.lines) {
+    const cells = plan.cells.filter((cell) => cell.line.id === line.id);
+    dealLine(cells, boxes);
+  }
   for (const { cut, state, grams } of plan.cells) about.heaps.add(cut.id, state, grams);
   for (const { cut, state, grams } of boxes.flat()) about.heaps.add(cut.id, state, -grams);
   const cuts = [...about.cuts.values()];
