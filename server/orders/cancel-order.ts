@@ -4,6 +4,7 @@ import { refundablePence } from '#shared/domain/refunds.ts';
 import { formatDayTime } from '#shared/domain/words.ts';
 import { AppError } from '#shared/errors.ts';
 import type { Deps, Tx } from '#server/deps.ts';
+import { lockCuttingDay } from '#server/carcases/cutting-day-queries.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
 import { orderCancelledMail } from '#server/mail/order-cancelled.ts';
 import { queueMail } from '#server/mail/outbox.ts';
@@ -11,7 +12,7 @@ import { insertRefund, listPayments } from '#server/payments/payment-queries.ts'
 import { enqueue } from '#server/queue.ts';
 import { unsell } from './hold.ts';
 import { findOrder, listLines, lockOrder, updateOrder, type OrderRow } from './order-queries.ts';
-import { returnPacks } from './pack-queries.ts';
+import { returnPacks } from './return-packs.ts';
 import { closePage } from './place-order.ts';
 import { getDay, getOrderByToken, noSuchOrder, readOrder, readOrderFacts, readSummaries } from './read-order.ts';
 
@@ -19,10 +20,9 @@ type Cancelling = { reason: string | null; byUserId: string | null };
 
 /** The customer's own cancelling, by the private link, until the cut-off. A second press finds it done. */
 export async function cancelOrder(deps: Deps, token: string): Promise<Order> {
-  await closePage(deps, await getOrderByToken(deps.db, token));
+  const known = await closePage(deps, await getOrderByToken(deps.db, token));
   await deps.db.transaction(async (tx) => {
-    const order = await lockOrder(tx, { token });
-    if (!order) throw noSuchOrder();
+    const order = await lockWithDay(tx, known);
     if (order.state === 'cancelled') return;
     const day = await getDay(tx, order.cuttingDayId);
     if (order.state !== 'awaiting payment' && deps.clock.now() >= day.cutOffAt) {
@@ -46,14 +46,21 @@ export async function cancelOrderByOwner(
   if (!known) throw noSuchOrder();
   await closePage(deps, known);
   await deps.db.transaction(async (tx) => {
-    const order = await lockOrder(tx, { id: orderId });
-    if (!order) throw noSuchOrder();
+    const order = await lockWithDay(tx, known);
     if (!canMoveOrder(order.state, 'cancelled')) throw cannotCancel(order);
     await cancel(tx, deps, { order, reason, byUserId });
   });
   const [summary] = await readSummaries(deps.db, { id: orderId });
   if (!summary) throw noSuchOrder();
   return summary;
+}
+
+/** The day first, since filling orders with packs holds the day and then its orders. */
+async function lockWithDay(tx: Tx, known: OrderRow): Promise<OrderRow> {
+  await lockCuttingDay(tx, known.cuttingDayId);
+  const order = await lockOrder(tx, { id: known.id });
+  if (!order) throw noSuchOrder();
+  return order;
 }
 
 function cannotCancel(order: OrderRow): AppError {

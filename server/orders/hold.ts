@@ -28,22 +28,26 @@ export async function take(tx: Tx, request: HoldRequest, into: 'held' | 'sold'):
     if (short.length > 0) throw outOfStock(day, request.lines, short);
     throw new AppError('STATE_CHANGED', 'Stock moved at this very moment. Nothing was taken; please press again.');
   }
-  if (!(await takeSlot(tx, slotId, day.id))) throw await slotRefusal(tx, request);
+  if (!(await takeSlot(tx, slotId, day.id))) throw await slotFull(tx, slotId);
   return wanted;
 }
 
-async function slotRefusal(tx: Tx, { day, slotId }: HoldRequest): Promise<AppError> {
+/** The slot, when it belongs to the day and is still to come. */
+export async function getSlotOfDay(tx: Tx, slotId: string, at: { dayId: string; now: Date }) {
   const slot = await findSlot(tx, slotId);
-  if (slot?.cuttingDayId !== day.id) {
-    return new AppError('INVALID_INPUT', 'Choose a collection time of this cutting day. Nothing was taken.', {
-      fields: { slotId: 'This time belongs to another day.' },
-    });
-  }
-  return new AppError(
-    'SLOT_FULL',
-    `The time on ${formatDayTime(slot.startsAt)} has just filled up. Nothing was taken; please choose another time.`,
-    { fields: { slotId: 'This time is full.' }, figures: { left: 0 } },
-  );
+  if (slot?.cuttingDayId === at.dayId && slot.startsAt > at.now) return slot;
+  throw new AppError('INVALID_INPUT', 'Choose a collection time of this cutting day. Nothing was taken.', {
+    fields: { slotId: 'This time cannot be chosen for this day.' },
+  });
+}
+
+async function slotFull(tx: Tx, slotId: string): Promise<AppError> {
+  const slot = await findSlot(tx, slotId);
+  const time = slot ? `The time on ${formatDayTime(slot.startsAt)}` : 'This time';
+  return new AppError('SLOT_FULL', `${time} has just filled up. Nothing was taken; please choose another time.`, {
+    fields: { slotId: 'This time is full.' },
+    figures: { left: 0 },
+  });
 }
 
 export type Taken = { lines: readonly BasketLine[]; slotId: string };

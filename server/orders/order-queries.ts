@@ -117,6 +117,15 @@ export async function getCollection(db: Db | Tx, slotId: string) {
   return row;
 }
 
+export function listPacksOfOrder(tx: Tx, orderId: string) {
+  return tx
+    .select({ id: pack.id, carcaseId: pack.carcaseId, grams: pack.grams })
+    .from(packAssignment)
+    .innerJoin(orderLine, eq(orderLine.id, packAssignment.orderLineId))
+    .innerJoin(pack, eq(pack.id, packAssignment.packId))
+    .where(and(eq(orderLine.orderId, orderId), eq(packAssignment.isLive, true)));
+}
+
 /** Packs that lie in an order, box by box. */
 export function listOrderPacks(db: Db | Tx, orderId: string) {
   return db

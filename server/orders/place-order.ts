@@ -10,7 +10,7 @@ import { asPaymentsDown, createPaymentPage, endPaymentPage, isRefusedEmail } fro
 import { endUnknownPage, releaseUnpaged } from '#server/payments/payment-service.ts';
 import { releaseHold, settlePage } from '#server/payments/settle-page.ts';
 import { getDayOnSale, mergeLines } from './basket.ts';
-import { take } from './hold.ts';
+import { getSlotOfDay, take } from './hold.ts';
 import {
   findOrder,
   insertOrder,
@@ -48,7 +48,7 @@ export async function placeOrder(deps: Deps, request: Request): Promise<Placed> 
 /** Null: another press came first. */
 async function start(deps: Deps, { basket, caller }: Request): Promise<Placed | null> {
   const order = await deps.db.transaction(async (tx) => {
-    const day = await getDayInTime(tx, deps, basket.dayId);
+    const day = await getDayInTime(tx, deps, basket);
     const order = await insertOrder(tx, {
       token: randomBytes(24).toString('base64url'),
       basketKey: basket.basketKey,
@@ -92,7 +92,7 @@ async function holdAgain(deps: Deps, known: OrderRow, { basket, caller }: Reques
   return deps.db.transaction(async (tx) => {
     const order = await lockOrder(tx, { id: known.id });
     if (!order || order.version !== known.version || order.state !== 'awaiting payment' || order.isHeld) return null;
-    const day = await getDayInTime(tx, deps, basket.dayId);
+    const day = await getDayInTime(tx, deps, basket);
     const again = await updateOrder(tx, order.id, {
       ...detailsOf(basket),
       userId: caller?.id ?? order.userId,
@@ -119,15 +119,17 @@ function detailsOf({ dayId, slotId, name, email, phone, note }: Checkout) {
   return { cuttingDayId: dayId, slotId, name, email, phone, note };
 }
 
-async function getDayInTime(tx: Tx, deps: Deps, dayId: string) {
+async function getDayInTime(tx: Tx, deps: Deps, { dayId, slotId }: Checkout) {
+  const now = deps.clock.now();
   const day = await getDayOnSale(tx, dayId);
-  if (deps.clock.now() >= day.cutOffAt) {
+  if (now >= day.cutOffAt) {
     throw new AppError(
       'CUTOFF_PASSED',
       `Orders for this day closed ${formatDayTime(day.cutOffAt)}. Nothing was charged; please choose a later day.`,
       { figures: { cutOffAt: day.cutOffAt.toISOString() } },
     );
   }
+  await getSlotOfDay(tx, slotId, { dayId, now });
   return day;
 }
 

@@ -5,6 +5,7 @@ import { offer } from '#db/schema/allocations.ts';
 import { cuttingDay } from '#db/schema/carcases.ts';
 import { customerOrder } from '#db/schema/orders.ts';
 import { addDays } from '#shared/domain/day.ts';
+import { settleRefund } from '#server/payments/payment-service.ts';
 import { startWorld, type World } from '#tests/support/harness.ts';
 import { makeSlot } from '#tests/support/make-farm.ts';
 import {
@@ -21,6 +22,7 @@ import {
   takenOf,
   type Stall,
 } from '#tests/support/make-order.ts';
+import { takeConsole } from '#tests/support/quiet-console.ts';
 
 let world: World;
 let stall: Stall;
@@ -252,10 +254,10 @@ test('a refund, while the payment company is down, is tried again until it is do
   await world.request().post(`/api/orders/${order.token}/cancel`);
   world.payments.control({ down: true });
   await world.runJobs();
+  expect(takeConsole()).toEqual([expect.stringContaining('settle-refund')]);
   const [, waiting] = await paymentsOf(world, order.id);
   expect(waiting).toMatchObject({ kind: 'refund', state: 'asked', error: expect.any(String) });
   world.payments.control({ down: false });
-  const { settleRefund } = await import('#server/payments/payment-service.ts');
   await settleRefund(world.deps, waiting?.id ?? '');
   await settleRefund(world.deps, waiting?.id ?? '');
   expect(await getOrderRow(world, order.token)).toMatchObject({ paymentState: 'refunded' });
