@@ -4,7 +4,7 @@ import { NumberField } from './number-field.tsx';
 
 type FormNumberProps<Values extends FieldValues> = Omit<
   ComponentProps<typeof NumberField>,
-  'value' | 'onChange' | 'onBlur' | 'error' | 'ref'
+  'value' | 'onChange' | 'onBlur' | 'error'
 > & { control: Control<Values>; name: FieldPath<Values> };
 
 /** A figure of a form: grams, pence, a rate or a count. */
