@@ -68,8 +68,13 @@ export async function payFor(world: World, placed: Placed, card = CARDS.good): P
 }
 
 /** An order that is paid and confirmed. */
-export async function makeConfirmedOrder(world: World, stall: Stall, more: Record<string, unknown> = {}) {
-  const placed = await place(world, basketFor(stall, more));
+export async function makeConfirmedOrder(
+  world: World,
+  stall: Stall,
+  more: Record<string, unknown> = {},
+  cookie?: string,
+) {
+  const placed = await place(world, basketFor(stall, more), cookie);
   await payFor(world, placed);
   return getOrderRow(world, placed.token);
 }
