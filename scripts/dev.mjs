@@ -2,7 +2,7 @@
 import { spawn } from 'node:child_process';
 import { ensurePostgres } from './postgres.mjs';
 import { migrateDemoDatabase, seedDemoDatabase, startDemoCluster } from './steps/demo-database.mjs';
-import { showAddresses, startFakes, startWebServer } from './steps/demo-services.mjs';
+import { showAddresses, startServices } from './steps/demo-services.mjs';
 import { ensureDependencies } from './steps/dependencies.mjs';
 import { requireFreePorts } from './steps/ports.mjs';
 import { identify, stopProcess } from './steps/processes.mjs';
@@ -40,7 +40,7 @@ async function dev() {
   await seedDemoDatabase(databaseUrl, ports);
   const origin = `http://localhost:${metroPort}`;
   const env = { ...demoEnvironment({ ports, databaseUrl, origin }), NODE_ENV: 'development' };
-  const services = [...(await startFakes(env)), await startWebServer(env, ['--watch'])];
+  const services = await startServices(env, ['--watch']);
   showAddresses(env);
   throw new Refusal(await Promise.race([startMetro(env), ...services.map((service) => service.ended)]));
 }

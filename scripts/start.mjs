@@ -1,7 +1,7 @@
 // npm start: the whole demo on this machine, installing and building what is missing.
 import { ensurePostgres } from './postgres.mjs';
 import { migrateDemoDatabase, seedDemoDatabase, startDemoCluster } from './steps/demo-database.mjs';
-import { showAddresses, startFakes, startWebServer } from './steps/demo-services.mjs';
+import { showAddresses, startServices } from './steps/demo-services.mjs';
 import { ensureDependencies } from './steps/dependencies.mjs';
 import { requireFreePorts } from './steps/ports.mjs';
 import { program } from './steps/program.mjs';
@@ -24,7 +24,7 @@ async function start() {
   await seedDemoDatabase(databaseUrl, ports);
   await ensureWebApp();
   const env = demoEnvironment({ ports, databaseUrl });
-  const services = [...(await startFakes(env)), await startWebServer(env)];
+  const services = await startServices(env);
   showAddresses(env);
   throw new Refusal(await Promise.race(services.map((service) => service.ended)));
 }

@@ -1,34 +1,34 @@
 import { readFileSync } from 'node:fs';
 import path from 'node:path';
-import { say } from './say.mjs';
+import { say, step } from './say.mjs';
 import { startService } from './services.mjs';
 import { root } from './settings.mjs';
 
-/** The two stand-ins for other companies: the mail server with its mailbox page, and the payment company. */
-export async function startFakes(env) {
-  const mail = await startService({
-    name: 'mail fake',
-    args: ['--import', 'tsx', 'scripts/mail-fake/main.ts'],
-    env,
-    health: `http://127.0.0.1:${env.MAIL_FAKE_HTTP_PORT}/api/messages`,
-  });
-  const payments = await startService({
-    name: 'payments fake',
-    args: ['--import', 'tsx', 'payments-fake/main.ts'],
-    env,
-    health: `http://127.0.0.1:${env.PAYMENTS_FAKE_PORT}/health`,
-  });
-  return [mail, payments];
-}
-
-/** `flags` go to Node before the program, such as --watch. */
-export function startWebServer(env, flags = []) {
-  return startService({
-    name: 'server',
-    args: [...flags, '--import', 'tsx', 'server/main.ts'],
-    env,
-    health: `http://127.0.0.1:${env.PORT}/api/health`,
-  });
+/**
+ * The server and the two stand-ins for other companies, side by side: none of them needs another to start.
+ * `serverFlags` go to Node before the server's program, such as --watch.
+ */
+export function startServices(env, serverFlags = []) {
+  const programs = [
+    {
+      name: 'mail fake',
+      args: ['--import', 'tsx', 'scripts/mail-fake/main.ts'],
+      health: `http://127.0.0.1:${env.MAIL_FAKE_HTTP_PORT}/api/messages`,
+    },
+    {
+      name: 'payments fake',
+      args: ['--import', 'tsx', 'payments-fake/main.ts'],
+      health: `http://127.0.0.1:${env.PAYMENTS_FAKE_PORT}/health`,
+    },
+    {
+      name: 'server',
+      args: [...serverFlags, '--import', 'tsx', 'server/main.ts'],
+      health: `http://127.0.0.1:${env.PORT}/api/health`,
+    },
+  ];
+  return step('Starting the server, the payments fake and the mail fake', () =>
+    Promise.all(programs.map((program) => startService({ ...program, env }))),
+  );
 }
 
 export function showAddresses(env) {

@@ -4,7 +4,7 @@ import path from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
 import { identify, isRunning, openLog, stopProcess, tail } from './processes.mjs';
 import { isStopping, onStop } from './program.mjs';
-import { Refusal, say, step } from './say.mjs';
+import { Refusal, say } from './say.mjs';
 import { dataDir, root } from './settings.mjs';
 
 const runFile = path.join(dataDir, 'running.json');
@@ -71,9 +71,7 @@ export async function startService({ name, args, env, health }) {
     }
     return `The ${name} does not answer at ${health}. Its log, ${log.file}, ends with:\n${tail(log.file)}`;
   };
-  await step(`Starting the ${name}`, async () => {
-    const trouble = await Promise.race([ready(), ended]);
-    if (trouble) throw new Refusal(trouble);
-  });
+  const trouble = await Promise.race([ready(), ended]);
+  if (trouble) throw new Refusal(trouble);
   return { ended };
 }

@@ -70,6 +70,8 @@ async function build(hash) {
       env: exportSettings(),
     });
     await precompress(path.join(fresh, 'client'));
+    // The renderer is CommonJS, while the project's own package.json says that a .js file is a module.
+    writeFileSync(path.join(fresh, 'server/package.json'), '{ "type": "commonjs" }\n');
     writeFileSync(path.join(fresh, path.basename(stamp)), hash);
     rmSync(dist, { recursive: true, force: true });
     renameSync(fresh, dist);

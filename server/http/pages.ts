@@ -1,8 +1,12 @@
 import { createHash } from 'node:crypto';
 import fs from 'node:fs';
+import { createRequire } from 'node:module';
 import path from 'node:path';
-import { createRequestHandler } from 'expo-server/adapter/express';
+import type * as expoServer from 'expo-server/adapter/express';
 import express, { type RequestHandler, Router } from 'express';
+
+// Its module form calls `require`, which modules do not have: the CommonJS form is asked for.
+const { createRequestHandler } = createRequire(import.meta.url)('expo-server/adapter/express') as typeof expoServer;
 
 const YEAR_MS = 365 * 24 * 3_600_000;
 
