@@ -262,7 +262,7 @@ test('a refund that the bank sends back later stands as failed', async () => {
   world.payments.advance({ minutes: 60 });
   await world.payments.flush();
   const [, refund] = await paymentsOf(world, order.id);
-  expect(refund).toMatchObject({ state: 'failed', error: expect.any(String) });
+  expect(refund).toMatchObject({ state: 'failed', error: expect.any(String) as unknown });
   expect((await getOrderRow(world, placed.token)).paymentState).toBe('paid');
 });
 
