@@ -1,4 +1,4 @@
-import type { Cut } from './specification.ts';
+import type { Choice, Cut } from './specification.ts';
 
 type Group = Pick<Cut, 'kind' | 'cooking' | 'leanPpht' | 'isSoldLoose' | 'mayBeMinced' | 'useByDays'>;
 
@@ -130,6 +130,14 @@ const ROWS: readonly Row[] = [
   { id: 'salmon-cut-joint', name: 'Salmon cut', primal: 'silverside', group: 'roast', packs: [700, 1_500, 1_500], prices: [17, 8], is: 'A neat round joint for a small household.', leanPpht: 96_000 },
   { id: 'braising-slices', name: 'Braising slices', primal: 'silverside', group: 'braise', packs: [400, 550, 550], prices: [14.8, 7], is: 'Lean slices of silverside.', leanPpht: 95_000 },
   { id: 'bavette', name: 'Bavette', primal: 'flank', group: 'steak', packs: [300, 480, 480], prices: [24, 8], is: 'Loose-grained and full of taste; serve it pink.' },
+  { id: 'tri-tip', name: 'Tri-tip', primal: 'thick-flank', group: 'roast', packs: [600, 1_200, 1_200], prices: [22, 9], is: 'The three-cornered muscle above the thick flank, for grill or oven.', leanPpht: 90_000 },
+  { id: 'thick-flank-steak', name: 'Thick flank steak', primal: 'thick-flank', group: 'steak', packs: [350, 520, 520], prices: [18, 8], is: 'The round middle of the thick flank, cut thin.', leanPpht: 96_000 },
+  { id: 'topside-bullet', name: 'Topside bullet', primal: 'topside', group: 'roast', packs: [800, 1_800, 1_800], prices: [18.5, 8], is: 'The heart of the topside with its cap taken off.', leanPpht: 96_000 },
+  { id: 'flank-steak', name: 'Flank steak', primal: 'flank', group: 'steak', packs: [400, 800, 800], prices: [20, 8], is: 'One flat muscle; slice it across the grain.', leanPpht: 93_000 },
+  { id: 'short-rib', name: 'Short ribs', primal: 'brisket', group: 'braise', packs: [700, 1_400, 1_400], prices: [14.5, 5], is: 'Thick ends of the ribs, for half a day in the oven.', leanPpht: 50_000 },
+  { id: 'chuck-eye-steak', name: 'Chuck eye steak', primal: 'chuck-eye', group: 'steak', packs: [350, 520, 520], prices: [22, 8], is: 'Where the rib-eye runs into the shoulder.', leanPpht: 85_000 },
+  { id: 'shoulder-tender', name: 'Shoulder tender', primal: 'leg-of-mutton', group: 'steak', packs: [250, 450, 450], prices: [27, 8], is: 'A small round muscle almost as tender as fillet.', leanPpht: 95_000 },
+  { id: 'shoulder-heart-steak', name: 'Shoulder heart steak', primal: 'leg-of-mutton', group: 'steak', packs: [350, 520, 520], prices: [18, 7], is: 'Lean steaks from the middle of the leg of mutton cut.', leanPpht: 94_000 },
   { id: 'brisket-joint', name: 'Brisket, boned and rolled', primal: 'brisket', group: 'potRoast', packs: [1_000, 2_000, 2_000], prices: [13.2, 6], is: 'Three slow hours and it falls apart.', leanPpht: 80_000 },
   { id: 'brisket-on-the-bone', name: 'Brisket on the bone', primal: 'brisket', group: 'onBone', packs: [1_500, 3_500, 3_000], prices: [9.8, 4.5], is: 'For the smoker or a long pot.', leanPpht: 62_000 },
   { id: 'braising-steak', name: 'Braising steak', primal: 'chuck', group: 'braise', packs: [400, 550, 550], prices: [14.2, 6.5], is: 'Chuck in thick slices.' },
@@ -148,10 +156,13 @@ const ROWS: readonly Row[] = [
 
 const CUTS: ReadonlyMap<string, Cut> = new Map(ROWS.map((row) => [row.id, toCut(row)]));
 
-/** Cuts by id, in the order of the counter: steaks first, mince last. */
-export const BRITISH_CUT_IDS: readonly string[] = ROWS.map((row) => row.id);
-
-/** The cuts named, in the order of the counter. */
+/** The cuts named, in the order of the counter: steaks first, mince last. */
 export function britishCuts(ids: ReadonlySet<string>): Cut[] {
   return [...CUTS.values()].filter((cut) => ids.has(cut.id));
+}
+
+/** Every cut and trim that these choices can make, and mince, which is made of trim afterwards. */
+export function cutsOf(choices: readonly Choice[]): Cut[] {
+  const lines = choices.flatMap(({ ways }) => ways.flatMap((way) => way.lines));
+  return britishCuts(new Set([...lines.map(({ id }) => id), 'mince']));
 }

@@ -1,8 +1,10 @@
-import { BRITISH_CUT_IDS, britishCuts } from './british-cuts.ts';
+import { cutsOf } from './british-cuts.ts';
 import { foreChoices } from './fore-choices.ts';
 import { hindChoices } from './hind-choices.ts';
 import { REFERENCE_CLASS, referenceNarrowPrimals, referenceQuarters } from './reference-tissues.ts';
 import type { Specification } from './specification.ts';
+
+const choices = [...foreChoices, ...hindChoices];
 
 /** The British side as most farms have it cut: joints, steaks, dice and mince, with each either/or that the trade knows. */
 export const traditionalSide: Specification = {
@@ -13,6 +15,6 @@ export const traditionalSide: Specification = {
   reference: { ...REFERENCE_CLASS },
   quarters: referenceQuarters,
   narrowPrimals: referenceNarrowPrimals,
-  choices: [...foreChoices, ...hindChoices],
-  cuts: britishCuts(new Set(BRITISH_CUT_IDS)),
+  choices,
+  cuts: cutsOf(choices),
 };

@@ -4,9 +4,12 @@ import { EngineError } from '#shared/engine/engine-error.ts';
 import { checkSpecification, listSpecificationFaults } from '#shared/engine/figures/check-specification.ts';
 import { BONELESS_PRIMAL_KG, sumTissues } from '#shared/engine/figures/reference-tissues.ts';
 import { Specification } from '#shared/engine/figures/specification.ts';
+import { cowSide } from '#shared/engine/figures/cow-side.ts';
+import { seamSide } from '#shared/engine/figures/seam-side.ts';
 import { traditionalSide } from '#shared/engine/figures/traditional-side.ts';
+import { cutCarcase } from '#tests/support/make-carcase-facts.ts';
 
-const shipped = [traditionalSide];
+const shipped = [traditionalSide, seamSide, cowSide];
 const primalsOf = (specification: Specification) => specification.quarters.flatMap((quarter) => quarter.primals);
 
 describe.each(shipped)('the shipped specification $id', (specification) => {
@@ -73,6 +76,36 @@ describe('the traditional side', () => {
     expect(ours('leg-of-mutton')).toBe(published('legOfMutton'));
     expect(ours('chuck')).toBe(published('chuckAndNeck'));
     expect(ours('fore-shin', 'hind-shin')).toBe(published('heelAndShank'));
+  });
+});
+
+/** Share of a side's products by how they are cooked, each choice cut its first way. */
+function shareOf(specification: Specification, cooking: string): number {
+  const { conformation, fatClass } = specification.reference;
+  const result = cutCarcase({ conformation, fatClass }, { specification });
+  const products = result.nodes.filter((node) => node.cutId !== null);
+  const cooked = new Map(specification.cuts.map((cut) => [cut.id, cut.cooking]));
+  const sum = (nodes: typeof products) => nodes.reduce((total, node) => total + node.grams, 0);
+  return sum(products.filter((node) => cooked.get(node.cutId ?? '') === cooking)) / sum(products);
+}
+
+describe('the three sides beside each other', () => {
+  it('the seam side gives most for the grill, the cow most for the mincer', () => {
+    expect(shareOf(seamSide, 'grill')).toBeGreaterThan(shareOf(traditionalSide, 'grill') * 1.3);
+    expect(shareOf(cowSide, 'mince')).toBeGreaterThan(0.7);
+    expect(shareOf(cowSide, 'mince')).toBeGreaterThan(shareOf(traditionalSide, 'mince') * 2);
+  });
+
+  it('a steer cut by the specification of a cow has the meat of a steer', () => {
+    const meat = (specification: Specification) => {
+      const { nodes } = cutCarcase({}, { specification });
+      return nodes.find(({ path }) => path === 'left/hind/topside')?.grams ?? 0;
+    };
+    expect(Math.abs(meat(cowSide) / meat(traditionalSide) - 1)).toBeLessThan(0.001);
+  });
+
+  it('no way of the cow keeps vertebral column', () => {
+    expect(cowSide.choices.flatMap(({ ways }) => ways).some((way) => way.keepsVertebrae)).toBe(false);
   });
 });
 
