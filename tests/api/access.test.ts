@@ -1,10 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { AUTH_ENDPOINTS } from '#server/auth/auth.ts';
-import { addDays } from '#shared/domain/day.ts';
-import { traditionalSide } from '#shared/engine/figures/traditional-side.ts';
 import { ROLES, type Role } from '#shared/domain/roles.ts';
-import { makeCuttingDay, makeSpecification } from '#tests/support/make-farm.ts';
 import { startWorld, type World } from '#tests/support/harness.ts';
 import { makeConfirmedOrder, makeStall } from '#tests/support/make-order.ts';
 import { makeReservation } from '#tests/support/make-reservation.ts';
@@ -204,10 +201,7 @@ describe('people who hold the same role', () => {
     const [first, second] = [await world.signIn('butcher'), await world.signIn('butcher')];
     const accountId = await makeTradeAccount(world.db, first.userId, 'Fellside Butchers');
     await makeTradeAccount(world.db, second.userId, 'Gill & Beck');
-    const { id: specificationId } = await makeSpecification(world.db, { name: 'A side', body: traditionalSide });
-    const today = world.clock.today();
-    const day = await makeCuttingDay(world.db, today, { specificationId, day: addDays(today, 16) });
-    const own = await makeReservation(world.db, { accountId, cuttingDayId: day.id, state: 'asked' });
+    const own = await makeReservation(world.db, { accountId, cuttingDayId: stall.day.id, state: 'asked' });
     const list = async (cookie: string) => (await world.request(cookie).get('/api/trade/reservations')).body as unknown;
     expect(await list(first.cookie)).toMatchObject({ reservations: [{ id: own.id }] });
     expect(await list(second.cookie)).toEqual({ reservations: [] });

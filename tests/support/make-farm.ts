@@ -7,6 +7,7 @@ import { collectionPoint, collectionSlot } from '#db/schema/orders.ts';
 import type { Db } from '#db/client.ts';
 import { addDays, londonInstant, type Day } from '#shared/domain/day.ts';
 import { earTagCheckDigit } from '#shared/domain/ear-tag.ts';
+import { traditionalSide } from '#shared/engine/figures/traditional-side.ts';
 
 /** One row that was just inserted. */
 async function only<T>(rows: Promise<T[]>): Promise<T> {
@@ -55,7 +56,7 @@ export function makeSpecification(db: Db, more: Partial<typeof cuttingSpecificat
   return only(
     db
       .insert(cuttingSpecification)
-      .values({ name: 'A side for tests', edition: 1, body: {}, ...more })
+      .values({ name: 'A side for tests', edition: 1, body: traditionalSide, ...more })
       .returning(),
   );
 }
