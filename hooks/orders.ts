@@ -17,6 +17,7 @@ import {
   type Checkout,
   type Order,
 } from '#shared/contracts/orders.ts';
+import { AppError, type FieldErrors } from '#shared/errors.ts';
 import { call } from './api.ts';
 import { useLoaded, type Loaded } from './loaded.ts';
 import { STALE } from './query-client.ts';
@@ -102,4 +103,12 @@ export function useMyOrders(isSignedIn: boolean) {
     staleTime: STALE.office,
     enabled: isSignedIn,
   });
+}
+
+/** A refused order as the form shows it: one sentence, and the sentences that stand beside fields. */
+export function refusalOf(error: Error | null): { message: string; fields: FieldErrors } | undefined {
+  if (!error) return undefined;
+  if (!(error instanceof AppError)) return { message: error.message, fields: {} };
+  const slot = error.code === 'SLOT_FULL' ? { slotId: error.message } : {};
+  return { message: error.message, fields: { ...slot, ...error.fields } };
 }

@@ -56,7 +56,8 @@ export function BasketItemRow({ name, quantity, line, isAbsent, elsewhere, onQua
           <Button
             kind="quiet"
             small
-            label={`Move to ${formatDay(elsewhere.day)}: ${elsewhere.free} left`}
+            label={`Move the basket to ${formatDay(elsewhere.day)}`}
+            name={`Move the basket to ${formatDay(elsewhere.day)}: ${name}, ${elsewhere.free} left`}
             onPress={() => onDay(elsewhere.id)}
           />
         ) : null}

@@ -82,6 +82,7 @@ const basket = `
 `;
 
 const orders = `
+:root .w-form{display:flex;flex-direction:column;gap:40px;min-width:0;margin:0}
 :root .w-way{display:flex;flex-direction:column;margin:0;padding:0;list-style:none}
 :root .w-way-stop{display:grid;grid-template-columns:20px minmax(0,1fr);gap:2px 14px;padding-bottom:18px;position:relative}
 :root .w-way-stop:last-child{padding-bottom:0}

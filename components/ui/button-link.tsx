@@ -24,8 +24,9 @@ export function ButtonLink({ href, label, kind = 'primary', ...how }: ButtonLink
       {...(how.name === undefined ? {} : { 'aria-label': how.name })}
       style={css('w-button', `w-button-${kind}`, how.wide && 'w-button-full', how.small && 'w-button-small')}
     >
-      {how.icon ? <Icon name={how.icon} /> : null}
+      {how.icon && how.icon !== 'forward' ? <Icon name={how.icon} /> : null}
       {label}
+      {how.icon === 'forward' ? <Icon name="forward" /> : null}
     </Link>
   );
 }

@@ -1,0 +1,124 @@
+import { useLoaderData, useRouter } from 'expo-router';
+import type { GenerateMetadataFunction } from 'expo-server';
+import { View } from 'react-native';
+import { CheckoutForm, type CheckoutFields } from '#components/checkout/checkout-form.tsx';
+import { CheckoutTerms, TermsWords } from '#components/checkout/checkout-terms.tsx';
+import { ListWaiting } from '#components/shop/list-waiting.tsx';
+import { ShopPage } from '#components/shop/shop-page.tsx';
+import { css } from '#components/theme/css.ts';
+import { ButtonLink } from '#components/ui/button-link.tsx';
+import { EmptyState } from '#components/ui/empty-state.tsx';
+import { Notice } from '#components/ui/notice.tsx';
+import { Skeleton } from '#components/ui/skeleton.tsx';
+import { StateView } from '#components/ui/state-view.tsx';
+import { TextLink } from '#components/ui/text-link.tsx';
+import { TitleBar } from '#components/ui/title-bar.tsx';
+import { useBasketOrder } from '#hooks/basket-lines.ts';
+import { checkoutResolver } from '#hooks/checkout-resolver.ts';
+import { loadCounter, useCounter } from '#hooks/counter.ts';
+import { useMe } from '#hooks/me.ts';
+import { refusalOf, usePlaceOrder } from '#hooks/orders.ts';
+import { pageMetadata } from '#hooks/page-metadata.ts';
+import { useCollections, type CutList } from '#hooks/shop.ts';
+import { noteOrder, useBasket, useIsBasketRead } from '#hooks/use-basket.ts';
+import { usePageReturn } from '#hooks/use-page-return.ts';
+import { useTitle } from '#hooks/use-title.ts';
+import type { ShopHome } from '#shared/contracts/shop.ts';
+import { formatMoney } from '#shared/domain/words.ts';
+
+const TITLE = 'Checkout · Skelderwick Farm';
+
+export const generateMetadata: GenerateMetadataFunction = (request) =>
+  pageMetadata(request, { title: TITLE, hidden: true });
+
+export const loader = loadCounter;
+
+export default function CheckoutScreen() {
+  const counter = useCounter(useLoaderData<typeof loader>());
+  const basket = useBasket();
+  const isRead = useIsBasketRead();
+  useTitle(TITLE);
+  const waiting = <ListWaiting title="Checkout" rows={5} />;
+  return (
+    <ShopPage farm={counter.farm} narrow>
+      {!isRead ? (
+        waiting
+      ) : basket.items.length === 0 ? (
+        <EmptyState level={1} title="There is nothing to pay" words="Your basket is empty.">
+          <ButtonLink href="/" label="See the boxes" />
+        </EmptyState>
+      ) : (
+        <StateView query={counter} what="what is on the counter" waiting={waiting}>
+          {(data) => <Checkout {...data} />}
+        </StateView>
+      )}
+    </ShopPage>
+  );
+}
+
+function Checkout({ home, cuts }: { home: ShopHome; cuts: CutList }) {
+  const basket = useBasket();
+  const router = useRouter();
+  const { day, lines, price, isRight } = useBasketOrder(basket, { home, cuts });
+  const collections = useCollections(day?.id);
+  const { data: me } = useMe();
+  const place = usePlaceOrder();
+  usePageReturn(place.reset);
+
+  const send = (fields: CheckoutFields) => {
+    if (!day || place.isPending || place.isSuccess) return;
+    place.mutate(
+      { ...fields, basketKey: basket.key, dayId: day.id, lines },
+      {
+        onSuccess: ({ token, paymentUrl }) => {
+          noteOrder(token);
+          if (paymentUrl) window.location.assign(paymentUrl);
+          else router.replace(`/orders/${token}`);
+        },
+      },
+    );
+  };
+  const total = price.data?.totalPence;
+  return (
+    <View style={css('w-stack-l')}>
+      <View style={css('w-section')}>
+        <TextLink href="/basket" place="alone" tone="ink" icon="back">
+          Basket
+        </TextLink>
+        <TitleBar title="Checkout" />
+        {!isRight && price.data && !price.isFetching ? <NotRight /> : null}
+        {day && price.data ? (
+          <CheckoutTerms day={day} lines={price.data.lines} totalPence={price.data.totalPence} />
+        ) : (
+          <Skeleton shape="rows" count={2} />
+        )}
+      </View>
+      <StateView query={collections} what="the places and times" waiting={<Skeleton shape="rows" count={4} />}>
+        {({ points }) => (
+          <CheckoutForm
+            points={points}
+            resolver={checkoutResolver}
+            known={me?.user ? { name: me.user.name, email: me.user.email } : {}}
+            terms={day ? <TermsWords day={day} /> : null}
+            buttonLabel={total === undefined ? 'Go to payment' : `Go to payment · ${formatMoney(total)}`}
+            isSending={place.isPending || place.isSuccess}
+            refusal={refusalOf(place.error)}
+            onSubmit={send}
+          />
+        )}
+      </StateView>
+    </View>
+  );
+}
+
+function NotRight() {
+  return (
+    <Notice
+      kind="held"
+      title="Something in your basket is no longer there as you chose it."
+      kept="Nothing was ordered; the basket is as you left it."
+    >
+      <ButtonLink kind="quiet" small href="/basket" label="Back to the basket" />
+    </Notice>
+  );
+}
