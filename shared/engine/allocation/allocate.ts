@@ -2,7 +2,8 @@ import { EngineError } from '#shared/engine/engine-error.ts';
 import type { Row, Term, WriteOptions } from '#shared/engine/linear/lp-model.ts';
 import type { Solution, SolveOptions, Solver } from '#shared/engine/linear/solve.ts';
 import type { AllocationInput, Priority } from './allocation-input.ts';
-import type { AllocationModel, BoxColumns } from './allocation-model.ts';
+import type { AllocationModel, BoxColumns, Patterns } from './allocation-model.ts';
+import { findPatterns } from './box-patterns.ts';
 import type { AllocationPlan } from './allocation-plan.ts';
 import { buildModel, PRIORITIES, shortTerms } from './build-model.ts';
 import { checkInput } from './check-input.ts';
@@ -106,9 +107,9 @@ function shortPence(session: Session, { solution }: Solved): Map<Priority, numbe
   );
 }
 
-/** The second model keeps the ways and unit sales of the first and makes every pack whole. */
-function packSession(session: Session, { solution }: Solved): Session {
-  const model = buildModel(session.model.input, { isPacked: true });
+/** A later model keeps the ways and unit sales of the first; its packs are whole, or its boxes follow patterns. */
+function packSession(session: Session, { solution }: Solved, patterns?: Patterns): Session {
+  const model = buildModel(session.model.input, { isPacked: true, ...(patterns ? { patterns } : {}) });
   const columns = [...model.ways.map(({ column }) => column), ...model.units.map(({ column }) => column)];
   const fixed = columns.map((column): Row => {
     const right = Math.round(solution.columns[column] ?? 0);
@@ -134,11 +135,16 @@ function worthPerGram(draft: Draft, columns: BoxColumns, cutIds: readonly string
   return (last - columns.variant.packagingPence) / (grams / box.boxes);
 }
 
-/** Takes one box off for the first line that whole packs could not meet; null when every box is sold already. */
+/**
+ * Takes one box off for the first line that whole packs could not meet: of the variants with that line, the one whose
+ * last box brings least per gram of it. Null when every one of them is sold already.
+ */
 function takeOff(session: Session, draft: Draft): { variantId: string; lineId: string } | null {
   const [failure] = draft.failures;
   if (!failure) return null;
   const ranked = session.model.boxes
+    .filter(({ variant }) => variant.kindId === failure.variant.kindId)
+    .filter(({ variant }) => variant.lines.some(({ id }) => id === failure.line.id))
     .map((columns) => ({ columns, worth: worthPerGram(draft, columns, failure.line.cutIds) }))
     .filter(({ worth }) => worth < Infinity)
     .sort((a, b) => a.worth - b.worth || (a.columns.variant.id < b.columns.variant.id ? -1 : 1));
@@ -152,12 +158,26 @@ function takeOff(session: Session, draft: Draft): { variantId: string; lineId: s
 
 type Whole = { draft: Draft; packRounds: AllocationPlan['packRounds'] };
 
-async function makeWhole(session: Session, hoped: ReadonlyMap<Priority, number>): Promise<Whole> {
+function readWhole(session: Session, solved: Solved): Draft {
+  if (!solved.solution.hasAnswer) throw failed('No whole packs were found in time.');
+  return readPlan(session.model, solved.solution);
+}
+
+/**
+ * Whole packs of the plan: first as counts by line, dealt over the boxes; where a box then misses a line, again with
+ * every box held to a pattern of packs that can be filled; where one still does, boxes are taken off one by one.
+ */
+async function makeWhole(first: Session, plan: Solved): Promise<Whole> {
   const packRounds: AllocationPlan['packRounds'] = [];
-  let solved = await solvePhases(session, hoped);
+  const counted = packSession(first, plan);
+  let solved = await solvePhases(counted, shortPence(first, plan));
+  let draft = readWhole(counted, solved);
+  if (draft.failures.length === 0) return { draft, packRounds };
+  const { input, cuts } = counted.model;
+  const session = packSession(first, plan, findPatterns(draft.dealt, { variants: input.boxes, limits: cuts }));
+  solved = await solvePhases(session, shortPence(counted, solved));
   for (;;) {
-    if (!solved.solution.hasAnswer) throw failed('No whole packs were found in time.');
-    const draft = readPlan(session.model, solved.solution);
+    draft = readWhole(session, solved);
     const round = packRounds.length < MOST_ROUNDS ? takeOff(session, draft) : null;
     if (!round) return { draft, packRounds };
     packRounds.push(round);
@@ -181,8 +201,8 @@ export async function allocate(
   const session: Session = { ...about, model: buildModel(ordered), fixed: [], caps: new Map() };
   const solved = await solvePhases(session, new Map());
   if (!solved.solution.hasAnswer) throw failed('No plan was found in time.');
-  const { draft, packRounds } = await makeWhole(packSession(session, solved), shortPence(session, solved));
-  const { failures, ...plan } = draft;
+  const { draft, packRounds } = await makeWhole(session, solved);
+  const { failures, dealt: _dealt, ...plan } = draft;
   const [failure] = failures;
   return {
     ...plan,

@@ -26,7 +26,20 @@ export type WayColumn = {
 export type UnitColumn = FittingUnit & { column: string };
 /** `packs` is set in the second model only, where packs are whole. */
 export type CellColumn = { line: RecipeLine; cutId: string; state: MeatState; column: string; packs: string | null };
-export type BoxColumns = { variant: BoxVariant; boxes: string; floor: string; steps: string[]; cells: CellColumn[] };
+/** Boxes of one variant that hold the same number of packs of each cut in each line. */
+export type Pattern = readonly { line: RecipeLine; cutId: string; state: MeatState; packs: number }[];
+export type PatternColumns = { pattern: Pattern; boxes: string; grams: string[] };
+export type BoxColumns = {
+  variant: BoxVariant;
+  boxes: string;
+  floor: string;
+  steps: string[];
+  cells: CellColumn[];
+  /** In the third model only: how many boxes follow each pattern. */
+  patterns: PatternColumns[];
+};
+/** Patterns by variant. */
+export type Patterns = ReadonlyMap<string, readonly Pattern[]>;
 export type LooseColumns = {
   demand: LooseDemand;
   /** Grams of one pack as planned. */
@@ -45,6 +58,8 @@ export type ShortColumn = { priority: Priority; column: string; penceEach: numbe
 export type AllocationModel = {
   /** The second model: packs of every cut in every line are whole. */
   isPacked: boolean;
+  /** The third model: every box follows one of these. */
+  patterns: Patterns | null;
   input: AllocationInput;
   cuts: ReadonlyMap<string, Cut>;
   lp: LpModel;
@@ -80,9 +95,12 @@ export function pencePerKg(tenthPencePerKg: number): number {
   return tenthPencePerKg / 10;
 }
 
-export function emptyModel(input: AllocationInput, isPacked: boolean): AllocationModel {
+export function emptyModel(
+  input: AllocationInput,
+  kind: Pick<AllocationModel, 'isPacked' | 'patterns'>,
+): AllocationModel {
   return {
-    isPacked,
+    ...kind,
     input,
     cuts: new Map(input.cuts.map((cut) => [cut.id, cut])),
     lp: new LpModel(),
@@ -111,6 +129,12 @@ export function stockGrams(input: AllocationInput, cutId: string, state: MeatSta
   return input.stock
     .filter((item) => item.cutId === cutId && item.state === state)
     .reduce((sum, { grams }) => sum + grams, 0);
+}
+
+/** Frozen meat is only what lies in stock; fresh is what the day makes and what is at hand. */
+export function hasSupply(model: AllocationModel, cutId: string, state: MeatState): boolean {
+  if (stockGrams(model.input, cutId, state) > 0) return true;
+  return state === 'fresh' && model.yields.has(heapKey(cutId, 'fresh'));
 }
 
 /** A column of what a confirmed promise falls short by. Without a promise there is none. */

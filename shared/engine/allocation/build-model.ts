@@ -1,7 +1,17 @@
 import type { Term } from '#shared/engine/linear/lp-model.ts';
 import type { AllocationInput, MeatState, Priority } from './allocation-input.ts';
-import { emptyModel, getCut, heapKey, pencePerKg, stockGrams, type AllocationModel } from './allocation-model.ts';
-import { addDemand, addMince } from './model-demand.ts';
+import {
+  emptyModel,
+  getCut,
+  heapKey,
+  pencePerKg,
+  stockGrams,
+  type AllocationModel,
+  type Patterns,
+} from './allocation-model.ts';
+import { addBoxes } from './model-boxes.ts';
+import { addCutLines, addMince } from './model-cut-lines.ts';
+import { addLooseDemand } from './model-loose.ts';
 import { addSides } from './model-sides.ts';
 
 /** Whole packs of the day: what boxes and loose packs take of a cut is some number of packs within its range. */
@@ -52,13 +62,20 @@ function addSupply(model: AllocationModel, cutId: string, state: MeatState): voi
 /**
  * The program of one cutting day from an input in order (see `orderInput`). With `isPacked` the packs of every cut in
  * every line are whole numbers: too many for the plan itself, but soon answered once ways and unit sales are fixed.
+ * With `patterns` every box follows one of them.
  */
-export function buildModel(input: AllocationInput, { isPacked = false } = {}): AllocationModel {
-  const model = emptyModel(input, isPacked);
+export function buildModel(
+  input: AllocationInput,
+  about: { isPacked?: boolean; patterns?: Patterns } = {},
+): AllocationModel {
+  const { isPacked = false, patterns = null } = about;
+  const model = emptyModel(input, { isPacked, patterns });
   for (const { id } of input.cuts) model.namer.name('k', id);
   addSides(model);
   if (input.mince) addMince(model, input.mince);
-  addDemand(model);
+  addBoxes(model);
+  addLooseDemand(model);
+  addCutLines(model);
   for (const { id } of input.cuts) {
     if (!isPacked && model.packed.has(id)) addPacks(model, id);
     for (const state of ['fresh', 'frozen'] as const) addSupply(model, id, state);

@@ -8,12 +8,26 @@ export type PackLimits = Pick<Cut, 'minPackGrams' | 'maxPackGrams'>;
 /** What whole packs can make of one line of one box. */
 export type LineRange = { minGrams: number; maxGrams: number; minPacks: number; maxPacks: number };
 
+/** How many packs of one cut make its line in one box, when nothing else is in it. */
+export function packsInBox(line: RecipeLine, cut: PackLimits): { least: number; most: number } {
+  return {
+    least: Math.max(1, line.minPacks, Math.ceil(line.minGrams / cut.maxPackGrams)),
+    most: Math.min(line.maxPacks ?? Infinity, Math.floor(line.maxGrams / cut.minPackGrams)),
+  };
+}
+
+/** A cut whose packs alone can make the line; the plan puts no other into it. */
+export function isUsable(line: RecipeLine, cut: PackLimits): boolean {
+  const { least, most } = packsInBox(line, cut);
+  return least <= most;
+}
+
 /**
  * Narrows a line to what whole packs can reach: a line of 500 to 700 g in packs of 600 to 900 g begins at 600 g.
  * Null when no number of packs will do.
  */
 export function packableRange(line: RecipeLine, cuts: ReadonlyMap<string, PackLimits>): LineRange | null {
-  const allowed = line.cutIds.flatMap((id) => cuts.get(id) ?? []);
+  const allowed = line.cutIds.flatMap((id) => cuts.get(id) ?? []).filter((cut) => isUsable(line, cut));
   if (allowed.length === 0) return null;
   const lightest = Math.min(...allowed.map(({ minPackGrams }) => minPackGrams));
   const heaviest = Math.max(...allowed.map(({ maxPackGrams }) => maxPackGrams));
@@ -71,4 +85,23 @@ export function checkRecipe(name: string, recipe: Recipe, cuts: ReadonlyMap<stri
       { node: name, figures: { guaranteedGrams: recipe.guaranteedGrams, minGrams: least, maxGrams: most } },
     );
   }
+}
+
+/** Whether packs of some weight within their limits can make a box of this many packs of each cut in each line. */
+export function checkPattern(
+  recipe: Recipe,
+  pattern: readonly { line: RecipeLine; cutId: string; packs: number }[],
+  cuts: ReadonlyMap<string, PackLimits>,
+): boolean {
+  let most = 0;
+  for (const line of recipe.lines) {
+    const cells = pattern.filter((cell) => cell.line.id === line.id);
+    const sum = (size: keyof PackLimits) =>
+      cells.reduce((all, { cutId, packs }) => all + packs * (cuts.get(cutId)?.[size] ?? 0), 0);
+    const packs = cells.reduce((all, cell) => all + cell.packs, 0);
+    if (packs < line.minPacks || packs > (line.maxPacks ?? Infinity)) return false;
+    if (sum('minPackGrams') > line.maxGrams || sum('maxPackGrams') < line.minGrams) return false;
+    most += Math.min(line.maxGrams, sum('maxPackGrams'));
+  }
+  return most >= recipe.guaranteedGrams;
 }

@@ -1,6 +1,6 @@
 import { priceForWeight } from '#shared/domain/money.ts';
 import type { Solution } from '#shared/engine/linear/solve.ts';
-import type { BoxVariant, LooseDemand, RecipeLine } from './allocation-input.ts';
+import type { BoxVariant, LooseDemand, MeatState, RecipeLine } from './allocation-input.ts';
 import { getCut, type AllocationModel, type BoxColumns, type LooseColumns } from './allocation-model.ts';
 import type {
   AllocationPlan,
@@ -10,17 +10,19 @@ import type {
   PlannedTrade,
   Shortfall,
 } from './allocation-plan.ts';
-import type { Cell } from './deal-packs.ts';
+import { dealBoxes, dealPattern, type Cell, type PlannedContents } from './deal-packs.ts';
 import { Heaps } from './heaps.ts';
 import { readFates, type Fates } from './read-fates.ts';
 import { sharePacks } from './share-packs.ts';
-import { makeWholeBoxes } from './whole-boxes.ts';
+import { finishBoxes } from './whole-boxes.ts';
 
 export type Draft = Pick<
   AllocationPlan,
   'fates' | 'boxes' | 'loose' | 'trade' | 'cuts' | 'shortfalls' | 'money' | 'contributionPence'
 > & {
   failures: { variant: BoxVariant; line: RecipeLine }[];
+  /** Box by box, as dealt and levelled. */
+  dealt: Map<string, readonly PlannedContents[]>;
 };
 type Reading = { model: AllocationModel; solution: Solution; heaps: Heaps; balances: Map<string, CutBalance> };
 
@@ -146,37 +148,49 @@ function boxIncome(variant: BoxVariant, boxes: number): number {
   return pence;
 }
 
-/** Sets the grams of every box aside first, so that what is left on the heaps is spare for all of them. */
-function setAside(reading: Reading, columns: BoxColumns): { boxes: number; cells: Cell[] } {
-  const boxes = Math.round(value(reading, columns.boxes));
-  const cells = columns.cells.map(({ line, cutId, state, column, packs }) => ({
-    line,
-    cut: getCut(reading.model, cutId),
-    state,
-    grams: reading.heaps.take(cutId, state, wholeGrams(reading, column)),
-    packs: packs ? Math.round(value(reading, packs)) : 0,
-  }));
-  return { boxes, cells };
+type Planned = { line: RecipeLine; cutId: string; state: MeatState; column: string; packs: number };
+
+/** Takes the grams of a cell off its heap; what the whole packs do not hold stays there. */
+function takeCell(reading: Reading, { line, cutId, state, column, packs }: Planned): Cell {
+  const cut = getCut(reading.model, cutId);
+  const wanted = Math.min(wholeGrams(reading, column), packs * cut.maxPackGrams);
+  return { line, cut, state, packs, grams: reading.heaps.take(cutId, state, wanted) };
+}
+
+/** Sets the packs of every box aside first, so that what is left on the heaps is spare for all of them. */
+function setAside(reading: Reading, columns: BoxColumns): PlannedContents[] {
+  const count = (column: string | null) => (column ? Math.round(value(reading, column)) : 0);
+  if (columns.patterns.length === 0) {
+    const cells = columns.cells.map((cell) => takeCell(reading, { ...cell, packs: count(cell.packs) }));
+    return dealBoxes(columns.variant.lines, cells, count(columns.boxes));
+  }
+  return columns.patterns.flatMap(({ pattern, boxes, grams }) => {
+    const made = count(boxes);
+    const cells = pattern.map((cell, index) =>
+      takeCell(reading, { ...cell, packs: cell.packs * made, column: grams[index] ?? '' }),
+    );
+    return made > 0 ? dealPattern(cells, made) : [];
+  });
 }
 
 function readBoxes(
   reading: Reading,
-  asides: readonly { boxes: number; cells: Cell[] }[],
+  asides: readonly PlannedContents[][],
 ): { boxes: PlannedBox[]; failures: Draft['failures'] } {
   const failures: Draft['failures'] = [];
   const boxes = reading.model.boxes.map(({ variant }, index): PlannedBox => {
-    const plan = asides[index] ?? { boxes: 0, cells: [] };
-    const { contents, failedLine } = makeWholeBoxes(variant, plan, { cuts: reading.model.cuts, heaps: reading.heaps });
+    const dealt = asides[index] ?? [];
+    const { contents, failedLine } = finishBoxes(variant, dealt, { cuts: reading.model.cuts, heaps: reading.heaps });
     if (failedLine) failures.push({ variant, line: failedLine });
     for (const { cutId, grams } of contents) balanceOf(reading, cutId).boxGrams += grams;
     return {
       variantId: variant.id,
       kindId: variant.kindId,
       name: variant.name,
-      boxes: plan.boxes,
-      short: Math.max(0, variant.floor - plan.boxes),
+      boxes: dealt.length,
+      short: Math.max(0, variant.floor - dealt.length),
       contents,
-      incomePence: boxIncome(variant, plan.boxes),
+      incomePence: boxIncome(variant, dealt.length),
     };
   });
   return { boxes, failures };
@@ -249,5 +263,6 @@ export function readPlan(model: AllocationModel, solution: Solution): Draft {
     money,
     contributionPence: income - costs,
     failures,
+    dealt: new Map(model.boxes.map(({ variant }, index) => [variant.id, asides[index] ?? []])),
   };
 }

@@ -2,7 +2,7 @@ import { checkBox } from '#shared/engine/box-fill/check-box.ts';
 import type { Cut } from '#shared/engine/figures/specification.ts';
 import type { BoxVariant, RecipeLine } from './allocation-input.ts';
 import type { PlannedBox } from './allocation-plan.ts';
-import { dealLine, type Cell, type PlannedContents } from './deal-packs.ts';
+import type { PlannedContents } from './deal-packs.ts';
 import type { Heaps } from './heaps.ts';
 import { levelBoxes } from './level-boxes.ts';
 
@@ -36,30 +36,18 @@ function findFailure(variant: BoxVariant, boxes: readonly PlannedContents[]): Re
 }
 
 /**
- * Turns the grams of one variant into whole packs, box by box, and looks at each with the checker of box fill. What is
- * not used goes back to the heaps.
+ * Levels the planned packs of one variant, box by box, and looks at each box with the checker of box fill. What is not
+ * used goes back to the heaps.
  */
-export function makeWholeBoxes(
+export function finishBoxes(
   variant: BoxVariant,
-  plan: { boxes: number; cells: readonly Cell[] },
+  boxes: readonly PlannedContents[],
   about: { cuts: ReadonlyMap<string, Cut>; heaps: Heaps },
 ): WholeBoxes {
-  if (plan.boxes === 0) {
-    for (const { cut, state, grams } of plan.cells) about.heaps.add(cut.id, state, grams);
-    return { contents: [], failedLine: null };
-  }
-  const boxes = Array.from({ length: plan.boxes }, (): PlannedContents => []);
-  for (const line of variant.lines) {
-    const cells = plan.cells.filter((cell) => cell.line.id === line.id);
-    dealLine(cells, boxes);
-  }
-  for (const { cut, state, grams } of plan.cells) about.heaps.add(cut.id, state, grams);
-  for (const { cut, state, grams } of boxes.flat()) about.heaps.add(cut.id, state, -grams);
-  const cuts = [...about.cuts.values()];
   levelBoxes(
     boxes.map((packs) => ({ packs, recipe: variant })),
     about.heaps,
-    cuts,
+    [...about.cuts.values()],
   );
   return { contents: sumContents(boxes), failedLine: findFailure(variant, boxes) };
 }
