@@ -14,6 +14,9 @@ config.resolver.blockList = [
   new RegExp(`^${escaped}${path.sep}dist[^${path.sep}]*${path.sep}`),
 ];
 config.resolver.assetExts.push('woff2');
+// Metro's cache lies in the system's temporary folder and is shared by all checkouts, but a transformed route names its
+// file by its whole path: with another checkout's entry the export would leave that route's loader out.
+config.cacheVersion = root;
 
 // In development the browser talks to one origin: Metro passes the API and the fonts on to the server.
 const apiPort = Number(process.env.PORT ?? 8080);
