@@ -36,9 +36,21 @@ export async function recordAttempt(
     .where(eq(mailMessage.id, mailId));
 }
 
+export async function lockMail(tx: Tx, mailId: string): Promise<MailRow | null> {
+  const rows = await tx.select().from(mailMessage).where(eq(mailMessage.id, mailId)).for('update');
+  return rows[0] ?? null;
+}
+
 /** Back into the queue with the same Message-ID, for a person's second try. */
-export async function requeueMail(db: Db | Tx, mailId: string): Promise<void> {
-  await db.update(mailMessage).set({ state: 'queued', attempts: 0 }).where(eq(mailMessage.id, mailId));
+export async function requeueMail(tx: Tx, mailId: string): Promise<MailRow> {
+  const rows = await tx
+    .update(mailMessage)
+    .set({ state: 'queued', attempts: 0, lastError: null })
+    .where(eq(mailMessage.id, mailId))
+    .returning();
+  const row = rows[0];
+  if (!row) throw new Error(`The mail ${mailId} has gone.`);
+  return row;
 }
 
 export async function markBounced(db: Db | Tx, mailId: string, reason: string): Promise<void> {
