@@ -1,5 +1,6 @@
 import Stripe from 'stripe';
 import { connect } from '#db/client.ts';
+import { startPaymentsFake } from '#payments-fake/server.ts';
 import { createSolver } from '#server/allocation/solver/solver-pool.ts';
 import { initAuth } from '#server/auth/auth.ts';
 import { sendPasswordResetMail, sendVerificationMail } from '#server/auth/auth-mails.ts';
@@ -13,6 +14,16 @@ import { seedDemoFarm } from './demo/seed-demo-farm.ts';
 const env = readEnv();
 const { db, close } = connect(env.DATABASE_URL, (error) => console.error(error.message));
 
+// The stand-in of the payment company takes the money of the seeded orders, so that they can be refunded like any other.
+const payments = await startPaymentsFake({
+  port: 0,
+  secretKey: env.STRIPE_SECRET_KEY,
+  webhookSecret: env.STRIPE_WEBHOOK_SECRET,
+  webhookUrl: `${env.PUBLIC_ORIGIN}/api/payments/webhook`,
+  dir: process.env.PAYMENTS_FAKE_DIR ?? '.data/payments',
+});
+payments.control({ webhooks: 'hold' });
+
 const deps: Deps = {
   db,
   auth: initAuth({
@@ -23,7 +34,15 @@ const deps: Deps = {
     sendPasswordReset: (mail) => sendPasswordResetMail(db, mail),
     isRateLimited: true,
   }),
-  payments: { stripe: new Stripe(env.STRIPE_SECRET_KEY), webhookSecret: env.STRIPE_WEBHOOK_SECRET },
+  payments: {
+    stripe: new Stripe(env.STRIPE_SECRET_KEY, {
+      host: '127.0.0.1',
+      port: payments.port,
+      protocol: 'http',
+      telemetry: false,
+    }),
+    webhookSecret: env.STRIPE_WEBHOOK_SECRET,
+  },
   mailer: createMailer(env.SMTP_URL, env.MAIL_FROM),
   solver: createSolver(),
   clock: systemClock,
@@ -41,6 +60,7 @@ try {
   if (state === 'stale and untouched') await emptyDatabase(db);
   if (state === 'empty' || state === 'stale and untouched') await seedDemoFarm(deps);
 } finally {
+  await payments.stop();
   await deps.solver.stop();
   deps.mailer.close();
   await close();

@@ -52,10 +52,11 @@ export async function emptyDatabase(db: Db): Promise<void> {
     sql`select quote_ident(tablename) as name from pg_tables where schemaname = 'public'`,
   );
   await db.execute(sql.raw(`truncate ${rows.map(({ name }) => name).join(', ')} restart identity cascade`));
-  await forgetJobs(db);
+  await db.execute(sql`delete from graphile_worker._private_jobs`);
 }
 
-/** What the seed's own services would have done afterwards (mails of the past, planning again) is not done. */
+/** What the seed's own services would have done afterwards, such as planning again, is not done; mails still leave. */
 export async function forgetJobs(db: Db): Promise<void> {
-  await db.execute(sql`delete from graphile_worker._private_jobs`);
+  await db.execute(sql`delete from graphile_worker._private_jobs where task_id in
+    (select id from graphile_worker._private_tasks where identifier <> 'send-mail')`);
 }

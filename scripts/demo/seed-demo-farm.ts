@@ -1,15 +1,17 @@
 import { hashPassword } from 'better-auth/crypto';
-import { makeChance } from '#db/seed/chance.ts';
+import { makeChance, type Chance } from '#db/seed/chance.ts';
 import { insertFarm } from '#db/seed/demo-farm.ts';
 import { insertHerd } from '#db/seed/demo-herd.ts';
-import { insertPeople, type SignIn } from '#db/seed/demo-people.ts';
+import { insertPeople, type DemoPeople, type SignIn } from '#db/seed/demo-people.ts';
 import signIns from '#db/seed/demo-sign-ins.json' with { type: 'json' };
 import { insertStartingProducts } from '#db/seed/starting-products.ts';
 import type { Deps } from '#server/deps.ts';
 import { addDays } from '#shared/domain/day.ts';
 import { demoDays } from './demo-days.ts';
 import { onDay } from './demo-deps.ts';
-import { seedDays } from './seed-days.ts';
+import { forgetJobs, markDemo } from './demo-state.ts';
+import { seedDays, type SeededDays } from './seed-days.ts';
+import { seedOrders, sendConfirmation } from './seed-orders.ts';
 import { openSale } from './seed-sale.ts';
 import { seedTrade } from './seed-trade.ts';
 
@@ -32,7 +34,29 @@ export async function seedDemoFarm(deps: Deps): Promise<void> {
   const { ownerId } = ground.people;
   const seeded = await seedDays(deps, { ...ground, days, ownerId });
   await seedTrade(deps, ground.people, seeded);
-  await openSale(onDay(deps, addDays(days.past.day, -12)), seeded.past, ownerId);
-  await openSale(onDay(deps, addDays(today, -1)), seeded.next, ownerId);
-  await openSale(onDay(deps, addDays(today, -1)), seeded.second, ownerId);
+  await sellDays(deps, chance, { seeded, people: ground.people });
+  await forgetJobs(deps.db);
+  await markDemo(deps.db, days.next.day, today);
+}
+
+type Sellers = { seeded: SeededDays; people: DemoPeople };
+
+/** Each day goes on sale as the owner would put it there, and the customers buy; the second day has hardly begun. */
+async function sellDays(deps: Deps, chance: Chance, { seeded, people }: Sellers): Promise<void> {
+  const today = deps.clock.today();
+  const { past, next, second } = seeded;
+  const { customers, ownerId } = people;
+  const early = customers.slice(0, 1);
+  await openSale(onDay(deps, addDays(past.day, -12)), past, ownerId);
+  const before = onDay(deps, addDays(past.cutOffDay, -1));
+  await seedOrders(before, chance, { day: past, people: [...early, ...customers.slice(12, 36)], from: 9 });
+  await openSale(onDay(deps, addDays(today, -9)), next, ownerId);
+  const orders = await seedOrders(onDay(deps, addDays(today, -1)), chance, {
+    day: next,
+    people: [...early, ...customers.slice(4, 30)],
+    from: 7,
+  });
+  await openSale(onDay(deps, addDays(today, -2)), second, ownerId);
+  await seedOrders(onDay(deps, addDays(today, -1)), chance, { day: second, people: customers.slice(30, 38), from: 1 });
+  if (orders[0]) await sendConfirmation(deps, orders[0].id);
 }
