@@ -6,7 +6,7 @@ import { listSpecificationFaults } from '#shared/engine/figures/check-specificat
 import { CONFORMATIONS, FAT_CLASSES } from '#shared/engine/figures/class-scale.ts';
 import { traditionalSide } from '#shared/engine/figures/traditional-side.ts';
 import { cutCarcase, listLeaks } from '#tests/support/make-carcase-facts.ts';
-import { anySpecification } from '#tests/support/make-specification.ts';
+import { anySpecification } from '#tests/support/any-specification.ts';
 
 const settings = { numRuns: 60, seed: 20261201 };
 
