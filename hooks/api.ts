@@ -18,7 +18,7 @@ export async function call<S extends EndpointSchema>(endpoint: Endpoint<S>, inpu
     body?: unknown;
     signal?: AbortSignal;
   };
-  const path = endpoint.path.replace(/:(\w+)/g, (_whole, name: string) => encodeURIComponent(params?.[name] ?? ''));
+  const path = pathOf(endpoint, params ? { params } : {});
   const search = new URLSearchParams(Object.entries(query ?? {}).filter((pair): pair is [string, string] => !!pair[1]));
   const response = await fetch(`${apiOrigin()}${path}${search.size > 0 ? `?${search}` : ''}`, {
     method: endpoint.method,
@@ -32,6 +32,11 @@ export async function call<S extends EndpointSchema>(endpoint: Endpoint<S>, inpu
   });
   if (response.ok) return (await response.json()) as Answer<S>;
   throw await readProblem(response);
+}
+
+/** The address of an endpoint, for links that the browser follows by itself, such as files to save. */
+export function pathOf(endpoint: { path: string }, { params }: { params?: Record<string, string> }): string {
+  return endpoint.path.replace(/:(\w+)/g, (_whole, name: string) => encodeURIComponent(params?.[name] ?? ''));
 }
 
 async function readProblem(response: Response): Promise<Error> {

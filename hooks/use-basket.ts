@@ -132,6 +132,13 @@ export function settleOrder(token: string, outcome: 'paid' | 'given up'): void {
   }));
 }
 
+/** A new key for the same things, when the order of the former one is over. Answers the key. */
+export function renewKey(): string {
+  const key = crypto.randomUUID();
+  write((basket) => ({ ...basket, key, orderToken: null }));
+  return key;
+}
+
 export function quantityOf(basket: Basket, item: Pick<BasketItem, 'kind' | 'productId'>): number {
   return basket.items.find((one) => isSame(one, item))?.quantity ?? 0;
 }

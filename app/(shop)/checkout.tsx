@@ -20,11 +20,12 @@ import { useMe } from '#hooks/me.ts';
 import { refusalOf, usePlaceOrder } from '#hooks/orders.ts';
 import { pageMetadata } from '#hooks/page-metadata.ts';
 import { useCollections, type CutList } from '#hooks/shop.ts';
-import { noteOrder, useBasket, useIsBasketRead } from '#hooks/use-basket.ts';
+import { noteOrder, renewKey, useBasket, useIsBasketRead } from '#hooks/use-basket.ts';
 import { usePageReturn } from '#hooks/use-page-return.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { ShopHome } from '#shared/contracts/shop.ts';
 import { formatMoney } from '#shared/domain/words.ts';
+import { AppError } from '#shared/errors.ts';
 
 const TITLE = 'Checkout · Skelderwick Farm';
 
@@ -65,11 +66,17 @@ function Checkout({ home, cuts }: { home: ShopHome; cuts: CutList }) {
   const place = usePlaceOrder();
   usePageReturn(place.reset);
 
-  const send = (fields: CheckoutFields) => {
+  const send = (fields: CheckoutFields, basketKey = basket.key) => {
     if (!day || place.isPending || place.isSuccess) return;
     place.mutate(
-      { ...fields, basketKey: basket.key, dayId: day.id, lines },
+      { ...fields, basketKey, dayId: day.id, lines },
       {
+        // The order that this basket once became is over (cancelled elsewhere): the same things under a new key.
+        onError: (error) => {
+          if (error instanceof AppError && error.code === 'BASKET_EXPIRED' && basketKey === basket.key) {
+            send(fields, renewKey());
+          }
+        },
         onSuccess: ({ token, paymentUrl }) => {
           noteOrder(token);
           if (paymentUrl) window.location.assign(paymentUrl);
@@ -103,7 +110,7 @@ function Checkout({ home, cuts }: { home: ShopHome; cuts: CutList }) {
             buttonLabel={total === undefined ? 'Go to payment' : `Go to payment · ${formatMoney(total)}`}
             isSending={place.isPending || place.isSuccess}
             refusal={refusalOf(place.error)}
-            onSubmit={send}
+            onSubmit={(fields) => send(fields)}
           />
         )}
       </StateView>

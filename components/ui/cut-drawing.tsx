@@ -45,9 +45,10 @@ export function CutDrawing({ kind, size = 64 }: { kind: CutDrawingKind; size?: n
   );
 }
 
-/** The drawing for a way of cooking; what has no drawing of its own is shown as a braise. */
+/** The drawing for a way of cooking, the first of `grill or roast`; what has none of its own is shown as a braise. */
 export function drawingOf(cooking: string): CutDrawingKind {
-  return isDrawn(cooking) ? cooking : 'braise';
+  const first = cooking.split(' or ')[0] ?? '';
+  return isDrawn(first) ? first : 'braise';
 }
 
 function isDrawn(cooking: string): cooking is CutDrawingKind {

@@ -1,0 +1,30 @@
+import { View } from 'react-native';
+import type { Order } from '#shared/contracts/orders.ts';
+import { css } from '#components/theme/css.ts';
+import { DefinitionList } from '#components/ui/definition-list.tsx';
+import { Heading } from '#components/ui/heading.tsx';
+import { TextLink } from '#components/ui/text-link.tsx';
+import { whenWords } from './order-words.ts';
+
+/** Where, when, how to find it and what to bring, with the file for a calendar. */
+export function OrderCollection({ order, calendarHref }: { order: Order; calendarHref: string }) {
+  const { collection } = order;
+  return (
+    <View style={css('w-section')}>
+      <Heading level={2}>Collecting it</Heading>
+      <DefinitionList
+        ruled
+        facts
+        items={[
+          { term: 'When', value: whenWords(collection) },
+          { term: 'Where', value: [collection.name, ...collection.addressLines].join(', ') },
+          { term: 'Finding it', value: collection.directions },
+          { term: 'Bring', value: collection.bring },
+        ]}
+      />
+      <TextLink href={calendarHref} place="alone" outside>
+        Put it in your calendar
+      </TextLink>
+    </View>
+  );
+}

@@ -1,0 +1,31 @@
+import { View } from 'react-native';
+import type { Order } from '#shared/contracts/orders.ts';
+import { formatMoney, formatWeight } from '#shared/domain/words.ts';
+import { css } from '#components/theme/css.ts';
+import { DefinitionList } from '#components/ui/definition-list.tsx';
+import { Heading } from '#components/ui/heading.tsx';
+import { Text } from '#components/ui/text.tsx';
+
+/** What was ordered and what it came to, less what was paid back. */
+export function OrderLines({ order }: { order: Order }) {
+  const { lines, totalPence, refundedPence, paymentState } = order;
+  const isPaid = paymentState !== 'unpaid';
+  return (
+    <View style={css('w-section')}>
+      <Heading level={2}>What you ordered</Heading>
+      <DefinitionList
+        ruled
+        items={[
+          ...lines.map((line) => ({
+            term: `${line.quantity} × ${line.name}`,
+            note: `${line.kind === 'box' ? 'at least' : 'up to'} ${formatWeight(line.unitGrams)}${line.quantity > 1 ? ' each' : ''}`,
+            value: formatMoney(line.linePence),
+          })),
+          { term: isPaid ? 'Paid' : 'Total', value: formatMoney(totalPence), strong: true },
+          ...(refundedPence > 0 ? [{ term: 'Paid back', value: formatMoney(-refundedPence) }] : []),
+        ]}
+      />
+      {order.note ? <Text tone="quiet">{`Your note for the packer: ${order.note}`}</Text> : null}
+    </View>
+  );
+}
