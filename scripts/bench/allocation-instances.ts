@@ -31,8 +31,8 @@ function makeSides(count: number, next: () => number): SideSupply[] {
     const carcase: CarcaseFacts = {
       id: `carcase-${String(index + 1).padStart(3, '0')}`,
       type: next() < 0.6 ? 'steer' : 'heifer',
-      bornDay: (next() < 0.1 ? '2023-01-10' : '2024-06-10') as Day,
-      killDay: '2026-03-02' as Day,
+      bornDay: (next() < 0.1 ? '2023-01-10' : '2024-06-10'),
+      killDay: '2026-03-02',
       liveGrams: null,
       hotGrams: null,
       coldGrams: 270_000 + Math.round(next() * 110_000),

@@ -1,0 +1,85 @@
+import { EngineError } from '#shared/engine/engine-error.ts';
+import type { Row, Term, WriteOptions } from '#shared/engine/linear/lp-model.ts';
+import type { Solution, SolveOptions, Solver } from '#shared/engine/linear/solve.ts';
+import type { Priority } from './allocation-input.ts';
+import type { AllocationModel } from './allocation-model.ts';
+import { PRIORITIES, shortTerms } from './build-model.ts';
+
+/** Pence by which an earlier optimum may be missed later: below any price, above a solver's tolerance. */
+export const SHORT_TOLERANCE = 0.01;
+const LEAST_SECONDS = 1;
+
+export type Solved = { solution: Solution; lpText: string };
+/** One model on its way to an answer: earlier optima and boxes taken off are rows of its text. */
+export type Session = {
+  model: AllocationModel;
+  solver: Solver;
+  options: SolveOptions;
+  fixed: Row[];
+  caps: Map<string, Row>;
+  clock: { spentMilliseconds: number };
+  isProven: boolean;
+};
+
+/** The time limit is for the whole question, not for each of its solves. */
+function remaining(session: Session): SolveOptions {
+  const { timeLimitSeconds } = session.options;
+  if (timeLimitSeconds === undefined) return session.options;
+  const left = timeLimitSeconds - session.clock.spentMilliseconds / 1000;
+  return { ...session.options, timeLimitSeconds: Math.max(LEAST_SECONDS, left) };
+}
+
+export async function solve(session: Session, about: WriteOptions): Promise<Solved> {
+  const extraRows = [...(about.extraRows ?? []), ...session.fixed, ...session.caps.values()];
+  const lpText = session.model.lp.write({ ...about, extraRows });
+  const solution = await session.solver.solve(lpText, remaining(session));
+  session.clock.spentMilliseconds += solution.milliseconds;
+  return { solution, lpText };
+}
+
+export function isProof(session: Session, solution: Solution): boolean {
+  return solution.status === 'optimal' || (session.options.nodeLimit !== undefined && solution.hasAnswer);
+}
+
+function shortRow(priority: Priority, terms: readonly Term[], pence: number): Row {
+  return { name: `shortfall_${priority}`, terms, sense: '<=', right: pence };
+}
+
+export function failed(sentence: string): EngineError {
+  return new EngineError('SOLVER_FAILED', `${sentence} Nothing was changed; try again with more time.`, {
+    node: 'plan',
+  });
+}
+
+/** Finds the least shortfall of each priority in turn, each held while the next is sought. */
+async function fixShortfalls(session: Session): Promise<void> {
+  for (const priority of PRIORITIES) {
+    const terms = shortTerms(session.model, priority);
+    if (terms.length === 0) continue;
+    const title = `Least shortfall of priority ${priority}, in pence of what it would have brought`;
+    const { solution } = await solve(session, { sense: 'Minimize', objective: terms, title });
+    if (!solution.hasAnswer) throw failed('The least shortfall could not be found in time.');
+    session.isProven &&= isProof(session, solution);
+    session.fixed.push(shortRow(priority, terms, Math.max(0, solution.objective) + SHORT_TOLERANCE));
+  }
+}
+
+export const TITLE = 'Contribution of one cutting day in pence; weights in kilograms';
+
+/**
+ * The greatest contribution after the least shortfall. `hoped` pence short by priority are tried first: nothing short is
+ * the usual case, and then one solve answers all phases at once.
+ */
+export async function solvePhases(session: Session, hoped: ReadonlyMap<Priority, number>): Promise<Solved> {
+  const rows = PRIORITIES.flatMap((priority) => {
+    const terms = shortTerms(session.model, priority);
+    return terms.length > 0 ? [shortRow(priority, terms, hoped.get(priority) ?? 0)] : [];
+  });
+  const hopeful = await solve(session, { title: TITLE, extraRows: rows });
+  if (hopeful.solution.hasAnswer) {
+    session.fixed.push(...rows);
+    return hopeful;
+  }
+  await fixShortfalls(session);
+  return await solve(session, { title: TITLE });
+}
