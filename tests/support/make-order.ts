@@ -2,9 +2,20 @@ import { randomUUID } from 'node:crypto';
 import { eq } from 'drizzle-orm';
 import supertest from 'supertest';
 import { offer } from '#db/schema/allocations.ts';
-import { collectionSlot, customerOrder, payment } from '#db/schema/orders.ts';
+import { collectionSlot, customerOrder, orderLine, payment } from '#db/schema/orders.ts';
+import { pack, packAssignment, stockMovement } from '#db/schema/packs.ts';
+import { addDays } from '#shared/domain/day.ts';
 import type { World } from './harness.ts';
-import { makeBoxKind, makeBoxOffer, makeCut, makeCuttingDay, makeFarm, makeLooseOffer, makeSlot } from './make-farm.ts';
+import {
+  makeCarcase,
+  makeBoxKind,
+  makeBoxOffer,
+  makeCut,
+  makeCuttingDay,
+  makeFarm,
+  makeLooseOffer,
+  makeSlot,
+} from './make-farm.ts';
 
 export type Stall = Awaited<ReturnType<typeof makeStall>>;
 
@@ -97,4 +108,47 @@ export async function takenOf({ db }: World, slotId: string): Promise<number | u
 
 export function paymentsOf({ db }: World, orderId: string) {
   return db.select().from(payment).where(eq(payment.orderId, orderId)).orderBy(payment.createdAt, payment.kind);
+}
+
+let packs = 0;
+
+/** A weighed pack of the stall's cut; in an order when a line is named. */
+export async function makePack(
+  { db, clock }: World,
+  stall: Stall,
+  more: { orderLineId?: string; grams?: number } = {},
+) {
+  packs += 1;
+  const beast = await makeCarcase(db, stall.day.id, { killDay: addDays(stall.day.day, -21) });
+  const [row] = await db
+    .insert(pack)
+    .values({
+      code: `test-pack-code-${packs}`,
+      cuttingDayId: stall.day.id,
+      carcaseId: beast.id,
+      cutId: stall.cut.id,
+      grams: more.grams ?? 612,
+      packedOn: clock.today(),
+      useBy: addDays(clock.today(), 10),
+    })
+    .returning();
+  if (!row) throw new Error('The pack was not kept.');
+  if (more.orderLineId) {
+    await db.insert(packAssignment).values({ packId: row.id, orderLineId: more.orderLineId });
+    await db.insert(stockMovement).values({
+      ...{ carcaseId: beast.id, packId: row.id, fromPlace: 'chiller', toPlace: 'order' },
+      ...{ grams: row.grams, reason: 'filled' },
+    });
+  }
+  return row;
+}
+
+/** Paid, with one pack in it, and packed. */
+export async function makePackedOrder(world: World, stall: Stall, more: Record<string, unknown> = {}) {
+  const order = await makeConfirmedOrder(world, stall, more);
+  const [line] = await world.db.select().from(orderLine).where(eq(orderLine.orderId, order.id));
+  if (!line) throw new Error('The order has no line.');
+  const inside = await makePack(world, stall, { orderLineId: line.id });
+  await world.db.update(customerOrder).set({ state: 'packed' }).where(eq(customerOrder.id, order.id));
+  return { order: await getOrderRow(world, order.token), pack: inside };
 }
