@@ -6,6 +6,7 @@ export type Jobs = {
   'send-mail': { mailId: string };
   'settle-refund': { paymentId: string };
   'replan-day': { dayId: string };
+  'explain-allocation': { allocationId: string };
 };
 
 /** Enqueues inside the caller's transaction: a rollback takes the job with it. */

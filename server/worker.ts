@@ -1,5 +1,5 @@
 import { Logger, run, type Runner, type TaskList } from 'graphile-worker';
-import { replanDay } from './allocation/allocation-service.ts';
+import { explainAllocation, replanDay } from './allocation/allocation-service.ts';
 import type { Deps } from './deps.ts';
 import { log } from './http/log.ts';
 import { sendMail } from './mail/outbox.ts';
@@ -12,6 +12,7 @@ export function taskList(deps: Deps): TaskList {
     'send-mail': (payload) => sendMail(deps, (payload as Jobs['send-mail']).mailId),
     'settle-refund': (payload) => settleRefund(deps, (payload as Jobs['settle-refund']).paymentId),
     'replan-day': (payload) => replanDay(deps, (payload as Jobs['replan-day']).dayId),
+    'explain-allocation': (payload) => explainAllocation(deps, (payload as Jobs['explain-allocation']).allocationId),
     'sweep-holds': () => sweepHolds(deps),
   };
 }

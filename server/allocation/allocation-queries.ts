@@ -4,6 +4,7 @@ import { cuttingDay } from '#db/schema/carcases.ts';
 import { boxKind, boxLine, boxLineCut, cut } from '#db/schema/products.ts';
 import { reservation, reservationLine, tradeAccount } from '#db/schema/trade.ts';
 import type { Db, Tx } from '#server/deps.ts';
+import type { AllocationAnswer } from '#shared/domain/allocation-record.ts';
 import { AppError } from '#shared/errors.ts';
 
 export type AllocationRow = typeof allocation.$inferSelect;
@@ -137,6 +138,18 @@ export async function findPublishedAllocation(db: Db | Tx, dayId: string): Promi
     .from(allocation)
     .where(and(eq(allocation.cuttingDayId, dayId), eq(allocation.state, 'published')));
   return rows[0] ?? null;
+}
+
+/** Adds to an answer what was worked out after it; the rest of it never changes. */
+export async function storeAnswer(
+  db: Db | Tx,
+  id: string,
+  part: Partial<Pick<AllocationAnswer, 'promise' | 'explanation'>>,
+): Promise<void> {
+  await db
+    .update(allocation)
+    .set({ plan: sql`${allocation.plan} || ${JSON.stringify(part)}::jsonb` })
+    .where(eq(allocation.id, id));
 }
 
 /** Puts one allocation in force and the one before it out. */

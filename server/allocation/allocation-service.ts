@@ -1,10 +1,13 @@
 import type { Allocation, Lock } from '#shared/contracts/allocation.ts';
+import { defaultSpread, WEIGHED_SPREAD } from '#shared/engine/promise/spread.ts';
+import type { Spread } from '#shared/engine/promise/promise-types.ts';
 import { AppError } from '#shared/errors.ts';
 import { loadDayCutouts, type DayCutouts } from '#server/carcases/day-figures.ts';
 import { lockCuttingDay } from '#server/carcases/cutting-day-queries.ts';
 import type { Db, Deps, Tx } from '#server/deps.ts';
 import { readSettings } from '#server/farm/farm-settings.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
+import { enqueue } from '#server/queue.ts';
 import {
   addAllocation,
   findLatestAllocation,
@@ -14,13 +17,14 @@ import {
   listConfirmedLines,
   listCuts,
   listOffers,
+  storeAnswer,
   type AllocationRow,
   type ReservedLine,
 } from './allocation-queries.ts';
 import { buildDayInput } from './day-input.ts';
 import { describeAllocation, type AllocationFacts } from './describe-allocation.ts';
 import { publish } from './publish.ts';
-import { solveDay } from './solve-day.ts';
+import { explainDay, promiseDay, solveDay } from './solve-day.ts';
 
 export type Wish = {
   dayId: string;
@@ -54,31 +58,71 @@ export async function solveAllocation(deps: Deps, { dayId, locks, asked = [] }: 
     butcheryTenthPencePerKg: settings.butcheryTenthPencePerKg,
     minceClosedReason: null,
   });
-  const { question, answer } = await solveDay(input, deps.solver);
+  const { question, plan } = await solveDay({ input, spreads: spreadsOf(figures) }, deps.solver);
   return {
     cuttingDayId: dayId,
     figuresVersion: figures.day.figuresVersion,
     locks: [...locks],
     input: question,
-    plan: { ...answer, weighedCarcaseIds: weighedCarcases(figures) },
-    contributionPence: answer.plan.contributionPence,
-    isProven: answer.plan.isProven,
+    plan: { plan, weighedCarcaseIds: weighedCarcases(figures), promise: null, explanation: null },
+    contributionPence: plan.contributionPence,
+    isProven: plan.isProven,
   };
+}
+
+/** A carcase that is cut and weighed line by line leaves nothing to guess. */
+function spreadsOf({ carcases }: DayCutouts): Record<string, Spread> {
+  return Object.fromEntries(
+    carcases.map(({ row, cutout }) => {
+      const isCutWeighed = cutout.nodes.every((node) => node.level !== 'line' || node.source === 'weighed');
+      return [row.id, isCutWeighed ? WEIGHED_SPREAD : defaultSpread(cutout.cold.source)];
+    }),
+  );
 }
 
 function weighedCarcases({ carcases }: DayCutouts): string[] {
   return carcases.filter(({ cutout }) => cutout.cold.source === 'weighed').map(({ row }) => row.id);
 }
 
-/** Solves the day with the owner's locks and keeps the answer as a draft. */
+/** Solves the day with the owner's locks and keeps the answer as a draft; what explains it follows a moment later. */
 export async function allocateDay(deps: Deps, dayId: string, locks: readonly Lock[]): Promise<AllocationRow> {
-  return addAllocation(deps.db, await solveAllocation(deps, { dayId, locks }));
+  const solved = await solveAllocation(deps, { dayId, locks });
+  return deps.db.transaction((tx) => keepAllocation(tx, solved));
+}
+
+export async function keepAllocation(tx: Tx, solved: SolvedDay): Promise<AllocationRow> {
+  const row = await addAllocation(tx, solved);
+  await enqueue(tx, 'explain-allocation', { allocationId: row.id });
+  return row;
+}
+
+/** The worker's task: the promise first, since nothing can be published without it, then the explanations. */
+export async function explainAllocation(deps: Deps, allocationId: string): Promise<void> {
+  const row = await ensurePromise(deps, await getAllocation(deps.db, allocationId));
+  if (row.plan.explanation) return;
+  const solved = { question: row.input, plan: row.plan.plan };
+  await storeAnswer(deps.db, row.id, { explanation: await explainDay(solved, deps.solver) });
+}
+
+/** The allocation with its promise, worked out now if nobody has done it yet. */
+async function ensurePromise(deps: Deps, row: AllocationRow): Promise<AllocationRow> {
+  if (row.plan.promise || !row.isProven) return row;
+  const promise = await promiseDay({ question: row.input, plan: row.plan.plan }, deps.solver);
+  await storeAnswer(deps.db, row.id, { promise });
+  return { ...row, plan: { ...row.plan, promise } };
+}
+
+/** For an answer that is kept and published in one go. */
+export async function withPromise(deps: Deps, solved: SolvedDay): Promise<SolvedDay> {
+  const promise = await promiseDay({ question: solved.input, plan: solved.plan.plan }, deps.solver);
+  return { ...solved, plan: { ...solved.plan, promise } };
 }
 
 export type PublishWish = { allocationId: string; figuresVersion: number; byUserId: string | null };
 
 /** Puts an allocation on sale, in one transaction. The caller names the figures that it has seen. */
 export async function publishAllocation(deps: Deps, wish: PublishWish): Promise<AllocationRow> {
+  await ensurePromise(deps, await getAllocation(deps.db, wish.allocationId));
   return deps.db.transaction(async (tx) => {
     const row = await getAllocation(tx, wish.allocationId);
     if (row.figuresVersion !== wish.figuresVersion) {

@@ -18,16 +18,12 @@ export type AllocationFacts = {
 /** An allocation as the workbench shows it, with what is sold and held at this moment. */
 export function describeAllocation(row: AllocationRow, facts: AllocationFacts): Allocation {
   const { input } = row.input;
-  const { plan, limits, worths } = row.plan;
+  const { plan, promise, explanation } = row.plan;
   const { day, carcases } = facts.figures;
   const fills = spokenFor(railBasis(input, plan), countsOf(facts.offers));
   const sides = input.sides.map((side) => describeSide(row, side, { facts, fill: fills.get(side.id) ?? new Map() }));
   const coldGrams = carcases.reduce((sum, carcase) => sum + carcase.cutout.cold.grams, 0);
   const cutName = (cutId: string) => input.cuts.find((cut) => cut.id === cutId)?.name ?? cutId;
-  const taken = (productKey: string) => {
-    const found = facts.offers.find((offer) => offer.productKey === productKey);
-    return { sold: found?.sold ?? 0, held: found?.held ?? 0 };
-  };
   return {
     id: row.id,
     dayId: day.id,
@@ -45,28 +41,19 @@ export function describeAllocation(row: AllocationRow, facts: AllocationFacts): 
     productGrams: plan.cuts.reduce((sum, cut) => sum + cut.madeGrams, 0),
     locks: row.locks.map(({ carcaseId, side, choiceId, wayId }) => ({ carcaseId, side, choiceId, wayId })),
     sides,
-    boxes: plan.boxes.map((box) => ({
-      boxKindId: box.kindId,
-      name: box.name,
-      count: box.boxes,
-      ...taken(`box:${box.kindId}`),
-      limitedBy: (limits.find((limit) => limit.variantId === box.variantId)?.lines ?? []).map(
-        (line) => `${line.name}: ${formatWeight(line.shortGrams)} short for one more`,
-      ),
-    })),
-    loose: plan.loose.map((item) => ({
-      cutId: item.cutId,
-      name: cutName(item.cutId),
-      packs: item.packs,
-      grams: item.grams,
-      ...taken(`loose:${item.cutId}`),
-    })),
+    ...describeGoods(row, facts.offers),
     trade: describeTrade(row, facts.reserved),
     cuts: plan.cuts.map(({ stockGrams: _stock, ...cut }) => ({
       ...cut,
       name: cutName(cut.cutId),
-      worthPencePerKg: worths.find((worth) => worth.cutId === cut.cutId)?.pencePerKg ?? null,
+      worthPencePerKg: explanation?.worths.find((worth) => worth.cutId === cut.cutId)?.pencePerKg ?? null,
     })),
+    isExplained: promise !== null && explanation !== null,
+    promise: promise && {
+      confidencePercent: Math.round(promise.jointConfidence * 100),
+      isFloorAtRisk: promise.isFloorAtRisk,
+      worstShortGrams: promise.floorShortfall?.worstShortGrams ?? 0,
+    },
     shortfalls: plan.shortfalls.map((shortfall) => ({
       name: shortfall.name,
       missing:
@@ -75,6 +62,34 @@ export function describeAllocation(row: AllocationRow, facts: AllocationFacts): 
           : formatCount(shortfall.short, shortfall.unit.slice(0, -1), shortfall.unit),
     })),
   };
+}
+
+/** Boxes and loose packs: planned, safe to promise, sold and held, and what limits each box. */
+function describeGoods(row: AllocationRow, offers: readonly OfferRow[]): Pick<Allocation, 'boxes' | 'loose'> {
+  const { plan, promise, explanation } = row.plan;
+  const taken = (productKey: string) => {
+    const found = offers.find((offer) => offer.productKey === productKey);
+    return { sold: found?.sold ?? 0, held: found?.held ?? 0 };
+  };
+  const boxes = plan.boxes.map((box) => ({
+    boxKindId: box.kindId,
+    name: box.name,
+    count: box.boxes,
+    promised: promise?.boxes.find((each) => each.variantId === box.variantId)?.promised ?? null,
+    ...taken(`box:${box.kindId}`),
+    limitedBy: (explanation?.limits.find((limit) => limit.variantId === box.variantId)?.lines ?? []).map(
+      (line) => `${line.name}: ${formatWeight(line.shortGrams)} short for one more`,
+    ),
+  }));
+  const loose = plan.loose.map((item) => ({
+    cutId: item.cutId,
+    name: row.input.input.cuts.find((cut) => cut.id === item.cutId)?.name ?? item.cutId,
+    packs: item.packs,
+    promised: promise?.loose.find((each) => each.cutId === item.cutId)?.promised ?? null,
+    grams: item.grams,
+    ...taken(`loose:${item.cutId}`),
+  }));
+  return { boxes, loose };
 }
 
 export function countsOf(offers: readonly OfferRow[]) {
@@ -115,7 +130,7 @@ function describeChoice(row: AllocationRow, { side, choice, reserved }: ChoiceFa
     wayId: fate?.wayId ?? null,
     soldTo: reserved.find((line) => line.id === soldLine)?.businessName ?? null,
     isLocked: row.locks.some(isHere),
-    lockCostPence: row.plan.lockCosts.find(isHere)?.costPence ?? null,
+    lockCostPence: row.plan.explanation?.lockCosts.find(isHere)?.costPence ?? null,
     ways: choice.ways.map(({ wayId, name, closedReason }) => ({ wayId, name, closedReason })),
   };
 }

@@ -2,10 +2,10 @@ import { toUnitKind } from '#shared/domain/trade-unit.ts';
 import { priceForWeight } from '#shared/domain/money.ts';
 import type { AllocationRow, NewOffer } from './allocation-queries.ts';
 
-/** Boxes and loose packs, as many as the plan can fill. */
+/** Boxes and loose packs, as many as can be filled with the chosen confidence. */
 export function goodsOnOffer(row: AllocationRow): NewOffer[] {
   const { input } = row.input;
-  const { plan } = row.plan;
+  const { plan, promise } = row.plan;
   const boxes = plan.boxes.map((box): NewOffer => {
     const variant = input.boxes.find((candidate) => candidate.id === box.variantId);
     return {
@@ -13,7 +13,7 @@ export function goodsOnOffer(row: AllocationRow): NewOffer[] {
       kind: 'box',
       productKey: `box:${box.kindId}`,
       boxKindId: box.kindId,
-      offered: box.boxes,
+      offered: promise?.boxes.find((each) => each.variantId === box.variantId)?.promised ?? box.boxes,
       pricePence: variant?.pricePence ?? null,
       upperGrams: variant?.guaranteedGrams ?? null,
     };
@@ -26,7 +26,7 @@ export function goodsOnOffer(row: AllocationRow): NewOffer[] {
       kind: 'loose',
       productKey: `loose:${item.cutId}`,
       cutId: item.cutId,
-      offered: item.packs,
+      offered: promise?.loose.find((each) => each.cutId === item.cutId)?.promised ?? item.packs,
       pricePence: priceForWeight(upperGrams, cut?.tenthPencePerKg ?? 0),
       upperGrams,
     };

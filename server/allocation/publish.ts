@@ -76,6 +76,9 @@ function refuseUnlessFit(row: AllocationRow, day: CuttingDayRow): void {
       'This answer is not proven to be the best. Nothing was published; allocate again.',
     );
   }
+  if (!row.plan.promise) {
+    throw new AppError('NOT_FILLABLE', 'It is not known yet how much of this is safe to promise. Publish it again.');
+  }
   const short = row.plan.plan.shortfalls[0];
   if (short) {
     throw new AppError(

@@ -1,12 +1,20 @@
 import { formatCount, formatWeight } from '#shared/domain/words.ts';
 import { AppError } from '#shared/errors.ts';
-import { addAllocation, findPublishedAllocation, type ReservedLine } from '#server/allocation/allocation-queries.ts';
-import { publishRow, solveAllocation, type SolvedDay } from '#server/allocation/allocation-service.ts';
+import { findPublishedAllocation, type ReservedLine } from '#server/allocation/allocation-queries.ts';
+import {
+  keepAllocation,
+  publishRow,
+  solveAllocation,
+  withPromise,
+  type SolvedDay,
+} from '#server/allocation/allocation-service.ts';
 import { refuseIfStale } from '#server/allocation/publish.ts';
 import { lockCuttingDay } from '#server/carcases/cutting-day-queries.ts';
 import type { Deps } from '#server/deps.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
-import { updateReservation, type FullReservation } from './trade-queries.ts';
+import { readProductNames, type ProductNames } from './product-names.ts';
+import { queueAnswer } from './reservation-mail.ts';
+import { updateReservation, type FullReservation, type LineRow } from './trade-queries.ts';
 
 /** Sales may move while a solve runs; after three such meetings the caller is asked to try again. */
 const TRIES = 3;
@@ -23,9 +31,9 @@ export async function workIn(deps: Deps, row: FullReservation, byUserId: string 
       locks: published?.locks ?? [],
       asked: row.lines.map((line): ReservedLine => ({ ...line, ...named(row) })),
     });
-    refuseIfShort(row, solved);
+    await refuseIfShort(deps, row, solved);
     try {
-      await confirm(deps, { row, solved, byUserId });
+      await confirm(deps, { row, solved: await withPromise(deps, solved), byUserId });
       return;
     } catch (error) {
       const isRace = error instanceof AppError && error.code === 'STATE_CHANGED';
@@ -38,22 +46,39 @@ function named({ reservationNo, businessName, accountId }: FullReservation) {
   return { reservationNo, businessName, accountId };
 }
 
+const SINGULAR = { boxes: 'box', packs: 'pack', units: 'piece' } as const;
+const PLURAL = { boxes: 'boxes', packs: 'packs', units: 'pieces' } as const;
+
 /** Whatever is short, be it of this reservation or of an earlier promise, the answer is no. */
-function refuseIfShort(row: FullReservation, { plan }: SolvedDay): void {
+async function refuseIfShort(deps: Deps, row: FullReservation, { plan }: SolvedDay): Promise<void> {
   const short = plan.plan.shortfalls;
   if (short.length === 0) return;
-  const missing = short.map(({ name, short: count, unit }) =>
-    unit === 'grams'
-      ? `${name}: ${formatWeight(count)} short`
-      : `${name}: ${formatCount(count, unit.slice(0, -1), unit)} short`,
-  );
+  const products = await readProductNames(deps.db);
+  const own = new Map(row.lines.map((line) => [line.id, nameOf(line, products)]));
+  // Other people's orders are not named to a butcher.
+  const isForeign = short.some(({ id }) => !own.has(id));
+  const missing = short.flatMap(({ id, short: count, unit }) => {
+    const name = own.get(id);
+    if (!name) return [];
+    const amount = unit === 'grams' ? formatWeight(count) : formatCount(count, SINGULAR[unit], PLURAL[unit]);
+    return [`${name}: ${amount} short.`];
+  });
+  if (isForeign) missing.push('What is promised to others would no longer be met.');
   const possible = row.lines.flatMap((line) => {
     const planned = plan.plan.trade.find((candidate) => candidate.lineId === line.id);
+    const name = own.get(line.id) ?? '';
     if (!planned || (planned.cutGrams === 0 && planned.units.length === 0)) return [];
-    return [planned.cutGrams > 0 ? `${planned.name}: ${formatWeight(planned.cutGrams)}` : planned.name];
+    return [planned.cutGrams > 0 ? `${formatWeight(planned.cutGrams)} of ${name}` : name];
   });
-  const rest = possible.length > 0 ? ` Still possible: ${possible.join('; ')}.` : ' Another day may still have it.';
-  throw new AppError('NOT_FILLABLE', `Not everything can be met beside what is sold. ${missing.join('; ')}.${rest}`);
+  // Beside a broken promise nothing is offered: the plan's amounts would come out of that promise.
+  const isPossible = possible.length > 0 && !isForeign;
+  const rest = isPossible ? `Still possible: ${possible.join('; ')}.` : 'Another day may still have it.';
+  throw new AppError('NOT_FILLABLE', `Not everything can be met beside what is sold. ${missing.join(' ')} ${rest}`);
+}
+
+function nameOf({ cutId, unitKind }: LineRow, products: ProductNames): string {
+  const product = cutId ? `cut:${cutId}` : (unitKind ?? '');
+  return products.get(product) ?? product;
 }
 
 type Confirmation = { row: FullReservation; solved: SolvedDay; byUserId: string | null };
@@ -66,10 +91,11 @@ async function confirm(deps: Deps, { row, solved, byUserId }: Confirmation): Pro
     if (!(await updateReservation(tx, row.id, { version: row.version, values }))) {
       throw new AppError('NOT_FOUND', 'This reservation was cancelled or answered meanwhile. Nothing was changed.');
     }
-    const allocation = await addAllocation(tx, solved);
+    const allocation = await keepAllocation(tx, solved);
     // A day that is not on sale yet keeps the answer as a draft: the owner opens it.
     if (await findPublishedAllocation(tx, day.id)) await publishRow(deps, tx, { row: allocation, byUserId });
     else await refuseIfStale(tx, allocation, day);
     await recordAudit(tx, { byUserId, action: 'confirmed', subject: 'reservation', subjectId: row.id });
+    await queueAnswer(deps, tx, row.id);
   });
 }

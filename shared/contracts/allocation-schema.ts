@@ -66,6 +66,8 @@ export const Allocation = z.strictObject({
       boxKindId: Id,
       name: z.string(),
       count: z.int(),
+      /** How many of them may be put on sale while weights are estimates; null until it has been worked out. */
+      promised: z.int().nullable(),
       sold: z.int(),
       held: z.int(),
       limitedBy: z.array(z.string()),
@@ -76,6 +78,7 @@ export const Allocation = z.strictObject({
       cutId: z.string(),
       name: z.string(),
       packs: z.int(),
+      promised: z.int().nullable(),
       grams: z.int(),
       sold: z.int(),
       held: z.int(),
@@ -98,6 +101,12 @@ export const Allocation = z.strictObject({
       worthPencePerKg: z.int().nullable(),
     }),
   ),
+  /** How sure it is that all that is offered can be filled, and whether what is sold is itself at risk. */
+  promise: z
+    .strictObject({ confidencePercent: z.int(), isFloorAtRisk: z.boolean(), worstShortGrams: z.int() })
+    .nullable(),
+  /** False while the limits, worths and costs of locks are still being worked out: ask again in a moment. */
+  isExplained: z.boolean(),
   shortfalls: z.array(z.strictObject({ name: z.string(), missing: z.string() })),
 });
 export type Allocation = z.infer<typeof Allocation>;

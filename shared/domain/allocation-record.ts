@@ -1,15 +1,25 @@
 import type { AllocationInput } from '#shared/engine/allocation/allocation-input.ts';
 import type { AllocationPlan, BoxLimit, CutWorth, LockCost } from '#shared/engine/allocation/allocation-plan.ts';
+import type { BoxPromise, Spread } from '#shared/engine/promise/promise-types.ts';
 
 /** What an allocation was asked: kept, so that its answer can be traced and checked by another solver. */
-export type AllocationQuestion = { input: AllocationInput; lpText: string };
+export type AllocationQuestion = {
+  input: AllocationInput;
+  lpText: string;
+  /** How far the weights of each carcase may still be off. */
+  spreads: Record<string, Spread>;
+};
 
-/** What it answered, with its explanations. Variant, kind and cut ids are those of the products' tables. */
+/** What limits each box, what more of a cut would be worth and what each lock costs: found by solving again. */
+export type Explanation = { limits: BoxLimit[]; worths: CutWorth[]; lockCosts: LockCost[] };
+
+/** What it answered. Variant, kind and cut ids are those of the products' tables. */
 export type AllocationAnswer = {
   plan: Omit<AllocationPlan, 'lpText'>;
-  limits: BoxLimit[];
-  worths: CutWorth[];
-  lockCosts: LockCost[];
   /** Carcases whose kill sheet the figures rest on; the others are estimates. */
   weighedCarcaseIds: string[];
+  /** How many may be put on sale while weights are estimates; null until it has been worked out. */
+  promise: BoxPromise | null;
+  /** Null until it has been worked out. */
+  explanation: Explanation | null;
 };
