@@ -116,7 +116,7 @@ export async function promiseOffers(
   return {
     ...describeCounts(counts),
     jointConfidence: run.scenarios.length > 0 ? 1 - failing / run.scenarios.length : 0,
-    safeSharePpht: Math.floor(Math.max(0, share) * 100_000),
+    safeSharePpht: Math.floor((Math.max(0, share) + TOLERANCE) * 100_000),
     isFloorAtRisk: share < 0,
     floorShortfall: share < 0 ? await measureShortfall(run) : null,
   };
