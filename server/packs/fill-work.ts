@@ -39,7 +39,7 @@ export function listJobs(rows: WorkRows): Job[] {
     const { lineId, orderNo, orderName, item, cutId, grams } = work;
     const packs = packsIn(rows, (each) => each.reservationLineId === lineId);
     const job = { id: `${lineId}/1`, lineId, copy: 1, orderId: null, orderNo, orderName, item, packs };
-    return { ...job, isDone: false, kind: 'trade', cutId, grams };
+    return { ...job, isDone: work.isDispatched, kind: 'trade', cutId, grams };
   });
   return [...trade, ...orders];
 }

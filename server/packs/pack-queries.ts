@@ -113,6 +113,7 @@ export async function listTradeWork(db: Db | Tx, dayId: string) {
       item: cut.name,
       cutId: cut.id,
       grams: reservationLine.grams,
+      state: reservation.state,
     })
     .from(reservationLine)
     .innerJoin(reservation, eq(reservation.id, reservationLine.reservationId))
@@ -120,7 +121,7 @@ export async function listTradeWork(db: Db | Tx, dayId: string) {
     .innerJoin(cut, eq(cut.id, reservationLine.cutId))
     .where(and(eq(reservation.cuttingDayId, dayId), inArray(reservation.state, ['confirmed', 'dispatched'])))
     .orderBy(asc(reservation.reservationNo), asc(cut.name));
-  return rows.map((row) => ({ ...row, grams: row.grams ?? 0 }));
+  return rows.map((row) => ({ ...row, grams: row.grams ?? 0, isDispatched: row.state === 'dispatched' }));
 }
 export type TradeWork = Awaited<ReturnType<typeof listTradeWork>>[number];
 

@@ -2,14 +2,13 @@ import { randomBytes } from 'node:crypto';
 import type { Pack, PackingDay } from '#shared/contracts/packs.ts';
 import { addDays } from '#shared/domain/day.ts';
 import { canMoveOrder } from '#shared/domain/order-state.ts';
-import { formatEarTag } from '#shared/domain/ear-tag.ts';
-import { formatGrams } from '#shared/domain/words.ts';
 import { AppError } from '#shared/errors.ts';
 import { lockCuttingDay } from '#server/carcases/cutting-day-queries.ts';
-import { loadDayCutouts, type CarcaseFigures } from '#server/carcases/day-figures.ts';
-import { listBalances, listLedgerCarcases, recordMovements, type Place } from '#server/carcases/ledger-queries.ts';
+import { loadDayCutouts } from '#server/carcases/day-figures.ts';
+import { recordMovements, type Place } from '#server/carcases/ledger-queries.ts';
 import type { Deps, Tx } from '#server/deps.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
+import { enterLedger, refuseTooMuch } from './carcase-ledger.ts';
 import {
   endAssignments,
   findPack,
@@ -23,9 +22,6 @@ import {
   type PackRow,
 } from './pack-queries.ts';
 import { describePack, loadWork, noSuchPack, readPackingDay } from './packing-day.ts';
-
-/** Scales and estimates differ: packs may outweigh the carcase's hung weight by this share before it must be an error. */
-const OVERWEIGHT_PERCENT = 2;
 
 export type NewPacks = { dayId: string; carcaseId: string; cutId: string; grams: number[] };
 
@@ -42,7 +38,7 @@ export async function addPacks(deps: Deps, byUserId: string, wanted: NewPacks): 
       throw refuseField('cutId', 'The specification of this day does not make this cut.');
     }
     await enterLedger(tx, carcase, byUserId);
-    await refuseTooMuch(tx, carcase, wanted.grams);
+    await refuseTooMuch(tx, carcase, sum(wanted.grams));
     const packedOn = deps.clock.today();
     const { carcaseId, cutId } = wanted;
     const shared = { cuttingDayId: wanted.dayId, carcaseId, cutId, packedOn, useBy: addDays(packedOn, cut.useByDays) };
@@ -67,6 +63,10 @@ export async function addPacks(deps: Deps, byUserId: string, wanted: NewPacks): 
   });
 }
 
+function sum(grams: readonly number[]): number {
+  return grams.reduce((total, each) => total + each, 0);
+}
+
 /** Ten characters of an alphabet without look-alikes: 50 bits, too many to guess a pack's page. */
 function makePackCode(): string {
   const alphabet = '23456789ABCDEFGHJKLMNPQRSTUVWXYZ';
@@ -81,27 +81,6 @@ async function lockOpenDay(tx: Tx, dayId: string): Promise<void> {
   const day = await lockCuttingDay(tx, dayId);
   if (!day) throw new AppError('NOT_FOUND', 'There is no such cutting day.');
   if (day.state === 'closed') throw new AppError('STATE_CHANGED', 'This cutting day is closed. Nothing was changed.');
-}
-
-/** The cold weight is what the abattoir handed over: the first pack brings it into the ledger. */
-async function enterLedger(tx: Tx, { row, cutout }: CarcaseFigures, byUserId: string): Promise<void> {
-  const known = await listLedgerCarcases(tx, [row.id]);
-  if (known.has(row.id)) return;
-  const movement = { carcaseId: row.id, fromPlace: null, toPlace: 'carcase' as const, byUserId };
-  await recordMovements(tx, [{ ...movement, grams: cutout.cold.grams, reason: 'cold weight' }]);
-}
-
-async function refuseTooMuch(tx: Tx, { row, cutout }: CarcaseFigures, grams: readonly number[]): Promise<void> {
-  const balances = await listBalances(tx, [row.id]);
-  const left = balances.find(({ place }) => place === 'carcase')?.grams ?? 0;
-  const wanted = grams.reduce((sum, each) => sum + each, 0);
-  const allowed = left + Math.floor((cutout.cold.grams * OVERWEIGHT_PERCENT) / 100);
-  if (wanted <= allowed) return;
-  throw new AppError(
-    'MEASURED_EXCEEDS_PARENT',
-    `These packs weigh ${formatGrams(wanted)}, but of ${formatEarTag(row.animal.earTag)} only ${formatGrams(left)} are left. Nothing was weighed in; check the beast and the scale.`,
-    { figures: { wantedGrams: wanted, leftGrams: left } },
-  );
 }
 
 type Correction = { pack: PackRow; place: Place; grams: number; lastMovementId: string; byUserId: string };

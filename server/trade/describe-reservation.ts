@@ -1,19 +1,23 @@
 import type { Reservation } from '#shared/contracts/trade.ts';
+import { formatEarTag } from '#shared/domain/ear-tag.ts';
 import { priceForWeight } from '#shared/domain/money.ts';
 import { listUnits } from '#shared/domain/trade-unit.ts';
 import { scale } from '#shared/engine/rounding.ts';
-import type { SideSupply } from '#shared/engine/cutout/cutout-types.ts';
+import type { Cutout, SideSupply } from '#shared/engine/cutout/cutout-types.ts';
 import { findPublishedAllocation, type AllocationRow } from '#server/allocation/allocation-queries.ts';
 import { loadDayCutouts, type DayCutouts } from '#server/carcases/day-figures.ts';
 import type { Db, Tx } from '#server/deps.ts';
 import { readProductNames, type ProductNames } from './product-names.ts';
-import type { FullReservation, LineRow } from './trade-queries.ts';
+import { readDispatched } from './dispatched-queries.ts';
+import { listColdWeightPrices, type FullReservation, type LineRow } from './trade-queries.ts';
 
-type DayContext = { figures: DayCutouts; published: AllocationRow | null };
+export type DayContext = { figures: DayCutouts; published: AllocationRow | null };
 
 /** Reservations with the grams that their units weigh by the newest figures of their day. */
 export async function describeReservations(db: Db | Tx, rows: readonly FullReservation[]): Promise<Reservation[]> {
   const names = await readProductNames(db);
+  const gone = await readDispatched(db, rows);
+  const bases = await listColdWeightPrices(db);
   const days = new Map<string, DayContext>();
   for (const dayId of new Set(rows.map((row) => row.cuttingDayId))) {
     const published = await findPublishedAllocation(db, dayId);
@@ -21,14 +25,20 @@ export async function describeReservations(db: Db | Tx, rows: readonly FullReser
   }
   return rows.flatMap((row) => {
     const day = days.get(row.cuttingDayId);
-    return day ? [describeReservation(row, { day, names })] : [];
+    return day ? [describeReservation(row, { day, names, gone, bases })] : [];
   });
 }
 
-type Context = { day: DayContext; names: ProductNames };
+type Context = {
+  day: DayContext;
+  names: ProductNames;
+  gone: ReadonlyMap<string, number>;
+  /** `<account id> <product>` of what is charged by cold weight. */
+  bases: ReadonlySet<string>;
+};
 
 function describeReservation(row: FullReservation, context: Context): Reservation {
-  const lines = row.lines.map((line) => describeLine(line, context));
+  const lines = row.lines.map((line) => describeLine(line, row.accountId, context));
   return {
     id: row.id,
     reservationNo: row.reservationNo,
@@ -45,22 +55,37 @@ function describeReservation(row: FullReservation, context: Context): Reservatio
   };
 }
 
-function describeLine(line: LineRow, { day, names }: Context): Reservation['lines'][number] {
+function describeLine(line: LineRow, accountId: string, context: Context): Reservation['lines'][number] {
+  const { day, names, gone, bases } = context;
   const side = line.unitKind ? sideOf(line, day) : null;
   const grams = line.grams ?? unitGrams(line.unitKind ?? 'side', side ? [side] : day.figures.sides);
   const carcase = day.figures.carcases.find((candidate) => candidate.row.id === side?.carcaseId);
+  const product = line.cutId ? `cut:${line.cutId}` : (line.unitKind ?? '');
+  const isByColdWeight = line.unitKind !== null && bases.has(`${accountId} ${product}`);
+  const dispatchedGrams = gone.get(line.id) ?? null;
+  const chargedGrams = isByColdWeight && carcase ? coldGrams(grams, carcase.cutout) : (dispatchedGrams ?? grams);
   return {
-    name: names.get(line.cutId ? `cut:${line.cutId}` : (line.unitKind ?? '')) ?? line.cutId ?? line.unitKind ?? '',
-    earTag: carcase?.row.animal.earTag ?? null,
+    id: line.id,
+    kind: line.kind,
+    name: names.get(product) ?? product,
+    earTag: carcase ? formatEarTag(carcase.row.animal.earTag) : null,
     side: side?.side ?? null,
     grams,
+    dispatchedGrams,
     tenthPencePerKg: line.tenthPencePerKg,
-    linePence: priceForWeight(grams, line.tenthPencePerKg),
+    basis: isByColdWeight ? 'cold weight' : 'scale weight',
+    chargedGrams,
+    linePence: priceForWeight(chargedGrams, line.tenthPencePerKg),
   };
 }
 
+/** A unit's part of the kill sheet's cold weight: its share of what is hung before any loss on the hook. */
+function coldGrams(grams: number, { cold, hung }: Cutout): number {
+  return hung.grams === 0 ? grams : scale(grams, cold.grams, hung.grams);
+}
+
 /** The side that the line names, else the one that the published plan gives it. */
-function sideOf(line: LineRow, { figures, published }: DayContext): SideSupply | null {
+export function sideOf(line: LineRow, { figures, published }: DayContext): SideSupply | null {
   const planned = published?.plan.plan.trade.find((candidate) => candidate.lineId === line.id)?.units[0]?.sideId;
   const id = line.carcaseId && line.side ? `${line.carcaseId}/${line.side}` : planned;
   return figures.sides.find((side) => side.id === id) ?? null;

@@ -4,11 +4,14 @@ import { AppError } from '#shared/errors.ts';
 import { findPublishedAllocation } from '#server/allocation/allocation-queries.ts';
 import { freeTradeOffers } from '#server/allocation/publish.ts';
 import { findDay, lockCuttingDay } from '#server/carcases/cutting-day-queries.ts';
+import { loadDayCutouts } from '#server/carcases/day-figures.ts';
 import type { Db, Deps, Tx } from '#server/deps.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
 import { readSettings } from '#server/farm/farm-settings.ts';
 import { enqueue } from '#server/queue.ts';
+import { priceLines } from './check-lines.ts';
 import { describeReservations } from './describe-reservation.ts';
+import { queueAnswer } from './reservation-mail.ts';
 import {
   addReservation,
   findReservation,
@@ -17,11 +20,10 @@ import {
   updateReservation,
   type AccountRow,
   type FullReservation,
-  type NewLine,
 } from './trade-queries.ts';
 import { workIn } from './work-in.ts';
 
-const MOVED_ON = 'This reservation has changed since you opened it. Nothing was done; look at it again.';
+export const MOVED_ON = 'This reservation has changed since you opened it. Nothing was done; look at it again.';
 
 export async function listReservations(deps: Deps, accountId: string | null): Promise<Reservation[]> {
   return describeReservations(deps.db, await listReservationRows(deps.db, accountId));
@@ -42,7 +44,7 @@ export async function reserve(deps: Deps, account: AccountRow, wanted: NewReserv
       `Reservations for this day closed on ${formatDayTime(day.cutOffAt)}. Nothing was reserved; choose another day.`,
     );
   }
-  const lines = priceLines(account, wanted);
+  const lines = priceLines(account, wanted, await loadDayCutouts(deps.db, day.id));
   const id = await deps.db.transaction(async (tx) => {
     const row = {
       accountId: account.id,
@@ -71,36 +73,29 @@ function describeOwn(deps: Deps, account: AccountRow, row: FullReservation): Pro
   return describeOne(deps.db, row);
 }
 
-async function describeOne(db: Db | Tx, row: FullReservation): Promise<Reservation> {
+export async function describeOne(db: Db | Tx, row: FullReservation): Promise<Reservation> {
   const [described] = await describeReservations(db, [row]);
   if (!described) throw new Error(`reservation ${row.id} has no cutting day`);
   return described;
 }
 
-function priceLines(account: AccountRow, wanted: NewReservation): NewLine[] {
-  const fields: Record<string, string> = {};
-  const lines = wanted.lines.map((line, index): NewLine => {
-    const product = line.kind === 'unit' ? line.unitKind : `cut:${line.cutId}`;
-    const price = account.prices.find((candidate) => candidate.product === product);
-    if (!price) fields[`lines.${index}`] = 'There is no price agreed for this yet. Ask the farm.';
-    const tenthPencePerKg = price?.tenthPencePerKg ?? 0;
-    if (line.kind === 'cut') return { kind: 'cut', cutId: line.cutId, grams: line.grams, tenthPencePerKg };
-    return { kind: 'unit', unitKind: line.unitKind, carcaseId: line.carcaseId, side: line.side, tenthPencePerKg };
-  });
-  if (Object.keys(fields).length > 0) throw new AppError('INVALID_INPUT', 'Nothing was reserved.', { fields });
-  return lines;
-}
-
-/** The way without an owner at hand: what cannot be worked in is refused, with what is still possible. */
+/**
+ * The way without an owner at hand: what cannot be worked in is refused, with what is still possible. Whatever else
+ * comes between leaves it as asked, for the owner to answer.
+ */
 async function confirmOrRefuse(deps: Deps, reservationId: string): Promise<void> {
   const row = await getReservation(deps.db, reservationId);
   try {
     await workIn(deps, row, null);
   } catch (error) {
-    if (!(error instanceof AppError) || error.code !== 'NOT_FILLABLE') throw error;
-    await updateReservation(deps.db, row.id, {
-      version: row.version,
-      values: { state: 'refused', answer: error.message },
+    if (!(error instanceof AppError)) throw error;
+    if (error.code !== 'NOT_FILLABLE') return;
+    const { message: answer } = error;
+    await deps.db.transaction(async (tx) => {
+      const values = { state: 'refused' as const, answer };
+      if (!(await updateReservation(tx, row.id, { version: row.version, values }))) return;
+      await recordAudit(tx, { byUserId: null, action: 'refused', subject: 'reservation', subjectId: row.id });
+      await queueAnswer(deps, tx, row.id);
     });
   }
 }
@@ -125,6 +120,7 @@ export async function refuseReservation(
       throw new AppError('STATE_CHANGED', MOVED_ON);
     }
     await recordAudit(tx, { byUserId, action: 'refused', subject: 'reservation', subjectId: row.id });
+    await queueAnswer(deps, tx, row.id);
     return describeOne(tx, await getReservation(tx, row.id));
   });
 }
@@ -152,7 +148,7 @@ export async function cancelReservation(deps: Deps, account: AccountRow, answer:
   });
 }
 
-async function getReservation(db: Db | Tx, id: string): Promise<FullReservation> {
+export async function getReservation(db: Db | Tx, id: string): Promise<FullReservation> {
   const row = await findReservation(db, id);
   if (!row) throw new AppError('NOT_FOUND', 'There is no such reservation.');
   return row;

@@ -3,6 +3,7 @@ import {
   cancelReservation,
   confirmReservation,
   decideTradeAccount,
+  dispatchReservation,
   getTradeAccount,
   listMyReservations,
   listReservations,
@@ -17,6 +18,7 @@ import { AppError } from '#shared/errors.ts';
 import type { Deps } from '#server/deps.ts';
 import { route, signedIn, type Api, type Caller } from '#server/http/route.ts';
 import * as accounts from './account-service.ts';
+import { dispatchReservation as dispatch } from './dispatch-service.ts';
 import * as reservations from './reservation-service.ts';
 import { listTradeDays as listDays } from './trade-day-service.ts';
 import { findAccountOf, type AccountRow } from './trade-queries.ts';
@@ -75,6 +77,10 @@ function addOwnerRoutes(api: Api, deps: Deps): void {
     schema: schema.refuseReservationSchema,
     handle: ({ params, body }, caller) =>
       reservations.refuseReservation(deps, signedIn(caller).id, { ...params, ...body }),
+  });
+  route(api, dispatchReservation, {
+    schema: schema.dispatchReservationSchema,
+    handle: ({ params, body }, caller) => dispatch(deps, signedIn(caller).id, { ...params, ...body }),
   });
   route(api, listTradeAccounts, {
     schema: schema.listTradeAccountsSchema,

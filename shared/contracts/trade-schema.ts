@@ -89,12 +89,19 @@ export const Reservation = z.strictObject({
   version: Version,
   lines: z.array(
     z.strictObject({
+      id: Id,
+      kind: z.enum(['unit', 'cut']),
       name: z.string(),
       earTag: z.string().nullable(),
       side: Side.nullable(),
       /** Estimated until the beast is weighed. */
       grams: z.int(),
+      /** On the scale as it left, or null while it is here. */
+      dispatchedGrams: z.int().nullable(),
       tenthPencePerKg: Rate,
+      basis: z.enum(['scale weight', 'cold weight']),
+      /** What the price is for: cold weight where the price list says so, else the scale's, else the estimate. */
+      chargedGrams: z.int(),
       linePence: z.int(),
     }),
   ),
@@ -128,6 +135,17 @@ export const confirmReservationSchema = {
 export const refuseReservationSchema = {
   params: ReservationId,
   body: z.strictObject({ version: Version, answer: Line }),
+  answer: Reservation,
+};
+export const dispatchReservationSchema = {
+  params: ReservationId,
+  body: z.strictObject({
+    version: Version,
+    /** One scale weight for each line that leaves whole; cuts leave in the packs that were filled for them. */
+    weights: z.array(z.strictObject({ lineId: Id, grams: Grams })).max(30),
+    /** Lets cuts leave although fewer packs are there than were reserved. */
+    isShortAccepted: z.boolean().default(false),
+  }),
   answer: Reservation,
 };
 export const listTradeAccountsSchema = { answer: z.strictObject({ accounts: z.array(TradeAccount) }) };

@@ -40,6 +40,12 @@ export const refuseReservation = endpoint<typeof schema.refuseReservationSchema>
   '/api/office/reservations/:reservationId/refuse',
   ['owner'],
 );
+/** The beef leaves for the butcher: scale weights and packs go into the ledger, and the price is what they weigh. */
+export const dispatchReservation = endpoint<typeof schema.dispatchReservationSchema>(
+  'POST',
+  '/api/office/reservations/:reservationId/dispatch',
+  ['owner'],
+);
 export const listTradeAccounts = endpoint<typeof schema.listTradeAccountsSchema>('GET', '/api/office/trade-accounts', [
   'owner',
 ]);

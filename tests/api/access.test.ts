@@ -3,7 +3,7 @@ import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { AUTH_ENDPOINTS } from '#server/auth/auth.ts';
 import { ROLES, type Role } from '#shared/domain/roles.ts';
 import { startWorld, type World } from '#tests/support/harness.ts';
-import { makeConfirmedOrder, makeStall } from '#tests/support/make-order.ts';
+import { makeConfirmedOrder, makeStall, type Stall } from '#tests/support/make-order.ts';
 import { makeReservation } from '#tests/support/make-reservation.ts';
 import { makeTradeAccount } from '#tests/support/make-selling-day.ts';
 
@@ -40,6 +40,7 @@ const MAY_CALL: Record<string, Who[]> = {
   'GET /api/office/reservations': OWNER,
   'POST /api/office/reservations/:reservationId/confirm': OWNER,
   'POST /api/office/reservations/:reservationId/refuse': OWNER,
+  'POST /api/office/reservations/:reservationId/dispatch': OWNER,
   'GET /api/office/trade-accounts': OWNER,
   'POST /api/office/trade-accounts/:accountId/decision': OWNER,
   'PUT /api/office/trade-accounts/:accountId/prices': OWNER,
@@ -98,10 +99,12 @@ const AUTH_MAY_CALL: Record<string, Who[]> = {
 };
 
 let world: World;
+let stall: Stall;
 const cookies = new Map<Who, string>();
 
 beforeAll(async () => {
   world = await startWorld();
+  stall = await makeStall(world);
   for (const role of ROLES) {
     const { userId, cookie } = await world.signIn(role);
     cookies.set(role, cookie);
@@ -168,11 +171,6 @@ test('the sign-in library answers only at the endpoints that the app uses', asyn
 });
 
 describe('people who hold the same role', () => {
-  let stall: Awaited<ReturnType<typeof makeStall>>;
-  beforeAll(async () => {
-    stall = await makeStall(world);
-  });
-
   test('as customers, see their own orders only', async () => {
     const ada = await world.signIn('customer');
     const bess = await world.signIn('customer');
