@@ -11,7 +11,7 @@ export type DeliveryReport = {
  * part brings the headers of the mail that was sent. Null for any other mail.
  */
 export async function readDeliveryReport(raw: Buffer): Promise<DeliveryReport | null> {
-  const mail = await simpleParser(raw, { skipHtmlToText: true, skipTextToHtml: true });
+  const mail = await simpleParser(raw, { keepDeliveryStatus: true, skipTextToHtml: true });
   const partOf = (...types: string[]) => mail.attachments.find((part) => types.includes(part.contentType));
   const status = partOf('message/delivery-status');
   const returned = partOf('text/rfc822-headers', 'message/rfc822');
