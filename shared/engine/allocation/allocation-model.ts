@@ -35,6 +35,8 @@ export type BoxColumns = {
   floor: string;
   steps: string[];
   cells: CellColumn[];
+  /** In the elastic model only: kilograms that a line lacks. */
+  lacks: { line: RecipeLine; column: string }[];
   /** In the third model only: how many boxes follow each pattern. */
   patterns: PatternColumns[];
 };
@@ -58,6 +60,8 @@ export type ShortColumn = { priority: Priority; column: string; penceEach: numbe
 export type AllocationModel = {
   /** The second model: packs of every cut in every line are whole. */
   isPacked: boolean;
+  /** For explanations: lines may lack grams, in columns of their own. */
+  isElastic: boolean;
   /** The third model: every box follows one of these. */
   patterns: Patterns | null;
   input: AllocationInput;
@@ -97,7 +101,7 @@ export function pencePerKg(tenthPencePerKg: number): number {
 
 export function emptyModel(
   input: AllocationInput,
-  kind: Pick<AllocationModel, 'isPacked' | 'patterns'>,
+  kind: Pick<AllocationModel, 'isPacked' | 'isElastic' | 'patterns'>,
 ): AllocationModel {
   return {
     ...kind,

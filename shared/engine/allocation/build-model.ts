@@ -66,10 +66,10 @@ function addSupply(model: AllocationModel, cutId: string, state: MeatState): voi
  */
 export function buildModel(
   input: AllocationInput,
-  about: { isPacked?: boolean; patterns?: Patterns } = {},
+  about: { isPacked?: boolean; isElastic?: boolean; patterns?: Patterns } = {},
 ): AllocationModel {
-  const { isPacked = false, patterns = null } = about;
-  const model = emptyModel(input, { isPacked, patterns });
+  const { isPacked = false, isElastic = false, patterns = null } = about;
+  const model = emptyModel(input, { isPacked, isElastic, patterns });
   for (const { id } of input.cuts) model.namer.name('k', id);
   addSides(model);
   if (input.mince) addMince(model, input.mince);

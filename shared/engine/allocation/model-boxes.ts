@@ -124,29 +124,29 @@ function addPackRows(
   }
 }
 
-function addLine(model: AllocationModel, line: RecipeLine, about: { variant: string; boxes: string }): CellColumn[] {
+type Filled = Pick<BoxColumns, 'cells' | 'lacks'>;
+
+function addLine(model: AllocationModel, line: RecipeLine, about: { variant: string; boxes: string }): Filled {
   const name = `${about.variant}_${model.namer.name(`l_${about.variant}`, line.id)}`;
   const cells = addCells(model, line, name);
+  const lacks = model.isElastic ? [{ line, column: model.lp.addColumn(`lack_${name}`) }] : [];
   const range = packableRange(line, model.cuts);
   if (!range) throw new RangeError(`line ${line.id} has no whole packs`);
-  const grams: Term[] = cells.map(({ column }) => [1, column]);
+  const grams: Term[] = [...cells, ...lacks].map(({ column }) => [1, column]);
   model.lp.addRow(`least_${name}`, [...grams, [-range.minGrams / 1000, about.boxes]], ['>=', 0]);
   model.lp.addRow(`most_${name}`, [...grams, [-range.maxGrams / 1000, about.boxes]], ['<=', 0]);
-  addPackRows(model, cells, { name, boxes: about.boxes });
-  return cells;
+  if (!model.isElastic) addPackRows(model, cells, { name, boxes: about.boxes });
+  return { cells, lacks };
 }
 
 /** Contents by line, grams shared over all boxes of the variant. */
-function addContents(
-  model: AllocationModel,
-  variant: BoxVariant,
-  about: { name: string; boxes: string },
-): CellColumn[] {
-  const cells = variant.lines.flatMap((line) => addLine(model, line, { variant: about.name, boxes: about.boxes }));
-  const grams: Term[] = cells.map(({ column }) => [1, column]);
+function addContents(model: AllocationModel, variant: BoxVariant, about: { name: string; boxes: string }): Filled {
+  const lines = variant.lines.map((line) => addLine(model, line, { variant: about.name, boxes: about.boxes }));
+  const filled = { cells: lines.flatMap(({ cells }) => cells), lacks: lines.flatMap(({ lacks }) => lacks) };
+  const grams: Term[] = [...filled.cells, ...filled.lacks].map(({ column }) => [1, column]);
   const guarantee: Term = [-variant.guaranteedGrams / 1000, about.boxes];
   model.lp.addRow(`guarantee_${about.name}`, [...grams, guarantee], ['>=', 0]);
-  return cells;
+  return filled;
 }
 
 function addBox(model: AllocationModel, variant: BoxVariant): void {
@@ -159,7 +159,7 @@ function addBox(model: AllocationModel, variant: BoxVariant): void {
     lp.addColumn(`more${index + 1}_${name}`, { cost: step.valuePence, upper: step.boxes }),
   );
   const patterns = model.patterns?.get(variant.id);
-  const cells = patterns ? [] : addContents(model, variant, { name, boxes });
+  const filled = patterns ? { cells: [], lacks: [] } : addContents(model, variant, { name, boxes });
   const parts: Term[] = [floor, ...steps].map((column) => [-1, column]);
   lp.addRow(`count_${name}`, [[1, boxes], ...parts], ['=', 0]);
   const short = addShort(model, {
@@ -170,7 +170,7 @@ function addBox(model: AllocationModel, variant: BoxVariant): void {
     penceEach: Math.max(1, variant.pricePence),
   });
   lp.addRow(`floor_${name}`, [[1, floor], ...short], ['=', variant.floor]);
-  const columns: BoxColumns = { variant, boxes, floor, steps, cells, patterns: [] };
+  const columns: BoxColumns = { variant, boxes, floor, steps, ...filled, patterns: [] };
   if (patterns) columns.patterns = addPatterns(model, { variant, name, boxes, patterns });
   model.boxes.push(columns);
 }
