@@ -62,9 +62,8 @@ async function makeRecipe(db: Db, kind: typeof boxKind.$inferInsert, lines: read
   return boxKindId;
 }
 
-/** A farm with a day of two weighed steers, two kinds of box and a slot: ready to be allocated, nothing on sale yet. */
-export async function makeSellingDay(db: Db, clock: Clock) {
-  const today = clock.today();
+/** What a farm has before its first cutting day: its own table of cuts, two kinds of box and a specification. */
+export async function makeShelves(db: Db) {
   await makeFarm(db);
   await makeCutsOfTheSide(db);
   const everydayId = await makeRecipe(
@@ -96,6 +95,13 @@ export async function makeSellingDay(db: Db, clock: Clock) {
     GRILL,
   );
   const specification = await makeSpecification(db, { name: traditionalSide.name, body: traditionalSide });
+  return { everydayId, grillId, specification };
+}
+
+/** A farm with a day of two weighed steers, two kinds of box and a slot: ready to be allocated, nothing on sale yet. */
+export async function makeSellingDay(db: Db, clock: Clock) {
+  const today = clock.today();
+  const { everydayId, grillId, specification } = await makeShelves(db);
   const day = await makeCuttingDay(db, today, { specificationId: specification.id, state: 'planned' });
   const carcases = [];
   for (const hotGrams of [330_000, 318_000]) {
