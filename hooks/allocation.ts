@@ -12,6 +12,8 @@ export function allocationQuery(dayId: string) {
     queryKey: ['allocations', dayId],
     queryFn: ({ signal }) => call(getAllocation, { params: { dayId }, signal }),
     staleTime: STALE.stock,
+    // The limits, worths and costs of locks follow the plan a moment later.
+    refetchInterval: ({ state }) => (state.data?.latest?.isExplained === false ? 2_000 : false),
   });
 }
 
