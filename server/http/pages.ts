@@ -19,7 +19,7 @@ export function pages(root: string): Router {
   router.use('/assets', express.static(path.join(client, 'assets'), { immutable: true, maxAge: YEAR_MS }));
   router.use('/fonts', express.static(path.join(root, 'fonts'), { immutable: true, maxAge: YEAR_MS }));
   router.use(express.static(client, { index: false, maxAge: 3_600_000 }));
-  router.use(hashInlineScripts);
+  router.use(finishPage);
   router.use(createRequestHandler({ build: path.join(root, 'dist', 'server') }));
   return router;
 }
@@ -46,8 +46,11 @@ function precompressed(client: string): RequestHandler {
   };
 }
 
-/** Content-Security-Policy by hash: the router's inline scripts carry the page's data and change with it. */
-const hashInlineScripts: RequestHandler = (_request, response, next) => {
+/**
+ * Holds a rendered page back until it is whole. Its status is what the page itself says it shows: a screen for a missing
+ * box is a 404. Content-Security-Policy goes by hash: the router's inline scripts carry the page's data and change with it.
+ */
+const finishPage: RequestHandler = (_request, response, next) => {
   const chunks: Buffer[] = [];
   const keep = (chunk: unknown): void => {
     if (typeof chunk === 'string' || chunk instanceof Uint8Array) chunks.push(Buffer.from(chunk));
@@ -61,7 +64,13 @@ const hashInlineScripts: RequestHandler = (_request, response, next) => {
     keep(chunk);
     const body = Buffer.concat(chunks);
     if (!response.headersSent && String(response.getHeader('content-type')).includes('text/html')) {
-      response.setHeader('Content-Security-Policy', contentSecurityPolicy(body.toString('utf8')));
+      const html = body.toString('utf8');
+      const shown = / data-page-status="(404|503)"/.exec(html)?.[1];
+      if (shown && response.statusCode === 200) {
+        response.statusCode = Number(shown);
+        response.statusMessage = '';
+      }
+      response.setHeader('Content-Security-Policy', contentSecurityPolicy(html));
       response.setHeader('Cache-Control', 'no-store');
       response.setHeader('Content-Length', body.length);
     }
