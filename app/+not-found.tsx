@@ -1,15 +1,28 @@
+import { Link } from 'expo-router';
 import { View } from 'react-native';
+import { FARM_MARK } from '#components/shop/places.ts';
 import { css } from '#components/theme/css.ts';
-import { Heading } from '#components/ui/heading.tsx';
-import { Text } from '#components/ui/text.tsx';
-import { TextLink } from '#components/ui/text-link.tsx';
+import { ButtonLink } from '#components/ui/button-link.tsx';
+import { EmptyState } from '#components/ui/empty-state.tsx';
 
-export default function NotFound() {
+/** Any address that leads nowhere. */
+export default function NotFoundScreen() {
   return (
-    <View role="main" style={css('w-page', 'w-page-narrow', 'w-main', 'w-stack')}>
-      <Heading level={1}>There is no such page</Heading>
-      <Text>The address may have been typed wrongly, or what it led to is gone.</Text>
-      <TextLink href="/">Back to the shop</TextLink>
+    <View style={css('w-shell')}>
+      <View role="banner" style={css('w-page', 'w-head')}>
+        <Link href="/" style={css('t-mark', 'w-mark')}>
+          {FARM_MARK}
+        </Link>
+      </View>
+      <View role="main" id="main" style={css('w-page', 'w-main')}>
+        <EmptyState
+          level={1}
+          title="There is no such page"
+          words="The address may have been typed wrongly, or what it led to has been sold through."
+        >
+          <ButtonLink href="/" label="To the shop" />
+        </EmptyState>
+      </View>
     </View>
   );
 }

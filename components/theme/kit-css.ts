@@ -52,7 +52,8 @@ const tables = `
 :root .w-definition-strong dt,:root .w-definition-strong dd{color:var(--text);font-weight:700}
 :root .w-definitions-ruled{gap:0;border-top:1px solid var(--line)}
 :root .w-definitions-ruled>.w-definition{border-bottom:1px solid var(--line);padding-block:12px}
-:root .w-definitions-facts>.w-definition{display:grid;grid-template-columns:minmax(6.5rem,9rem) minmax(0,1fr)}
+:root .w-definitions-facts>.w-definition{display:grid;grid-template-columns:7.25rem minmax(0,1fr)}
+@media (min-width:760px){:root .w-definitions-facts>.w-definition{grid-template-columns:11rem minmax(0,1fr)}}
 :root .w-definitions-facts dd{text-align:start;margin:0}
 :root .w-definitions-ruled dt{color:var(--text);font-weight:600}
 `;
