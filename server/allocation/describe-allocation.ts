@@ -130,7 +130,7 @@ function describeChoice(row: AllocationRow, { side, choice, reserved }: ChoiceFa
     wayId: fate?.wayId ?? null,
     soldTo: reserved.find((line) => line.id === soldLine)?.businessName ?? null,
     isLocked: row.locks.some(isHere),
-    lockCostPence: row.plan.explanation?.lockCosts.find(isHere)?.costPence ?? null,
+    lockCostPence: row.plan.explanation?.locks.find(isHere)?.costPence ?? null,
     ways: choice.ways.map(({ wayId, name, closedReason }) => ({ wayId, name, closedReason })),
   };
 }

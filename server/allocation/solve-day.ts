@@ -1,5 +1,6 @@
-import type { AllocationAnswer, AllocationQuestion, Explanation } from '#shared/domain/allocation-record.ts';
+import type { AllocationAnswer, AllocationQuestion } from '#shared/domain/allocation-record.ts';
 import { allocate } from '#shared/engine/allocation/allocate.ts';
+import { explain, type Explanation } from '#shared/engine/allocation/explain.ts';
 import type { AllocationPlan } from '#shared/engine/allocation/allocation-plan.ts';
 import type { Solver } from '#shared/engine/linear/solve.ts';
 import { promiseOffers } from '#shared/engine/promise/promise.ts';
@@ -27,8 +28,9 @@ export function promiseDay({ question, plan }: SolvedQuestion, solver: Solver): 
 }
 
 /** Why the plan is as it is, by solving it again with one thing changed at a time. */
-export function explainDay(_solved: SolvedQuestion, _solver: Solver): Promise<Explanation> {
-  return Promise.resolve({ limits: [], worths: [], lockCosts: [] });
+export function explainDay(solved: SolvedQuestion, solver: Solver): Promise<Explanation> {
+  const options = { timeLimitSeconds: TIME_LIMIT_SECONDS };
+  return explain(solved.question.input, toPlan(solved), { solver, options });
 }
 
 function toPlan({ question, plan }: SolvedQuestion): AllocationPlan {

@@ -1,5 +1,6 @@
 import type { AllocationInput } from '#shared/engine/allocation/allocation-input.ts';
-import type { AllocationPlan, BoxLimit, CutWorth, LockCost } from '#shared/engine/allocation/allocation-plan.ts';
+import type { AllocationPlan } from '#shared/engine/allocation/allocation-plan.ts';
+import type { Explanation } from '#shared/engine/allocation/explain.ts';
 import type { BoxPromise, Spread } from '#shared/engine/promise/promise-types.ts';
 
 /** What an allocation was asked: kept, so that its answer can be traced and checked by another solver. */
@@ -9,9 +10,6 @@ export type AllocationQuestion = {
   /** How far the weights of each carcase may still be off. */
   spreads: Record<string, Spread>;
 };
-
-/** What limits each box, what more of a cut would be worth and what each lock costs: found by solving again. */
-export type Explanation = { limits: BoxLimit[]; worths: CutWorth[]; lockCosts: LockCost[] };
 
 /** What it answered. Variant, kind and cut ids are those of the products' tables. */
 export type AllocationAnswer = {
