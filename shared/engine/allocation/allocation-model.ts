@@ -44,10 +44,6 @@ export type BoxColumns = {
 export type Patterns = ReadonlyMap<string, readonly Pattern[]>;
 export type LooseColumns = {
   demand: LooseDemand;
-  /** Grams of one pack as planned. */
-  packGrams: number;
-  floor: string;
-  steps: string[];
   sources: { state: MeatState; column: string }[];
   packs: string | null;
 };

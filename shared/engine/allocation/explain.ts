@@ -76,11 +76,10 @@ function stockKg(model: AllocationModel, cutId: string): number {
 
 /** Loose packs and cuts for the trade as planned: what one more box would have to leave alone. */
 function keepOffers(model: AllocationModel, plan: AllocationPlan): Row[] {
-  const loose = model.loose.map(({ demand, packGrams, sources }, index): Row => {
+  const loose = model.loose.map(({ demand, sources }, index): Row => {
     const planned = plan.loose.find(({ cutId }) => cutId === demand.cutId)?.grams ?? 0;
-    const most = packGrams * (demand.floor + demand.steps.reduce((sum, { packs }) => sum + packs, 0));
     const terms = sources.map(({ column }): Term => [1, column]);
-    return { name: `offer_loose${index + 1}`, terms, sense: '>=', right: Math.min(planned, most) / 1000 };
+    return { name: `offer_loose${index + 1}`, terms, sense: '>=', right: planned / 1000 };
   });
   const trade = model.tradeCuts.map(({ line, column }) => {
     const planned = plan.trade.find(({ lineId }) => lineId === line.id)?.cutGrams ?? 0;

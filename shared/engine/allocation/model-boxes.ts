@@ -129,7 +129,9 @@ type Filled = Pick<BoxColumns, 'cells' | 'lacks'>;
 function addLine(model: AllocationModel, line: RecipeLine, about: { variant: string; boxes: string }): Filled {
   const name = `${about.variant}_${model.namer.name(`l_${about.variant}`, line.id)}`;
   const cells = addCells(model, line, name);
-  const lacks = model.isElastic ? [{ line, column: model.lp.addColumn(`lack_${name}`) }] : [];
+  const lacks = model.isElastic
+    ? [{ line, column: model.lp.addColumn(`lack_${name}`, { upper: line.maxGrams / 1000 }) }]
+    : [];
   const range = packableRange(line, model.cuts);
   if (!range) throw new RangeError(`line ${line.id} has no whole packs`);
   const grams: Term[] = [...cells, ...lacks].map(({ column }) => [1, column]);
