@@ -13,8 +13,10 @@ body{margin:0;background:var(--page);color:var(--text);font:400 1rem/1.5 'Public
 const sans = `font-family:'Public Sans','Public Sans stand-in',system-ui,sans-serif`;
 const clarendon = `font-family:'Besley','Besley stand-in',Georgia,serif`;
 
+// The first rule gives every part of the kit its letter, and gives way to any that names another.
 // Besley's noughts of one width are drawn light in every weight: prices take its ordinary figures.
 const type = `
+html:root :where([class^='w-'],[class*=' w-']){${sans}}
 :root .t-text{${sans};font-weight:400;font-size:1rem;line-height:1.5;color:var(--text);margin:0}
 :root .t-lead{font-size:1.125rem;line-height:1.5;text-wrap:pretty}
 :root .t-small{font-size:.875rem;line-height:1.45}
