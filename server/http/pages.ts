@@ -3,7 +3,9 @@ import fs from 'node:fs';
 import { createRequire } from 'node:module';
 import path from 'node:path';
 import type * as expoServer from 'expo-server/adapter/express';
-import express, { type RequestHandler, Router } from 'express';
+import express, { type ErrorRequestHandler, type RequestHandler, Router } from 'express';
+import { log } from './log.ts';
+import { warmFirst } from './warm-pages.ts';
 
 // Its module form calls `require`, which modules do not have: the CommonJS form is asked for.
 const { createRequestHandler } = createRequire(import.meta.url)('expo-server/adapter/express') as typeof expoServer;
@@ -19,8 +21,11 @@ export function pages(root: string): Router {
   router.use('/assets', express.static(path.join(client, 'assets'), { immutable: true, maxAge: YEAR_MS }));
   router.use('/fonts', express.static(path.join(root, 'fonts'), { immutable: true, maxAge: YEAR_MS }));
   router.use(express.static(client, { index: false, maxAge: 3_600_000 }));
+  const build = path.join(root, 'dist', 'server');
+  router.use(warmFirst(build));
   router.use(finishPage);
-  router.use(createRequestHandler({ build: path.join(root, 'dist', 'server') }));
+  router.use(createRequestHandler({ build }));
+  router.use(brokenPage);
   return router;
 }
 
@@ -78,6 +83,19 @@ const finishPage: RequestHandler = (_request, response, next) => {
   }) as typeof response.end;
   next();
 };
+
+/** A page that cannot be drawn is still a page: people see no JSON. The cause goes to the log. */
+// Express knows an error handler by its four parameters.
+// eslint-disable-next-line max-params -- see above
+const brokenPage: ErrorRequestHandler = (error, request, response, next) => {
+  if (response.headersSent || !request.accepts('html')) return next(error);
+  log.error({ err: error as unknown, requestId: request.id }, 'a page could not be drawn');
+  response.status(500).type('html').send(BROKEN);
+};
+
+const BROKEN = `<!doctype html><html lang="en-GB"><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1"><title>This page did not open</title>
+<style>body{margin:0 auto;max-width:38rem;padding:64px 20px;font:1.0625rem/1.5 system-ui,sans-serif;background:#FBF6F1;color:#1E1A18}a{color:#A8341F}@media (prefers-color-scheme:dark){body{background:#171311;color:#F4EAE0}a{color:#F0917A}}</style>
+<h1>This page did not open</h1><p>The fault is ours, and nothing of yours was changed. Please try again in a minute.</p><p><a href="/">To the shop</a></p></html>`;
 
 function contentSecurityPolicy(html: string): string {
   const inline = [...html.matchAll(/<script(?![^>]*\ssrc=)[^>]*>([\s\S]*?)<\/script>/g)].map((match) => match[1] ?? '');
