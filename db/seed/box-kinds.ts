@@ -25,8 +25,9 @@ const COUNTER_STEAKS = [
 const PRIME_STEAKS = ['fillet-steak', 'sirloin-steak', 'rib-eye-steak', 't-bone-steak', 'cote-de-boeuf'];
 const PRIME_ROASTS = ['fore-rib', 'fore-rib-chined', 'rib-rolled', 'sirloin-joint', 'sirloin-on-the-bone', 'rump-cap'];
 const LEAN_ROASTS = ['topside-joint', 'top-rump-joint', 'salmon-cut-joint', 'silverside-joint'];
-const POT_ROASTS = ['brisket-joint', 'blade-joint', 'leg-of-mutton-joint', 'silverside-joint'];
-const STEWS = ['braising-steak', 'diced-beef', 'feather-steak', 'braising-slices', 'shin-slices'];
+const POT_ROASTS = ['blade-joint', 'leg-of-mutton-joint', 'silverside-joint'];
+const BRISKETS = ['brisket-joint', 'brisket-on-the-bone'];
+const STEWS = ['braising-steak', 'diced-beef', 'feather-steak', 'braising-slices'];
 const SHIN = ['shin-slices', 'shin-on-the-bone'];
 const QUICK = ['stir-fry-strips', 'minute-steak', 'rump-steak', 'bavette', 'sirloin-steak', 'rib-eye-steak'];
 
@@ -38,10 +39,10 @@ export const STARTING_BOXES: readonly StartingBox[] = [
     guaranteedGrams: 5_000,
     pricePence: 7_600,
     packagingPence: 290,
-    demandBoxes: 30,
+    demandBoxes: 13,
     lines: [
-      { name: 'Mince', limits: [1_200, 2_100, 3, 4], cutIds: ['mince'] },
-      { name: 'For the stew', limits: [800, 1_650, 2, 3], cutIds: STEWS },
+      { name: 'Mince', limits: [1_200, 1_650, 3, 3], cutIds: ['mince'] },
+      { name: 'For the stew', limits: [800, 1_100, 2, 2], cutIds: STEWS },
       { name: 'A roasting joint', limits: [900, 1_800, 1, 1], cutIds: LEAN_ROASTS },
       {
         name: 'Steaks for the week',
@@ -57,10 +58,10 @@ export const STARTING_BOXES: readonly StartingBox[] = [
     guaranteedGrams: 10_000,
     pricePence: 14_800,
     packagingPence: 420,
-    demandBoxes: 10,
+    demandBoxes: 5,
     lines: [
-      { name: 'Mince', limits: [2_400, 4_200, 6, 8], cutIds: ['mince'] },
-      { name: 'For the stew', limits: [1_600, 3_000, 4, 6], cutIds: STEWS },
+      { name: 'Mince', limits: [2_400, 3_300, 6, 6], cutIds: ['mince'] },
+      { name: 'For the stew', limits: [1_600, 2_200, 4, 4], cutIds: STEWS },
       { name: 'Roasting joints', limits: [1_800, 3_600, 2, 2], cutIds: LEAN_ROASTS },
       { name: 'For the slow oven', limits: [1_000, 2_000, 1, 1], cutIds: POT_ROASTS },
       {
@@ -77,7 +78,7 @@ export const STARTING_BOXES: readonly StartingBox[] = [
     guaranteedGrams: 6_000,
     pricePence: 11_900,
     packagingPence: 340,
-    demandBoxes: 12,
+    demandBoxes: 8,
     lines: [
       { name: 'The great roast', limits: [1_200, 2_800, 1, 2], cutIds: PRIME_ROASTS },
       { name: 'Lean roasts', limits: [1_600, 3_400, 1, 2], cutIds: LEAN_ROASTS },
@@ -91,11 +92,11 @@ export const STARTING_BOXES: readonly StartingBox[] = [
     guaranteedGrams: 4_000,
     pricePence: 9_800,
     packagingPence: 290,
-    demandBoxes: 14,
+    demandBoxes: 9,
     lines: [
       { name: 'Prime steaks', limits: [1_000, 2_000, 2, 4], cutIds: PRIME_STEAKS },
       { name: 'Counter steaks', limits: [1_000, 2_000, 3, 5], cutIds: COUNTER_STEAKS },
-      { name: 'Coarse mince for burgers', limits: [800, 1_650, 2, 3], cutIds: ['mince'] },
+      { name: 'Coarse mince for burgers', limits: [800, 1_100, 2, 2], cutIds: ['mince'] },
     ],
   },
   {
@@ -105,28 +106,32 @@ export const STARTING_BOXES: readonly StartingBox[] = [
     guaranteedGrams: 5_000,
     pricePence: 6_400,
     packagingPence: 290,
-    demandBoxes: 16,
+    demandBoxes: 7,
     lines: [
-      { name: 'Braising cuts', limits: [1_200, 2_700, 3, 5], cutIds: STEWS },
+      { name: 'Braising cuts', limits: [1_200, 2_200, 3, 4], cutIds: STEWS },
       { name: 'Shin', limits: [400, 1_200, 1, 2], cutIds: SHIN },
-      { name: 'A pot roast', limits: [1_000, 2_600, 1, 2], cutIds: [...POT_ROASTS, 'brisket-on-the-bone'] },
-      { name: 'Mince', limits: [800, 1_650, 2, 3], cutIds: ['mince'] },
+      {
+        name: 'A pot roast',
+        limits: [1_000, 2_600, 1, 2],
+        cutIds: [...BRISKETS, 'blade-joint', 'leg-of-mutton-joint'],
+      },
+      { name: 'Mince', limits: [800, 1_100, 2, 2], cutIds: ['mince'] },
     ],
   },
 ];
 
 /** Cuts that are also sold by the single pack, and how many packs of each a cutting day is expected to sell. */
 export const LOOSE_CUTS: Readonly<Record<string, number>> = {
-  'fillet-steak': 14,
-  'sirloin-steak': 12,
-  'rib-eye-steak': 12,
+  'fillet-steak': 12,
+  'sirloin-steak': 10,
+  'rib-eye-steak': 10,
   'rump-steak': 10,
   'fore-rib': 4,
   'topside-joint': 6,
   'brisket-joint': 6,
   'braising-steak': 12,
-  'diced-beef': 16,
-  'shin-slices': 10,
+  'diced-beef': 14,
+  'shin-on-the-bone': 12,
   bavette: 6,
-  mince: 60,
+  mince: 70,
 };
