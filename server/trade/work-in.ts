@@ -32,6 +32,7 @@ export async function workIn(deps: Deps, row: FullReservation, byUserId: string 
       asked: row.lines.map((line): ReservedLine => ({ ...line, ...named(row) })),
     });
     await refuseIfShort(deps, row, solved);
+    refuseUnproven(solved);
     try {
       await confirm(deps, { row, solved: await withPromise(deps, solved), byUserId });
       return;
@@ -74,6 +75,15 @@ async function refuseIfShort(deps: Deps, row: FullReservation, { plan }: SolvedD
   const isPossible = possible.length > 0 && !isForeign;
   const rest = isPossible ? `Still possible: ${possible.join('; ')}.` : 'Another day may still have it.';
   throw new AppError('NOT_FILLABLE', `Not everything can be met beside what is sold. ${missing.join(' ')} ${rest}`);
+}
+
+/** A plan that ran out of time says nothing about what is possible: the reservation waits for another try. */
+function refuseUnproven({ isProven }: SolvedDay): void {
+  if (isProven) return;
+  throw new AppError(
+    'SOLVER_FAILED',
+    'The day could not be worked out in time. Nothing was changed and the reservation waits as asked; try again.',
+  );
 }
 
 function nameOf({ cutId, unitKind }: LineRow, products: ProductNames): string {
