@@ -2,6 +2,7 @@ import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { getMe } from '#shared/contracts/office.ts';
 import type { Role } from '#shared/domain/roles.ts';
 import { call } from './api.ts';
+import { meQuery } from './me.ts';
 
 /** A refusal of the sign-in library in our words, beside its field where it has one. */
 export class AccountRefusal extends Error {
@@ -71,10 +72,11 @@ export function useSignIn() {
     mutationFn: async ({ email, password }: SignIn): Promise<Role> => {
       const answer = await (await client()).signIn.email({ email: email.trim(), password, callbackURL: CONFIRMED });
       refuse(answer);
-      const { user } = await call(getMe, {});
-      return user?.role ?? 'customer';
+      const me = await call(getMe, {});
+      // Set, not only asked again: the next screen would still read that nobody is signed in, and lead back here.
+      queries.setQueryData(meQuery().queryKey, me);
+      return me.user?.role ?? 'customer';
     },
-    onSuccess: () => queries.invalidateQueries({ queryKey: ['me'] }),
   });
 }
 
