@@ -7,9 +7,10 @@ import type { Deps, Tx } from '#server/deps.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
 import { listBalances, listLedgerCarcases, recordMovements, type Movement } from './ledger-queries.ts';
 import { markSoldThrough } from './carcase-queries.ts';
-import { closeDay, listUnsettledOrders, listUnsettledReservations, lockCuttingDay } from './cutting-day-queries.ts';
+import { closeDay, listUnsettledOrders, listAskedReservations, lockCuttingDay } from './cutting-day-queries.ts';
 import { getCuttingDay } from './cutting-day-service.ts';
 import { loadDayCutouts, type CarcaseFigures } from './day-figures.ts';
+import { dispatchTrade } from './dispatch-trade.ts';
 import { readPublishedWays } from './published-plan.ts';
 
 /** Bone, fat and loss that lie unweighed may differ from the estimate by this much of the carcase: common practice. */
@@ -25,7 +26,7 @@ export async function closeCuttingDay(
     const day = await lockCuttingDay(tx, dayId);
     if (!day) throw new AppError('NOT_FOUND', 'There is no such cutting day.');
     refuseWaiting('order', await listUnsettledOrders(tx, dayId));
-    refuseWaiting('reservation', await listUnsettledReservations(tx, dayId));
+    refuseWaiting('reservation', await listAskedReservations(tx, dayId));
     await settleGrams(tx, byUserId, dayId);
     if (!(await closeDay(tx, dayId, version))) {
       throw new AppError(
@@ -52,21 +53,21 @@ function refuseWaiting(what: 'order' | 'reservation', numbers: readonly number[]
 }
 
 /**
- * What still lies in the carcase is bone, fat and loss and goes to waste; packs that nobody bought go to the freezer.
- * More than bone, fat and loss explain means that product lies unweighed.
+ * What the butchers reserved has left with them; what still lies in a carcase is bone, fat and loss and goes to waste;
+ * packs that nobody bought go to the freezer. More than bone, fat and loss explain means that product lies unweighed.
  */
 async function settleGrams(tx: Tx, byUserId: string, dayId: string): Promise<void> {
   const { carcases } = await loadDayCutouts(tx, dayId, await readPublishedWays(tx, dayId));
   const ids = carcases.map(({ row }) => row.id);
   if (ids.length === 0) return;
-  const inLedger = await listLedgerCarcases(tx, ids);
+  await enterLedger(tx, byUserId, carcases);
+  const leftWhole = await dispatchTrade(tx, { dayId, byUserId, carcases });
   const balances = await listBalances(tx, ids);
   const movements: Movement[] = [];
   for (const carcase of carcases) {
-    if (!inLedger.has(carcase.row.id)) throw unweighed(carcase, carcase.cutout.cold.grams);
     const left = balances.find(({ carcaseId, place }) => carcaseId === carcase.row.id && place === 'carcase');
-    if (!left) continue;
-    if (left.grams > mostWaste(carcase)) throw unweighed(carcase, left.grams);
+    if (!left || left.grams <= 0) continue;
+    if (left.grams > mostWaste(carcase, leftWhole.get(carcase.row.id) ?? [])) throw unweighed(carcase, left.grams);
     const reason = 'bone, fat and loss';
     movements.push({ ...moved(left, byUserId), fromPlace: 'carcase', toPlace: 'waste', reason });
   }
@@ -77,13 +78,34 @@ async function settleGrams(tx: Tx, byUserId: string, dayId: string): Promise<voi
   await markSoldThrough(tx, ids);
 }
 
+/** A carcase of which no pack was ever weighed enters with its cold weight, so that what becomes of it can be said. */
+async function enterLedger(tx: Tx, byUserId: string, carcases: readonly CarcaseFigures[]): Promise<void> {
+  const known = await listLedgerCarcases(
+    tx,
+    carcases.map(({ row }) => row.id),
+  );
+  const missing = carcases.filter(({ row }) => !known.has(row.id));
+  await recordMovements(
+    tx,
+    missing.map(({ row, cutout }) => ({
+      carcaseId: row.id,
+      fromPlace: null,
+      toPlace: 'carcase' as const,
+      grams: cutout.cold.grams,
+      reason: 'cold weight',
+      byUserId,
+    })),
+  );
+}
+
 function moved({ carcaseId, packId, grams }: { carcaseId: string; packId: string | null; grams: number }, by: string) {
   return { carcaseId, packId, grams, byUserId: by };
 }
 
-function mostWaste({ cutout }: CarcaseFigures): number {
+function mostWaste({ cutout }: CarcaseFigures, leftWhole: readonly string[]): number {
+  const isGone = (path: string) => leftWhole.some((whole) => path.startsWith(`${whole}/`));
   const waste = cutout.nodes
-    .filter((node) => node.level === 'line' && node.kind !== 'cut' && node.kind !== 'trim')
+    .filter((node) => node.level === 'line' && node.kind !== 'cut' && node.kind !== 'trim' && !isGone(node.path))
     .reduce((sum, node) => sum + node.grams, 0);
   const hangingLoss = cutout.cold.grams - cutout.hung.grams;
   return waste + hangingLoss + scale(cutout.cold.grams, UNWEIGHED_PERCENT, 100);
