@@ -53,8 +53,8 @@ export function buildDayInput(rows: DayRows): AllocationInput {
       .filter((cut) => cut.isSoldLoose)
       .map((cut) => toLoose(cut, rows.cuts, takenOf(rows.offers, `loose:${cut.id}`))),
     trade: [
-      ...rows.reserved.map((line) => toTradeLine(line, { cuts: rows.cuts, priority: 1 })),
-      ...rows.asked.map((line) => toTradeLine(line, { cuts: rows.cuts, priority: 3 })),
+      ...rows.reserved.map((line) => toTradeLine(line, { specification: rows.specification, priority: 1 })),
+      ...rows.asked.map((line) => toTradeLine(line, { specification: rows.specification, priority: 3 })),
     ],
     mince: mince
       ? {
@@ -153,9 +153,17 @@ function toLoose(cut: Cut, rows: readonly CutRow[], floor: number): LooseDemand 
   };
 }
 
-type TradeFacts = { cuts: readonly CutRow[]; priority: Priority };
+function nameUnit(unitKind: string, { quarters }: Specification): string {
+  const unit = parseUnitKind(unitKind);
+  if (unit.kind === 'side') return 'Side';
+  if (unit.kind === 'quarter') return quarters.find((quarter) => quarter.id === unit.quarter)?.name ?? unit.quarter;
+  const primals = quarters.flatMap((quarter) => quarter.primals);
+  return primals.find((primal) => primal.id === unit.primalId)?.name ?? unit.primalId;
+}
 
-function toTradeLine(line: ReservedLine, { cuts, priority }: TradeFacts): TradeLine {
+type TradeFacts = { specification: Specification; priority: Priority };
+
+function toTradeLine(line: ReservedLine, { specification, priority }: TradeFacts): TradeLine {
   const shared = {
     id: line.id,
     tenthPencePerKg: line.tenthPencePerKg,
@@ -163,12 +171,12 @@ function toTradeLine(line: ReservedLine, { cuts, priority }: TradeFacts): TradeL
     priority,
   };
   if (line.cutId !== null) {
-    const name = cuts.find((cut) => cut.id === line.cutId)?.name ?? line.cutId;
+    const name = specification.cuts.find((cut) => cut.id === line.cutId)?.name ?? line.cutId;
     return { ...shared, name: `${name}, ${line.businessName}`, kind: 'cut', cutId: line.cutId, grams: line.grams ?? 0 };
   }
   return {
     ...shared,
-    name: `${line.unitKind ?? 'unit'}, ${line.businessName}`,
+    name: `${nameUnit(line.unitKind ?? 'side', specification)}, ${line.businessName}`,
     kind: 'unit',
     unit: parseUnitKind(line.unitKind ?? 'side'),
     quantity: 1,

@@ -43,7 +43,7 @@ export function describeAllocation(row: AllocationRow, facts: AllocationFacts): 
     sides,
     ...describeGoods(row, facts.offers),
     trade: describeTrade(row, facts.reserved),
-    cuts: plan.cuts.map(({ stockGrams: _stock, ...cut }) => ({
+    cuts: plan.cuts.filter(hasWeight).map(({ stockGrams: _stock, ...cut }) => ({
       ...cut,
       name: cutName(cut.cutId),
       worthPencePerKg: explanation?.worths.find((worth) => worth.cutId === cut.cutId)?.pencePerKg ?? null,
@@ -64,6 +64,11 @@ export function describeAllocation(row: AllocationRow, facts: AllocationFacts): 
   };
 }
 
+/** A cut that no chosen way makes has nothing to show. */
+function hasWeight({ madeGrams, stockGrams }: AllocationRow['plan']['plan']['cuts'][number]): boolean {
+  return madeGrams + stockGrams > 0;
+}
+
 /** Boxes and loose packs: planned, safe to promise, sold and held, and what limits each box. */
 function describeGoods(row: AllocationRow, offers: readonly OfferRow[]): Pick<Allocation, 'boxes' | 'loose'> {
   const { plan, promise, explanation } = row.plan;
@@ -81,14 +86,16 @@ function describeGoods(row: AllocationRow, offers: readonly OfferRow[]): Pick<Al
       (line) => `${line.name}: ${formatWeight(line.shortGrams)} short for one more`,
     ),
   }));
-  const loose = plan.loose.map((item) => ({
-    cutId: item.cutId,
-    name: row.input.input.cuts.find((cut) => cut.id === item.cutId)?.name ?? item.cutId,
-    packs: item.packs,
-    promised: promise?.loose.find((each) => each.cutId === item.cutId)?.promised ?? null,
-    grams: item.grams,
-    ...taken(`loose:${item.cutId}`),
-  }));
+  const loose = plan.loose
+    .filter((item) => item.packs > 0)
+    .map((item) => ({
+      cutId: item.cutId,
+      name: row.input.input.cuts.find((cut) => cut.id === item.cutId)?.name ?? item.cutId,
+      packs: item.packs,
+      promised: promise?.loose.find((each) => each.cutId === item.cutId)?.promised ?? null,
+      grams: item.grams,
+      ...taken(`loose:${item.cutId}`),
+    }));
   return { boxes, loose };
 }
 
