@@ -1,11 +1,11 @@
-import type { BasketLine } from '#shared/contracts/orders.ts';
+import type { BasketLine, PricedLine } from '#shared/contracts/orders.ts';
 import type { CuttingDaySummary, DayOffer, ShopHome } from '#shared/contracts/shop.ts';
 import { useBasketPrice } from './orders.ts';
 import type { CutList } from './shop.ts';
 import type { Basket, BasketItem } from './use-basket.ts';
 
-/** A thing in the basket, and what its product has to offer: on the chosen day and on the others. */
-export type ChosenItem = BasketItem & { offer: DayOffer | undefined; elsewhere: DayOffer[] };
+/** A thing in the basket, as the counter offers its product on the chosen day and on the others. */
+export type ChosenItem = BasketItem & { line: PricedLine | undefined; elsewhere: DayOffer[] };
 
 type Counter = { home: ShopHome | undefined; cuts: CutList | undefined };
 
@@ -15,38 +15,65 @@ export function dayOfBasket(basket: Basket, days: readonly CuttingDaySummary[]):
   return open.find((day) => day.id === basket.dayId) ?? open[0];
 }
 
-/** Finds the offers of what is in the basket. What left the counter altogether has none. */
-export function chosenItems(basket: Basket, dayId: string | undefined, { home, cuts }: Counter): ChosenItem[] {
-  const openDays = new Set((home?.days ?? []).filter((day) => day.isInTime).map((day) => day.id));
+type Product = { offers: DayOffer[]; unitPricePence: number; unitGrams: number };
+
+function findProduct(item: BasketItem, { home, cuts }: Counter): Product | undefined {
+  if (item.kind === 'box') {
+    const box = home?.boxes.find((one) => one.slug === item.productId);
+    return box && { offers: box.offers, unitPricePence: box.pricePence, unitGrams: box.guaranteedGrams };
+  }
+  const cut = cuts?.cuts.find((one) => one.id === item.productId);
+  return cut && { offers: cut.offers, unitPricePence: cut.pricePence, unitGrams: cut.upperGrams };
+}
+
+/** Finds the offers of what is in the basket. What the day does not offer has no line. */
+export function chosenItems(basket: Basket, dayId: string | undefined, counter: Counter): ChosenItem[] {
+  const openDays = new Set((counter.home?.days ?? []).filter((day) => day.isInTime).map((day) => day.id));
   return basket.items.map((item) => {
-    const offers =
-      item.kind === 'box'
-        ? home?.boxes.find((box) => box.slug === item.productId)?.offers
-        : cuts?.cuts.find((cut) => cut.id === item.productId)?.offers;
+    const product = findProduct(item, counter);
+    const offer = product?.offers.find((one) => one.dayId === dayId);
     return {
       ...item,
-      offer: offers?.find((offer) => offer.dayId === dayId),
-      elsewhere: (offers ?? []).filter(
-        (offer) => offer.dayId !== dayId && offer.free >= item.quantity && openDays.has(offer.dayId),
+      line: product && offer && lineOf(item, { ...product, offer }),
+      elsewhere: (product?.offers ?? []).filter(
+        (one) => one.dayId !== dayId && one.free >= item.quantity && openDays.has(one.dayId),
       ),
     };
   });
 }
 
-/** Everything that the basket and the checkout show, from what the counter offers now. */
+function lineOf({ kind, name, quantity }: BasketItem, product: Product & { offer: DayOffer }): PricedLine {
+  const { offer, unitPricePence, unitGrams } = product;
+  const linePence = unitPricePence * quantity;
+  return { offerId: offer.offerId, kind, name, quantity, free: offer.free, unitPricePence, linePence, unitGrams };
+}
+
+/**
+ * Everything that the basket and the checkout show. The counter's figures stand at once; the farm's own answer for this
+ * basket, fresher and binding, takes their place line by line.
+ */
 export function useBasketOrder(basket: Basket, counter: Counter) {
   const day = dayOfBasket(basket, counter.home?.days ?? []);
-  const items = chosenItems(basket, day?.id, counter);
-  const lines: BasketLine[] = items.flatMap(({ offer, quantity }) =>
-    offer ? [{ offerId: offer.offerId, quantity }] : [],
+  const chosen = chosenItems(basket, day?.id, counter);
+  const lines: BasketLine[] = chosen.flatMap(({ line, quantity }) =>
+    line ? [{ offerId: line.offerId, quantity }] : [],
   );
   const price = useBasketPrice(day?.id, lines);
-  // Figures of a former basket may still be shown while the new ones are worked out: they are matched by offer.
-  const priced = items.map((item) => ({
-    ...item,
-    priced: price.data?.lines.find((line) => line.offerId === item.offer?.offerId),
-  }));
-  const isRight =
-    priced.length > 0 && priced.every(({ quantity, priced: line }) => line !== undefined && line.free >= quantity);
-  return { day, items: priced, lines, price, isRight };
+  const items = chosen.map((item) => ({ ...item, line: answeredLine(item.line, price.data?.lines) }));
+  return {
+    day,
+    items,
+    lines,
+    totalPence: items.reduce((sum, { line }) => sum + (line?.linePence ?? 0), 0),
+    isRight: items.every(({ line, quantity }) => line !== undefined && line.free >= quantity),
+    error: price.error,
+    refetch: price.refetch,
+  };
+}
+
+/** An answer for another quantity still tells what is left. */
+function answeredLine(line: PricedLine | undefined, answer: readonly PricedLine[] | undefined): PricedLine | undefined {
+  const told = answer?.find((one) => one.offerId === line?.offerId);
+  if (!line || !told) return line;
+  return told.quantity === line.quantity ? told : { ...line, free: told.free };
 }

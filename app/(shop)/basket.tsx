@@ -4,6 +4,7 @@ import { useEffect } from 'react';
 import { View } from 'react-native';
 import { BasketItemRow } from '#components/basket/basket-item.tsx';
 import { BasketSum } from '#components/basket/basket-sum.tsx';
+import { NoDayOpen } from '#components/basket/no-day-open.tsx';
 import { WaitingOrder } from '#components/basket/waiting-order.tsx';
 import { ListWaiting } from '#components/shop/list-waiting.tsx';
 import { ShopPage } from '#components/shop/shop-page.tsx';
@@ -60,22 +61,14 @@ export default function BasketScreen() {
 
 function Basket({ home, cuts }: { home: ShopHome; cuts: CutList }) {
   const basket = useBasket();
-  const { day, items, price, isRight } = useBasketOrder(basket, { home, cuts });
-  if (!day) {
-    return (
-      <EmptyState
-        level={1}
-        title="No day is open just now"
-        words="Your basket is kept. As soon as a cutting day can be ordered for again, you can go on here."
-      />
-    );
-  }
+  const { day, items, totalPence, isRight, error, refetch } = useBasketOrder(basket, { home, cuts });
+  if (!day) return <NoDayOpen />;
   return (
     <View style={css('w-section')}>
       <TitleBar title="Your basket" />
       {basket.orderToken ? <OpenOrder token={basket.orderToken} /> : null}
       <DayChoice label="For which cutting day?" days={openDays(home)} value={day.id} onChange={chooseDay} />
-      <StateView query={{ ...price, data: items }} what="the prices">
+      <StateView query={{ data: items, error, refetch }} what="the prices">
         {() => (
           <View role="list" style={css('w-rows-plain')}>
             {items.map((item) => (
@@ -83,8 +76,7 @@ function Basket({ home, cuts }: { home: ShopHome; cuts: CutList }) {
                 key={`${item.kind} ${item.productId}`}
                 name={item.name}
                 quantity={item.quantity}
-                line={item.priced}
-                isAbsent={!item.offer}
+                line={item.line}
                 elsewhere={item.elsewhere.map((offer) => ({ ...offer, id: offer.dayId }))[0]}
                 onQuantity={(quantity) => setQuantity(item, quantity)}
                 onDay={chooseDay}
@@ -93,12 +85,7 @@ function Basket({ home, cuts }: { home: ShopHome; cuts: CutList }) {
           </View>
         )}
       </StateView>
-      <BasketSum
-        day={day}
-        totalPence={price.data?.totalPence}
-        isRight={isRight}
-        isAsking={price.isFetching && !isRight}
-      />
+      <BasketSum day={day} totalPence={totalPence} isRight={isRight} />
       <TextLink href="/cuts" place="alone" icon="forward">
         Add loose cuts
       </TextLink>

@@ -1,6 +1,7 @@
 import { useLoaderData, useRouter } from 'expo-router';
 import type { GenerateMetadataFunction } from 'expo-server';
 import { View } from 'react-native';
+import { NoDayOpen } from '#components/basket/no-day-open.tsx';
 import { CheckoutForm, type CheckoutFields } from '#components/checkout/checkout-form.tsx';
 import { CheckoutTerms, TermsWords } from '#components/checkout/checkout-terms.tsx';
 import { ListWaiting } from '#components/shop/list-waiting.tsx';
@@ -60,14 +61,15 @@ export default function CheckoutScreen() {
 function Checkout({ home, cuts }: { home: ShopHome; cuts: CutList }) {
   const basket = useBasket();
   const router = useRouter();
-  const { day, lines, price, isRight } = useBasketOrder(basket, { home, cuts });
+  const { day, items, lines, totalPence, isRight } = useBasketOrder(basket, { home, cuts });
   const collections = useCollections(day?.id);
   const { data: me } = useMe();
   const place = usePlaceOrder();
   usePageReturn(place.reset);
+  if (!day) return <NoDayOpen />;
 
   const send = (fields: CheckoutFields, basketKey = basket.key) => {
-    if (!day || place.isPending || place.isSuccess) return;
+    if (place.isPending || place.isSuccess) return;
     place.mutate(
       { ...fields, basketKey, dayId: day.id, lines },
       {
@@ -85,7 +87,6 @@ function Checkout({ home, cuts }: { home: ShopHome; cuts: CutList }) {
       },
     );
   };
-  const total = price.data?.totalPence;
   return (
     <View style={css('w-stack-l')}>
       <View style={css('w-section')}>
@@ -93,12 +94,10 @@ function Checkout({ home, cuts }: { home: ShopHome; cuts: CutList }) {
           Basket
         </TextLink>
         <TitleBar title="Checkout" />
-        {!isRight && price.data && !price.isFetching ? <NotRight /> : null}
-        {day && price.data ? (
-          <CheckoutTerms day={day} lines={price.data.lines} totalPence={price.data.totalPence} />
-        ) : (
-          <Skeleton shape="rows" count={2} />
-        )}
+        {isRight ? null : <NotRight />}
+        {day ? (
+          <CheckoutTerms day={day} lines={items.flatMap(({ line }) => (line ? [line] : []))} totalPence={totalPence} />
+        ) : null}
       </View>
       <StateView query={collections} what="the places and times" waiting={<Skeleton shape="rows" count={4} />}>
         {({ points }) => (
@@ -106,8 +105,8 @@ function Checkout({ home, cuts }: { home: ShopHome; cuts: CutList }) {
             points={points}
             resolver={checkoutResolver}
             known={me?.user ? { name: me.user.name, email: me.user.email } : {}}
-            terms={day ? <TermsWords day={day} /> : null}
-            buttonLabel={total === undefined ? 'Go to payment' : `Go to payment · ${formatMoney(total)}`}
+            terms={<TermsWords day={day} />}
+            buttonLabel={`Go to payment · ${formatMoney(totalPence)}`}
             isSending={place.isPending || place.isSuccess}
             refusal={refusalOf(place.error)}
             onSubmit={(fields) => send(fields)}

@@ -10,6 +10,7 @@ import { KeepingAdvice } from '#components/shop/keeping-advice.tsx';
 import { ListWaiting } from '#components/shop/list-waiting.tsx';
 import { LoadedView } from '#components/shop/loaded-view.tsx';
 import { nextDayOf } from '#components/shop/next-day.ts';
+import { sellerWords } from '#components/shop/seller-words.ts';
 import { ShopPage } from '#components/shop/shop-page.tsx';
 import { css } from '#components/theme/css.ts';
 import { DayChoice } from '#components/ui/day-choice.tsx';
@@ -102,7 +103,7 @@ function Cuts({ list, farm }: { list: CutList; farm: Farm | null }) {
         )}
       </View>
       <KeepingAdvice />
-      <DistanceFacts seller={farm ? [farm.businessName, ...farm.addressLines].join(', ') : undefined} />
+      <DistanceFacts seller={farm ? sellerWords(farm) : undefined} />
       <BasketBar count={countOf(basket)} />
     </View>
   );

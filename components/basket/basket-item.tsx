@@ -11,10 +11,8 @@ import { Text } from '#components/ui/text.tsx';
 type BasketItemRowProps = {
   name: string;
   quantity: number;
-  /** As the farm counts it now; missing while it is asked, or when the product is not cut on the day. */
+  /** As the farm counts it now; the day may not offer it at all. */
   line: PricedLine | undefined;
-  /** The day does not offer it at all. */
-  isAbsent: boolean;
   /** Another day that has enough of it. */
   elsewhere: { id: string; day: string; free: number } | undefined;
   onQuantity: (quantity: number) => void;
@@ -22,8 +20,8 @@ type BasketItemRowProps = {
 };
 
 /** One thing in the basket; says when less of it is left than wanted, and what can be had instead. */
-export function BasketItemRow({ name, quantity, line, isAbsent, elsewhere, onQuantity, onDay }: BasketItemRowProps) {
-  const isShort = isAbsent || (line !== undefined && line.free < quantity);
+export function BasketItemRow({ name, quantity, line, elsewhere, onQuantity, onDay }: BasketItemRowProps) {
+  const isShort = line === undefined || line.free < quantity;
   const most = Math.max(line?.free ?? quantity, 1);
   return (
     <View role="listitem" style={css('w-item')}>

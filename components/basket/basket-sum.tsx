@@ -7,19 +7,19 @@ import { Money } from '#components/ui/money.tsx';
 import { Notice } from '#components/ui/notice.tsx';
 import { Text } from '#components/ui/text.tsx';
 
-type BasketSumProps = { day: CuttingDaySummary; totalPence: number | undefined; isRight: boolean; isAsking: boolean };
+type BasketSumProps = { day: CuttingDaySummary; totalPence: number; isRight: boolean };
 
 /** What it comes to, until when it can be changed, and the way to the checkout. */
-export function BasketSum({ day, totalPence, isRight, isAsking }: BasketSumProps) {
+export function BasketSum({ day, totalPence, isRight }: BasketSumProps) {
   return (
     <View style={css('w-section')}>
       <View style={css('w-total')}>
         <Text weight="bold" size="lead">
           Total
         </Text>
-        {totalPence === undefined ? null : <Money pence={totalPence} look="price-large" />}
+        <Money pence={totalPence} look="price-large" />
       </View>
-      {isRight || isAsking ? (
+      {isRight ? (
         <ButtonLink wide href="/checkout" label="Checkout" icon="forward" />
       ) : (
         <Notice

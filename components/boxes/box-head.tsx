@@ -24,7 +24,7 @@ export function BoxHead({ box }: { box: Box }) {
           {box.name}
         </Heading>
         <Text size="lead" tone="quiet" measure>
-          {`${box.summary}. ${size}.`}
+          {`${box.summary.replace(/\.$/, '')}. ${size}.`}
         </Text>
       </View>
       <Rail
@@ -32,7 +32,7 @@ export function BoxHead({ box }: { box: Box }) {
         primals={box.rail.rail.primals}
         narrowPrimals={box.rail.rail.narrowPrimals}
         legend={false}
-        caption={`${formatCount(box.rail.boxes, `${box.name} box`, `${box.name} boxes`)}, one side: the red is what they take.`}
+        caption={`${formatCount(box.rail.boxes, 'such box', 'such boxes')}, one side: the red is what they take.`}
         captionShown
       />
     </View>

@@ -7,6 +7,7 @@ import { ShopFoot } from '#components/ui/shop-foot.tsx';
 import { Text } from '#components/ui/text.tsx';
 import { TextLink } from '#components/ui/text-link.tsx';
 import { FARM_MARK, footPlaces } from './places.ts';
+import { sellerWords } from './seller-words.ts';
 
 type ShopPageProps = {
   farm: ShopHome['farm'] | null;
@@ -24,11 +25,11 @@ export function ShopPage({ farm, narrow = false, children }: ShopPageProps) {
         {children}
       </View>
       <ShopFoot path={path} links={footPlaces}>
-        <Text weight="bold">{farm?.businessName ?? FARM_MARK}</Text>
+        <Text weight="bold">{farm?.name ?? FARM_MARK}</Text>
         {farm ? (
           <>
             <Text size="small" tone="quiet">
-              {farm.addressLines.join(', ')}
+              {sellerWords(farm)}
             </Text>
             <TextLink href={`tel:${farm.phone.replace(/\s/g, '')}`} tone="ink" place="alone" outside>
               {farm.phone}

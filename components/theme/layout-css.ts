@@ -3,6 +3,7 @@ const page = `
 :root .w-page-narrow{max-width:680px}
 :root .w-page-full{max-width:none}
 :root .w-main{padding-block:16px 56px;display:flex;flex-direction:column;flex:1 0 auto;min-width:0;outline:none}
+:root .w-shell>.w-main{min-height:calc(100dvh - 80px);box-sizing:border-box}
 :root .w-stack{display:flex;flex-direction:column;gap:16px;min-width:0}
 :root .w-stack-s{display:flex;flex-direction:column;gap:6px;min-width:0}
 :root .w-stack-l{display:flex;flex-direction:column;gap:32px;min-width:0}

@@ -10,6 +10,7 @@ import { BoxWaiting } from '#components/boxes/box-waiting.tsx';
 import { DistanceFacts } from '#components/shop/distance-facts.tsx';
 import { KeepingAdvice } from '#components/shop/keeping-advice.tsx';
 import { LoadedView } from '#components/shop/loaded-view.tsx';
+import { sellerWords } from '#components/shop/seller-words.ts';
 import { ShopPage } from '#components/shop/shop-page.tsx';
 import { css } from '#components/theme/css.ts';
 import { ButtonLink } from '#components/ui/button-link.tsx';
@@ -40,7 +41,7 @@ function titleOf(box: Box): string {
 }
 
 function describe(box: Box): string {
-  return `${box.summary}. At least ${formatWeight(box.guaranteedGrams)}, about ${box.servings} servings, from our own cattle. Collect at your time.`;
+  return `${box.summary.replace(/\.$/, '')}. At least ${formatWeight(box.guaranteedGrams)}, about ${box.servings} servings, from our own cattle. Collect at your time.`;
 }
 
 export default function BoxScreen() {
@@ -97,7 +98,7 @@ function BoxPage({ box, farm }: { box: Box; farm: Farm | null }) {
         </View>
       </View>
       <KeepingAdvice />
-      <DistanceFacts seller={farm ? [farm.businessName, ...farm.addressLines].join(', ') : undefined} />
+      <DistanceFacts seller={farm ? sellerWords(farm) : undefined} />
       <BoxJsonLd box={box} farmName={farm?.name ?? box.name} />
     </View>
   );
