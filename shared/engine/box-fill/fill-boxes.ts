@@ -1,61 +1,90 @@
-import { checkBox, isAllowed } from './check-box.ts';
-import type { BoxFill, BoxFillInput, BoxToFill, FilledBox, PlacedPack, WeighedPack } from './box-fill-types.ts';
+import type { BoxFill, BoxFillInput, FilledBox } from './box-fill-types.ts';
+import { checkBox } from './check-box.ts';
+import { lowerBound } from './fill-bound.ts';
+import { fillExactly } from './fill-exactly.ts';
+import { improveFill, mend } from './fill-improve.ts';
+import { evenOut, handToCustomers } from './fill-spread.ts';
+import { startFill } from './fill-start.ts';
+import { lack, openFill, placedPacks, takeOut, type FillState, type OpenBox } from './fill-state.ts';
+
+function empty(state: FillState, box: OpenBox): void {
+  for (const line of box.lines) for (const pack of [...line.packs]) takeOut(state, box, { line, pack });
+}
 
 /**
- * Packs to boxes in turn: each line takes the lightest packs that reach its least, then the box is topped up to its
- * guarantee with the pack that overshoots least. Boxes that cannot be filled keep no packs.
+ * Where several boxes lack something, the one that lacks most gives its packs up for the others; at the end it takes
+ * what is left, so that it can be seen what it misses.
  */
-export function fillBoxes(input: BoxFillInput): BoxFill {
-  const used = new Set(input.kept.flatMap((box) => box.packs.map((pack) => pack.id)));
-  const free = input.packs
-    .filter((pack) => !used.has(pack.id))
-    .sort((a, b) => a.grams - b.grams || (a.id < b.id ? -1 : 1));
-  const left = new Set(free);
-  const boxes = input.boxes.map((box): FilledBox => {
-    const kept = input.kept.find((each) => each.boxId === box.id);
-    const packs = kept ? [...kept.packs] : fillOne(box, [...left]);
-    const check = checkBox(box.recipe, packs);
-    if (!check.isFilled && !kept) return { ...check, boxId: box.id, packs: [] };
-    for (const pack of free) if (packs.some((placed) => placed.id === pack.id)) left.delete(pack);
-    return { ...check, boxId: box.id, packs };
-  });
-  const filled = boxes.filter((box) => box.isFilled);
+function giveUp(state: FillState): void {
+  const given: OpenBox[] = [];
+  for (;;) {
+    const open = state.boxes.filter((box) => !box.isKept && !given.includes(box));
+    const wanting = open
+      .filter((box) => lack(box) > 0)
+      .sort((a, b) => lack(b) - lack(a) || (a.box.id < b.box.id ? -1 : 1));
+    const [worst] = wanting;
+    if (!worst) break;
+    empty(state, worst);
+    given.push(worst);
+    for (const box of wanting.slice(1).reverse())
+      mend(
+        state,
+        box,
+        open.filter((each) => each !== worst),
+      );
+  }
+  for (const box of given) {
+    mend(
+      state,
+      box,
+      state.boxes.filter((each) => !each.isKept && !given.includes(each)),
+    );
+  }
+}
+
+function readBox(box: OpenBox): FilledBox {
+  const packs = placedPacks(box);
+  return { ...checkBox(box.box.recipe, packs), boxId: box.box.id, packs };
+}
+
+/** The outcome as it stands on the bench. */
+export function readFill(state: FillState, input: BoxFillInput): BoxFill {
+  const boxes = state.boxes.map(readBox);
+  const filled = boxes.filter(({ isFilled }) => isFilled);
+  const filledIds = new Set(filled.map(({ boxId }) => boxId));
+  const packs = [...input.packs, ...input.kept.flatMap((kept) => kept.packs)];
+  const unique = [...new Map(packs.map((pack) => [pack.id, pack])).values()];
   return {
     boxes,
-    unusedPackIds: [...left].map((pack) => pack.id),
-    giveAwayGrams: filled.reduce((sum, box) => sum + box.giveAwayGrams, 0),
-    packedGrams: filled.reduce((sum, box) => sum + box.grams, 0),
-    lowerBoundGrams: 0,
-    unfilledBoxIds: boxes.filter((box) => !box.isFilled).map((box) => box.boxId),
+    unusedPackIds: state.shelf
+      .all()
+      .map(({ id }) => id)
+      .sort(),
+    giveAwayGrams: filled.reduce((sum, { giveAwayGrams }) => sum + giveAwayGrams, 0),
+    packedGrams: filled.reduce((sum, { grams }) => sum + grams, 0),
+    lowerBoundGrams: lowerBound(
+      input.boxes.filter(({ id }) => filledIds.has(id)),
+      unique,
+    ),
+    unfilledBoxIds: boxes.filter(({ isFilled }) => !isFilled).map(({ boxId }) => boxId),
   };
 }
 
-function fillOne(box: BoxToFill, free: WeighedPack[]): PlacedPack[] {
-  const placed: PlacedPack[] = [];
-  const take = (pack: WeighedPack, lineId: string) => {
-    free.splice(free.indexOf(pack), 1);
-    placed.push({ ...pack, lineId });
-  };
-  const inLine = (lineId: string) => placed.filter((pack) => pack.lineId === lineId);
-  const gramsIn = (lineId: string) => inLine(lineId).reduce((sum, pack) => sum + pack.grams, 0);
-  for (const line of box.recipe.lines) {
-    while (inLine(line.id).length < line.minPacks || gramsIn(line.id) < line.minGrams) {
-      const pack = free.find((each) => isAllowed(line, each) && gramsIn(line.id) + each.grams <= line.maxGrams);
-      if (!pack || inLine(line.id).length >= (line.maxPacks ?? Infinity)) break;
-      take(pack, line.id);
-    }
+/**
+ * Puts weighed packs to boxes: each pack at most once, every box checked against its recipe, as many boxes filled as can
+ * be found, then the least grams above the guarantees, then evenly; among like boxes the heavier goes to the customer who
+ * has been given least. Kept boxes stay as they are. The order in which boxes and packs come never matters.
+ */
+export function fillBoxes(input: BoxFillInput): BoxFill {
+  const state = openFill(input);
+  startFill(state);
+  improveFill(state);
+  if (state.boxes.some((box) => !box.isKept && lack(box) > 0)) {
+    giveUp(state);
+    improveFill(state);
   }
-  for (;;) {
-    const missing = box.recipe.guaranteedGrams - placed.reduce((sum, pack) => sum + pack.grams, 0);
-    if (missing <= 0) return placed;
-    const room = box.recipe.lines.filter((line) => inLine(line.id).length < (line.maxPacks ?? Infinity));
-    const options = room.flatMap((line) =>
-      free
-        .filter((pack) => isAllowed(line, pack) && gramsIn(line.id) + pack.grams <= line.maxGrams)
-        .map((pack) => ({ pack, lineId: line.id, over: Math.abs(pack.grams - missing) })),
-    );
-    const best = options.sort((a, b) => a.over - b.over)[0];
-    if (!best) return placed;
-    take(best.pack, best.lineId);
-  }
+  fillExactly(state);
+  evenOut(state);
+  handToCustomers(state);
+  return readFill(state, input);
 }
