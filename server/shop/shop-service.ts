@@ -102,10 +102,14 @@ export async function readShopHome(deps: Deps): Promise<ShopHome> {
     boxes: boxes.map((box) => boxCard(sale, box)),
     butchers: butchers.map((butcher) => ({
       businessName: butcher.businessName,
-      // Address lines end with the post town and the postcode.
-      town: butcher.addressLines.at(-2) ?? butcher.addressLines.at(-1) ?? '',
+      town: townOf(butcher.addressLines),
     })),
   };
+}
+
+/** Address lines end with the post town and the postcode; a shorter address names no town of its own. */
+function townOf(addressLines: readonly string[]): string {
+  return addressLines.length >= 3 ? (addressLines.at(-2) ?? '') : '';
 }
 
 export async function readBox(deps: Deps, slug: string): Promise<Box> {

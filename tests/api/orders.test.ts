@@ -9,7 +9,6 @@ import { startWorld, type World } from '#tests/support/harness.ts';
 import { makeSlot } from '#tests/support/make-farm.ts';
 import {
   basketFor,
-  CARDS,
   countersOf,
   getOrderRow,
   makeStall,
@@ -20,6 +19,7 @@ import {
   takenOf,
   type Stall,
 } from '#tests/support/make-order.ts';
+import { cards } from '#tests/support/pay.ts';
 
 const TEXT: unknown = expect.any(String);
 
@@ -62,7 +62,10 @@ test('placing an order holds its stock and its slot, and paying makes it sold', 
   expect(await countersOf(world, stall.boxOffer.id)).toEqual({ ...boxes, held: (boxes.held ?? 0) + 1 });
   expect(await takenOf(world, stall.slot.id)).toBe(taken + 1);
 
-  expect(await payOn(placed.paymentUrl)).toBe(303);
+  expect(await payOn(placed.paymentUrl)).toEqual({
+    outcome: 'paid',
+    returnedTo: `${world.origin}/orders/${placed.token}?from=paid`,
+  });
   await world.payments.flush();
   const order = await getOrderRow(world, placed.token);
   expect(order).toMatchObject({ state: 'confirmed', paymentState: 'paid', isHeld: false });
@@ -76,7 +79,7 @@ test('placing an order holds its stock and its slot, and paying makes it sold', 
 
 test('a declined card leaves the order waiting and its page open', async () => {
   const placed = await place(world, basketFor(stall));
-  await payFor(world, placed, CARDS.declined);
+  await payFor(world, placed, cards.declined);
   expect(await getOrderRow(world, placed.token)).toMatchObject({ state: 'awaiting payment', isHeld: true });
   const seen = await world.request().get(`/api/orders/${placed.token}`);
   expect(seen.body).toMatchObject({ paymentUrl: placed.paymentUrl });
@@ -153,7 +156,7 @@ test('a basket changed on the way back ends its first page and holds the new lin
   const second = await place(world, { ...basket, lines: [{ offerId: stall.boxOffer.id, quantity: 3 }] });
   expect(second.token).toBe(first.token);
   expect(second.paymentUrl).not.toBe(first.paymentUrl);
-  expect(await payOn(first.paymentUrl)).toBe(303);
+  expect(await payOn(first.paymentUrl)).toMatchObject({ outcome: 'refused', status: 410 });
   await world.payments.flush();
   expect(await getOrderRow(world, first.token)).toMatchObject({ state: 'awaiting payment', isHeld: true });
   expect(await countersOf(world, stall.boxOffer.id)).toEqual({ ...before, held: (before.held ?? 0) + 3 });

@@ -7,7 +7,6 @@ import { sweepHolds } from '#server/payments/payment-service.ts';
 import { startWorld, type World } from '#tests/support/harness.ts';
 import {
   basketFor,
-  CARDS,
   countersOf,
   getOrderRow,
   makeConfirmedOrder,
@@ -20,6 +19,7 @@ import {
   type Placed,
   type Stall,
 } from '#tests/support/make-order.ts';
+import { cards } from '#tests/support/pay.ts';
 
 let world: World;
 let stall: Stall;
@@ -199,7 +199,7 @@ test('a hold whose page was never kept, after a crash, is ended by the sweep', a
   world.clock.advance({ minutes: -10 });
   expect(await getOrderRow(world, placed.token)).toMatchObject({ isHeld: false, sessionId: lost });
   expect(await countersOf(world, stall.boxOffer.id)).toEqual(before);
-  expect(await payOn(placed.paymentUrl)).toBe(303);
+  expect(await payOn(placed.paymentUrl)).toMatchObject({ outcome: 'refused' });
   await world.payments.flush();
   expect(await paymentsOf(world, (await getOrderRow(world, placed.token)).id)).toEqual([]);
 });
@@ -254,7 +254,7 @@ test('a payment that arrives when the box has gone to others is refunded in full
 
 test('a refund that the bank sends back later stands as failed', async () => {
   const placed = await place(world, basketFor(stall));
-  await payFor(world, placed, CARDS.failingRefund);
+  await payFor(world, placed, cards.refundFails);
   await world.request().post(`/api/orders/${placed.token}/cancel`);
   await world.runJobs();
   const order = await getOrderRow(world, placed.token);

@@ -1,11 +1,11 @@
 import { randomUUID } from 'node:crypto';
 import { eq } from 'drizzle-orm';
-import supertest from 'supertest';
 import { offer } from '#db/schema/allocations.ts';
 import { collectionSlot, customerOrder, orderLine, payment } from '#db/schema/orders.ts';
 import { pack, packAssignment, stockMovement } from '#db/schema/packs.ts';
 import { addDays } from '#shared/domain/day.ts';
 import type { World } from './harness.ts';
+import { cards, payByCard, type PaymentResult } from './pay.ts';
 import {
   makeCarcase,
   makeBoxKind,
@@ -18,6 +18,8 @@ import {
 } from './make-farm.ts';
 
 export type Stall = Awaited<ReturnType<typeof makeStall>>;
+/** What an order needs of a day. */
+export type Counter = { day: { id: string }; boxOffer: { id: string }; slot: { id: string } };
 
 /** A day with a box and a loose cut on sale, and one collection time. */
 export async function makeStall(world: World, more: { boxes?: number; packs?: number; slots?: number } = {}) {
@@ -38,7 +40,7 @@ export async function makeStall(world: World, more: { boxes?: number; packs?: nu
 }
 
 /** What the browser sends to go to payment: one box, unless told otherwise. */
-export function basketFor(stall: Stall, more: Record<string, unknown> = {}) {
+export function basketFor(stall: Counter, more: Record<string, unknown> = {}) {
   return {
     basketKey: randomUUID(),
     dayId: stall.day.id,
@@ -60,20 +62,13 @@ export async function place(world: World, basket: ReturnType<typeof basketFor>, 
   return answer.body as Placed;
 }
 
-export const CARDS = { good: '4242424242424242', declined: '4000000000000002', failingRefund: '4000000000007726' };
-
-/** Fills in the payment company's own page, as a person does. The status of its answer: 303 leads back to the shop. */
-export async function payOn(url: string | null, card = CARDS.good): Promise<number> {
-  const { origin, pathname } = new URL(url ?? '');
-  const answer = await supertest(origin)
-    .post(pathname)
-    .type('form')
-    .send({ email: 'ada@example.com', name: 'Ada Fell', card, expiry: '08 / 40', cvc: '123', formId: randomUUID() });
-  return answer.status;
+/** Fills in the payment company's own page, as a person does. */
+export function payOn(url: string | null, card = cards.good): Promise<PaymentResult> {
+  return payByCard(url ?? '', card, { name: 'Ada Fell', email: 'ada@example.com' });
 }
 
 /** Pays, and hands over every message of the payment company that waits. */
-export async function payFor(world: World, placed: Placed, card = CARDS.good): Promise<void> {
+export async function payFor(world: World, placed: Placed, card = cards.good): Promise<void> {
   await payOn(placed.paymentUrl, card);
   await world.payments.flush();
 }
@@ -81,7 +76,7 @@ export async function payFor(world: World, placed: Placed, card = CARDS.good): P
 /** An order that is paid and confirmed. */
 export async function makeConfirmedOrder(
   world: World,
-  stall: Stall,
+  stall: Counter,
   more: Record<string, unknown> = {},
   cookie?: string,
 ) {
@@ -112,34 +107,37 @@ export function paymentsOf({ db }: World, orderId: string) {
 
 let packs = 0;
 
-/** A weighed pack of the stall's cut; in an order when a line is named. */
-export async function makePack(
+/** A weighed pack, nowhere in the ledger yet. */
+export async function makePackOf(
   { db, clock }: World,
-  stall: Stall,
-  more: { orderLineId?: string; grams?: number } = {},
+  of: { dayId: string; carcaseId: string; cutId: string; grams?: number },
 ) {
   packs += 1;
-  const beast = await makeCarcase(db, stall.day.id, { killDay: addDays(stall.day.day, -21) });
   const [row] = await db
     .insert(pack)
     .values({
       code: `test-pack-code-${packs}`,
-      cuttingDayId: stall.day.id,
-      carcaseId: beast.id,
-      cutId: stall.cut.id,
-      grams: more.grams ?? 612,
+      cuttingDayId: of.dayId,
+      carcaseId: of.carcaseId,
+      cutId: of.cutId,
+      grams: of.grams ?? 612,
       packedOn: clock.today(),
       useBy: addDays(clock.today(), 10),
     })
     .returning();
   if (!row) throw new Error('The pack was not kept.');
-  if (more.orderLineId) {
-    await db.insert(packAssignment).values({ packId: row.id, orderLineId: more.orderLineId });
-    await db.insert(stockMovement).values({
-      ...{ carcaseId: beast.id, packId: row.id, fromPlace: 'chiller', toPlace: 'order' },
-      ...{ grams: row.grams, reason: 'filled' },
-    });
-  }
+  return row;
+}
+
+/** A pack of the stall's cut that lies in an order. */
+async function makePackIn(world: World, stall: Stall, orderLineId: string) {
+  const beast = await makeCarcase(world.db, stall.day.id, { killDay: addDays(stall.day.day, -21) });
+  const row = await makePackOf(world, { dayId: stall.day.id, carcaseId: beast.id, cutId: stall.cut.id });
+  await world.db.insert(packAssignment).values({ packId: row.id, orderLineId });
+  await world.db.insert(stockMovement).values({
+    ...{ carcaseId: beast.id, packId: row.id, fromPlace: 'chiller', toPlace: 'order' },
+    ...{ grams: row.grams, reason: 'filled' },
+  });
   return row;
 }
 
@@ -148,7 +146,7 @@ export async function makePackedOrder(world: World, stall: Stall, more: Record<s
   const order = await makeConfirmedOrder(world, stall, more);
   const [line] = await world.db.select().from(orderLine).where(eq(orderLine.orderId, order.id));
   if (!line) throw new Error('The order has no line.');
-  const inside = await makePack(world, stall, { orderLineId: line.id });
+  const inside = await makePackIn(world, stall, line.id);
   await world.db.update(customerOrder).set({ state: 'packed' }).where(eq(customerOrder.id, order.id));
   return { order: await getOrderRow(world, order.token), pack: inside };
 }
