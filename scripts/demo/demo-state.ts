@@ -7,6 +7,7 @@ import { customerOrder } from '#db/schema/orders.ts';
 import { pack } from '#db/schema/packs.ts';
 import { reservation } from '#db/schema/trade.ts';
 import type { Db } from '#db/client.ts';
+import type { Jobs } from '#server/queue.ts';
 import type { Day } from '#shared/domain/day.ts';
 
 const KEY = 'demo farm';
@@ -55,8 +56,12 @@ export async function emptyDatabase(db: Db): Promise<void> {
   await db.execute(sql`delete from graphile_worker._private_jobs`);
 }
 
-/** What the seed's own services would have done afterwards, such as planning again, is not done; mails still leave. */
-export async function forgetJobs(db: Db): Promise<void> {
+/** Jobs that the seed's own services left behind and nobody waits for, such as planning again what was planned since. */
+export async function forgetJobs(db: Db, names: readonly (keyof Jobs)[]): Promise<void> {
+  const list = sql.join(
+    names.map((name) => sql`${name}`),
+    sql`, `,
+  );
   await db.execute(sql`delete from graphile_worker._private_jobs where task_id in
-    (select id from graphile_worker._private_tasks where identifier <> 'send-mail')`);
+    (select id from graphile_worker._private_tasks where identifier in (${list}))`);
 }

@@ -11,6 +11,7 @@ import { demoDays } from './demo-days.ts';
 import { onDay } from './demo-deps.ts';
 import { forgetJobs, markDemo } from './demo-state.ts';
 import { seedDays, type SeededDays } from './seed-days.ts';
+import { seedPastDay } from './seed-past-day.ts';
 import { seedOrders, sendConfirmation } from './seed-orders.ts';
 import { openSale } from './seed-sale.ts';
 import { seedTrade } from './seed-trade.ts';
@@ -35,7 +36,7 @@ export async function seedDemoFarm(deps: Deps): Promise<void> {
   const seeded = await seedDays(deps, { ...ground, days, ownerId });
   await seedTrade(deps, ground.people, seeded);
   await sellDays(deps, chance, { seeded, people: ground.people });
-  await forgetJobs(deps.db);
+  await forgetJobs(deps.db, ['replan-day']);
   await markDemo(deps.db, days.next.day, today);
 }
 
@@ -50,6 +51,8 @@ async function sellDays(deps: Deps, chance: Chance, { seeded, people }: Sellers)
   await openSale(onDay(deps, addDays(past.day, -12)), past, ownerId);
   const before = onDay(deps, addDays(past.cutOffDay, -1));
   await seedOrders(before, chance, { day: past, people: [...early, ...customers.slice(12, 36)], from: 9 });
+  await seedPastDay(deps, chance, { day: past, people });
+  await forgetJobs(deps.db, ['replan-day', 'explain-allocation', 'send-mail']);
   await openSale(onDay(deps, addDays(today, -9)), next, ownerId);
   const orders = await seedOrders(onDay(deps, addDays(today, -1)), chance, {
     day: next,

@@ -1,0 +1,66 @@
+import { eq, inArray } from 'drizzle-orm';
+import type { Chance } from '#db/seed/chance.ts';
+import type { DemoPeople } from '#db/seed/demo-people.ts';
+import { mailMessage } from '#db/schema/mail.ts';
+import { customerOrder } from '#db/schema/orders.ts';
+import { findPublishedAllocation } from '#server/allocation/allocation-queries.ts';
+import { closeCuttingDay } from '#server/carcases/close-day-service.ts';
+import { confirmCollectionMails } from '#server/collections/collection-mails.ts';
+import { markOrder } from '#server/collections/run-sheet.ts';
+import type { Deps } from '#server/deps.ts';
+import { fillOrders } from '#server/packs/fill-service.ts';
+import { addPacks } from '#server/packs/pack-service.ts';
+import { readPackingDay } from '#server/packs/packing-day.ts';
+import { addDays, londonInstant } from '#shared/domain/day.ts';
+import { weighPacks } from './weigh-packs.ts';
+import { onDay } from './demo-deps.ts';
+import type { SeededDay } from './seed-days.ts';
+
+type Past = { day: SeededDay; people: DemoPeople };
+
+/** The day that is over: cut, packed, filled, collected and closed. */
+export async function seedPastDay(deps: Deps, chance: Chance, { day, people }: Past): Promise<void> {
+  const { ownerId, packerId } = people;
+  const onTheDay = onDay(deps, day.day, '15:00');
+  await packEverything(onTheDay, chance, { dayId: day.id, packerId });
+  await fillOrders(onTheDay, packerId, day.id);
+  await handOver(onDay(deps, addDays(day.day, 1), '09:00'), { day, ownerId, packerId });
+  const after = onDay(deps, addDays(day.day, 4));
+  await closeCuttingDay(after, ownerId, { dayId: day.id, version: 1 });
+}
+
+async function packEverything(
+  deps: Deps,
+  chance: Chance,
+  { dayId, packerId }: { dayId: string; packerId: string },
+): Promise<void> {
+  const { cuttingList } = await readPackingDay(deps.db, dayId);
+  const published = await findPublishedAllocation(deps.db, dayId);
+  const mince = published?.input.input.mince?.productCutId ?? '';
+  const plan = published?.plan.plan.cuts ?? [];
+  for (const batch of weighPacks(chance, { cuttingList, plan, mince })) {
+    await addPacks(deps, packerId, { dayId, ...batch });
+  }
+}
+
+/** Everybody is told and comes for their box, but for one who forgot. What could not be filled was settled before. */
+async function handOver(
+  deps: Deps,
+  { day, ownerId, packerId }: { day: SeededDay; ownerId: string; packerId: string },
+): Promise<void> {
+  const orders = await deps.db.select().from(customerOrder).where(eq(customerOrder.cuttingDayId, day.id));
+  const open = orders.filter((order) => order.state !== 'packed').map((order) => order.orderNo);
+  if (open.length > 0) throw new Error(`Orders ${open.join(', ')} of the past day could not be filled.`);
+  const orderIds = orders.map((order) => order.id);
+  await confirmCollectionMails(deps, { dayId: day.id, orderIds, byUserId: ownerId });
+  // They went out three weeks ago.
+  const sentAt = londonInstant(addDays(day.day, 1), '09:01');
+  await deps.db
+    .update(mailMessage)
+    .set({ state: 'sent', attempts: 1, sentAt, createdAt: sentAt })
+    .where(inArray(mailMessage.orderId, orderIds));
+  for (const [index, order] of orders.entries()) {
+    const state = index === orders.length - 1 ? 'missed' : 'collected';
+    await markOrder(deps, { orderId: order.id, version: order.version + 1, state, byUserId: packerId });
+  }
+}
