@@ -31,7 +31,7 @@ function makeSides(count: number, next: () => number): SideSupply[] {
     const carcase: CarcaseFacts = {
       id: `carcase-${String(index + 1).padStart(3, '0')}`,
       type: next() < 0.6 ? 'steer' : 'heifer',
-      bornDay: (next() < 0.1 ? '2023-01-10' : '2024-06-10'),
+      bornDay: next() < 0.1 ? '2023-01-10' : '2024-06-10',
       killDay: '2026-03-02',
       liveGrams: null,
       hotGrams: null,
@@ -201,8 +201,11 @@ function makeTrade(carcases: number, next: () => number): TradeLine[] {
   return [...units, ...cuts];
 }
 
-/** A made cutting day: sides of the traditional specification, 8 boxes, 12 loose cuts, 25 trade lines. */
-export function makeAllocationInstance({ carcases, seed }: { carcases: number; seed: number }): AllocationInput {
+type InstanceSize = { carcases: number; seed: number; boxes?: number; loose?: number; trade?: number };
+
+/** A made cutting day: sides of the traditional specification, 8 boxes, 12 loose cuts and 25 trade lines, or fewer. */
+export function makeAllocationInstance(size: InstanceSize): AllocationInput {
+  const { carcases, seed } = size;
   const next = seededNumbers(seed);
   const sides = makeSides(carcases, next);
   const cuts = traditionalSide.cuts;
@@ -213,9 +216,9 @@ export function makeAllocationInstance({ carcases, seed }: { carcases: number; s
       { cutId: 'mince', state: 'fresh', grams: 2_000 },
       { cutId: 'diced-beef', state: 'frozen', grams: 1_500 },
     ],
-    boxes: KINDS.map((kind) => makeBox(kind, carcases, next)),
-    loose: makeLoose(carcases, next),
-    trade: makeTrade(carcases, next),
+    boxes: KINDS.map((kind) => makeBox(kind, carcases, next)).slice(0, size.boxes),
+    loose: makeLoose(carcases, next).slice(0, size.loose),
+    trade: makeTrade(carcases, next).slice(-(size.trade ?? 25)),
     mince: {
       closedReason: null,
       productCutId: 'mince',

@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { makeFillInstance } from '#scripts/bench/box-fill-instances.ts';
 import type { RecipeLine } from '#shared/engine/allocation/allocation-input.ts';
