@@ -11,15 +11,17 @@ import { choosePacks } from './choose-packs.ts';
 import { describeFill, type Job } from './fill-work.ts';
 import { endAssignments, insertAssignments, listOrderWork, moveOrder } from './pack-queries.ts';
 import { loadWork, readPackingDay, type PackingWork } from './packing-day.ts';
+import { settleWeights } from './settle-weights.ts';
 
 /** Ties between equal fills are broken by a seed of its own, so that the same packs always fall the same way. */
-const SEED = 1;
+export const SEED = 1;
 
-type Placement = { pack: WeighedPack; job: Job; boxLine: string };
+export type Placement = { pack: WeighedPack; job: Job; boxLine: string };
 
 /**
  * Puts the packs in the chiller into the day's orders: butchers' cuts and loose packs by weight, boxes by the engine's
- * fill. What is filled stays as it is; a box that fails its recipe is taken apart and filled again.
+ * fill. What is filled stays as it is, and so does every packed order; an open box that fails its recipe is taken apart
+ * and filled again.
  */
 export async function fillOrders(deps: Deps, byUserId: string, dayId: string): Promise<PackingDay> {
   return deps.db.transaction(async (tx) => {
@@ -30,7 +32,7 @@ export async function fillOrders(deps: Deps, byUserId: string, dayId: string): P
     const work = await loadWork(tx, dayId);
     const placements = planPlacements(work);
     await place(tx, byUserId, { work, placements });
-    await markPacked(tx, dayId);
+    await markPacked(deps, tx, dayId);
     const detail = { packs: placements.length };
     await recordAudit(tx, { byUserId, action: 'filled', subject: 'cutting day', subjectId: dayId, detail });
     return readPackingDay(tx, dayId);
@@ -38,8 +40,8 @@ export async function fillOrders(deps: Deps, byUserId: string, dayId: string): P
 }
 
 /** Boxes that a lost or re-weighed pack has broken give their packs back, to be filled as well as the rest allow. */
-async function takeApart(tx: Tx, byUserId: string, { jobs, packs }: PackingWork): Promise<void> {
-  const broken = jobs.filter((job) => job.kind === 'box' && !job.isDone && !describeFill(job).isFilled);
+export async function takeApart(tx: Tx, byUserId: string, { jobs, packs }: PackingWork): Promise<void> {
+  const broken = jobs.filter((job) => job.kind === 'box' && !job.isPacked && !describeFill(job).isFilled);
   const ids = broken.flatMap((job) => job.packs.map((pack) => pack.id));
   if (ids.length === 0) return;
   await endAssignments(tx, ids);
@@ -58,11 +60,16 @@ async function takeApart(tx: Tx, byUserId: string, { jobs, packs }: PackingWork)
   );
 }
 
-function planPlacements({ jobs, packs }: PackingWork): Placement[] {
-  const free = packs
-    .filter((pack) => pack.place === 'chiller')
-    .map(({ id, cutId, grams }): WeighedPack => ({ id, cutId, grams, state: 'fresh' }));
-  const open = jobs.filter((job) => !job.isDone && !describeFill(job).isFilled);
+/** Packs in the chiller that nobody has; a butcher's wait there too, in his name. */
+export function freePacks(packs: PackingWork['packs']): WeighedPack[] {
+  return packs
+    .filter((pack) => pack.place === 'chiller' && !pack.isAssigned)
+    .map(({ id, cutId, grams }) => ({ id, cutId, grams, state: 'fresh' }));
+}
+
+export function planPlacements({ jobs, packs }: PackingWork): Placement[] {
+  const free = freePacks(packs);
+  const open = jobs.filter((job) => !job.isPacked && !describeFill(job).isFilled);
   const byWeight = choosePacks(open, free);
   const used = new Set(byWeight.map(({ pack }) => pack.id));
   const boxes = open.filter((job) => job.kind === 'box');
@@ -83,7 +90,7 @@ function planPlacements({ jobs, packs }: PackingWork): Placement[] {
 
 type Placing = { work: PackingWork; placements: readonly Placement[] };
 
-async function place(tx: Tx, byUserId: string, { work, placements }: Placing): Promise<void> {
+export async function place(tx: Tx, byUserId: string, { work, placements }: Placing): Promise<void> {
   await insertAssignments(
     tx,
     placements.map(({ pack, job, boxLine }) => ({
@@ -107,13 +114,14 @@ async function place(tx: Tx, byUserId: string, { work, placements }: Placing): P
   );
 }
 
-/** An order is packed once everything in it is. */
-async function markPacked(tx: Tx, dayId: string): Promise<void> {
+/** An order is packed once everything in it is; then its weights are settled. */
+async function markPacked(deps: Deps, tx: Tx, dayId: string): Promise<void> {
   const { jobs } = await loadWork(tx, dayId);
   const orders = new Map((await listOrderWork(tx, dayId)).map((work) => [work.orderId, work.state]));
   for (const [orderId, state] of orders) {
     const ofOrder = jobs.filter((job) => job.orderId === orderId);
     const isPacked = ofOrder.every((job) => describeFill(job).isFilled);
-    if (isPacked && canMoveOrder(state, 'packed')) await moveOrder(tx, orderId, 'packed');
+    if (!isPacked || !canMoveOrder(state, 'packed')) continue;
+    if (await moveOrder(tx, orderId, { from: state, to: 'packed' })) await settleWeights(deps, tx, { orderId, jobs });
   }
 }

@@ -14,11 +14,14 @@ export type Job = {
   orderNo: number;
   orderName: string;
   item: string;
+  /** Nothing is put in or taken out by a fill any more; a lost or re-weighed pack may open it again. */
+  isPacked: boolean;
+  /** Handed over or called to be collected: nothing may change. */
   isDone: boolean;
   packs: (PackRow & { boxLine: string })[];
 } & (
-  | { kind: 'box'; recipe: Recipe }
-  | { kind: 'loose'; cutId: string; upperGrams: number }
+  | { kind: 'box'; recipe: Recipe; pricePence: number }
+  | { kind: 'loose'; cutId: string; upperGrams: number; pricePence: number }
   | { kind: 'trade'; cutId: string; grams: number }
 );
 
@@ -39,7 +42,7 @@ export function listJobs(rows: WorkRows): Job[] {
     const { lineId, orderNo, orderName, item, cutId, grams } = work;
     const packs = packsIn(rows, (each) => each.reservationLineId === lineId);
     const job = { id: `${lineId}/1`, lineId, copy: 1, orderId: null, orderNo, orderName, item, packs };
-    return { ...job, isDone: work.isDispatched, kind: 'trade', cutId, grams };
+    return { ...job, isPacked: work.isDispatched, isDone: work.isDispatched, kind: 'trade', cutId, grams };
   });
   return [...trade, ...orders];
 }
@@ -50,10 +53,12 @@ function orderJob(rows: WorkRows, work: OrderWork, copy: number): Job {
   const { lineId, orderId, orderNo, orderName, item } = work;
   const packs = packsIn(rows, (each) => each.orderLineId === lineId && each.copy === copy);
   const isDone = HANDED_OVER.includes(work.state);
-  const job = { id: `${lineId}/${copy}`, lineId, copy, orderId, orderNo, orderName, item, packs, isDone };
+  const isPacked = isDone || work.state === 'packed';
+  const job = { id: `${lineId}/${copy}`, lineId, copy, orderId, orderNo, orderName, item, packs, isDone, isPacked };
+  const pricePence = work.unitPricePence;
   const recipe = work.boxKindId ? rows.recipes.get(work.boxKindId) : undefined;
-  if (recipe) return { ...job, kind: 'box', recipe };
-  return { ...job, kind: 'loose', cutId: work.cutId ?? '', upperGrams: work.upperGrams ?? 0 };
+  if (recipe) return { ...job, kind: 'box', recipe, pricePence };
+  return { ...job, kind: 'loose', cutId: work.cutId ?? '', upperGrams: work.upperGrams ?? 0, pricePence };
 }
 
 function packsIn({ packs, assignments }: WorkRows, isHere: (row: AssignmentRow) => boolean): Job['packs'] {

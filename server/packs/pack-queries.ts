@@ -7,6 +7,7 @@ import { pack, packAssignment, stockMovement } from '#db/schema/packs.ts';
 import { cut } from '#db/schema/products.ts';
 import { reservation, reservationLine, tradeAccount } from '#db/schema/trade.ts';
 import type { Db, Tx } from '#server/deps.ts';
+import type { OrderState } from '#shared/domain/order-state.ts';
 
 export type PackRow = typeof pack.$inferSelect & { cut: string; earTag: string };
 export type AssignmentRow = typeof packAssignment.$inferSelect;
@@ -125,11 +126,16 @@ export async function listTradeWork(db: Db | Tx, dayId: string) {
 }
 export type TradeWork = Awaited<ReturnType<typeof listTradeWork>>[number];
 
-export async function moveOrder(tx: Tx, orderId: string, state: 'packed' | 'confirmed'): Promise<void> {
-  await tx
+type Move = { from: OrderState; to: 'packed' | 'confirmed' };
+
+/** False when the order has moved on meanwhile, such as cancelled. */
+export async function moveOrder(tx: Tx, orderId: string, { from, to }: Move): Promise<boolean> {
+  const rows = await tx
     .update(customerOrder)
-    .set({ state, version: sql`${customerOrder.version} + 1` })
-    .where(eq(customerOrder.id, orderId));
+    .set({ state: to, version: sql`${customerOrder.version} + 1` })
+    .where(and(eq(customerOrder.id, orderId), eq(customerOrder.state, from)))
+    .returning({ id: customerOrder.id });
+  return rows.length === 1;
 }
 
 export async function markCut(tx: Tx, carcaseId: string): Promise<void> {

@@ -1,7 +1,6 @@
 import { randomBytes } from 'node:crypto';
 import type { Pack, PackingDay } from '#shared/contracts/packs.ts';
 import { addDays } from '#shared/domain/day.ts';
-import { canMoveOrder } from '#shared/domain/order-state.ts';
 import { AppError } from '#shared/errors.ts';
 import { lockCuttingDay } from '#server/carcases/cutting-day-queries.ts';
 import { loadDayCutouts } from '#server/carcases/day-figures.ts';
@@ -13,7 +12,6 @@ import {
   endAssignments,
   findPack,
   insertPacks,
-  listOrderWork,
   markCut,
   moveOrder,
   readCut,
@@ -21,7 +19,9 @@ import {
   setPackGrams,
   type PackRow,
 } from './pack-queries.ts';
+import { describeFill } from './fill-work.ts';
 import { describePack, loadWork, noSuchPack, readPackingDay } from './packing-day.ts';
+import { settleWeights } from './settle-weights.ts';
 
 export type NewPacks = { dayId: string; carcaseId: string; cutId: string; grams: number[] };
 
@@ -96,7 +96,7 @@ async function correctLedger(tx: Tx, { pack, place, grams, lastMovementId, byUse
 
 export type Reweighing = { packId: string; grams: number };
 
-/** A pack that lies in an order stays there; the next fill mends the box if it no longer fits. */
+/** A pack that lies in an order stays there. If its box no longer fits, the order is open again and the next fill mends it. */
 export async function reweighPack(deps: Deps, byUserId: string, { packId, grams }: Reweighing): Promise<Pack> {
   return deps.db.transaction(async (tx) => {
     const { pack, place, lastMovementId } = await lockPack(tx, packId);
@@ -107,6 +107,11 @@ export async function reweighPack(deps: Deps, byUserId: string, { packId, grams 
     const { jobs, packs } = await loadWork(tx, pack.cuttingDayId);
     const row = packs.find((candidate) => candidate.id === packId);
     if (!row) throw noSuchPack();
+    const job = jobs.find((candidate) => candidate.packs.some((each) => each.id === packId));
+    if (job?.orderId && job.isPacked && !job.isDone) {
+      if (!describeFill(job).isFilled) await moveOrder(tx, job.orderId, { from: 'packed', to: 'confirmed' });
+      else await settleWeights(deps, tx, { orderId: job.orderId, jobs });
+    }
     return describePack(row, jobs);
   });
 }
@@ -146,16 +151,11 @@ export async function losePack(deps: Deps, byUserId: string, { packId, reason }:
       throw new AppError('STATE_CHANGED', `Pack ${pack.code} lies in an order that is ready. Nothing was changed.`);
     }
     await endAssignments(tx, [packId]);
-    if (job?.orderId) await reopenOrder(tx, pack.cuttingDayId, job.orderId);
+    if (job?.orderId) await moveOrder(tx, job.orderId, { from: 'packed', to: 'confirmed' });
     const { carcaseId, grams } = pack;
     const toPlace = DESTINATION[reason];
     await recordMovements(tx, [{ carcaseId, packId, fromPlace: place, toPlace, grams, reason, byUserId }]);
     await recordAudit(tx, { byUserId, action: 'booked out', subject: 'pack', subjectId: packId, detail: { reason } });
     return readPackingDay(tx, pack.cuttingDayId);
   });
-}
-
-async function reopenOrder(tx: Tx, dayId: string, orderId: string): Promise<void> {
-  const order = (await listOrderWork(tx, dayId)).find((work) => work.orderId === orderId);
-  if (order && canMoveOrder(order.state, 'confirmed')) await moveOrder(tx, orderId, 'confirmed');
 }

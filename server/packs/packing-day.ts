@@ -9,7 +9,7 @@ import type { Db, Tx } from '#server/deps.ts';
 import { describeFill, listJobs, type Job } from './fill-work.ts';
 import { listAssignments, listOrderWork, listPacks, listTradeWork, readPlaces, type PackRow } from './pack-queries.ts';
 
-export type PackingWork = { jobs: Job[]; packs: (PackRow & { place: string })[] };
+export type PackingWork = { jobs: Job[]; packs: (PackRow & { place: string; isAssigned: boolean })[] };
 
 /** All packs of a day, where they lie, and all that they must fill. */
 export async function loadWork(db: Db | Tx, dayId: string): Promise<PackingWork> {
@@ -25,7 +25,13 @@ export async function loadWork(db: Db | Tx, dayId: string): Promise<PackingWork>
     assignments,
     recipes: recipesOf(published),
   });
-  return { jobs, packs: packs.map((pack) => ({ ...pack, place: places.get(pack.id)?.place ?? 'chiller' })) };
+  const assigned = new Set(assignments.map((row) => row.packId));
+  const placed = packs.map((pack) => ({
+    ...pack,
+    place: places.get(pack.id)?.place ?? 'chiller',
+    isAssigned: assigned.has(pack.id),
+  }));
+  return { jobs, packs: placed };
 }
 
 function recipesOf(published: AllocationRow | null): Map<string, Recipe> {

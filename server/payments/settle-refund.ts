@@ -6,6 +6,7 @@ import { refundSentMail } from '#server/mail/refund-sent.ts';
 import { lockOrder, updateOrder } from '#server/orders/order-queries.ts';
 import { readOrderFacts } from '#server/orders/read-order.ts';
 import { isOutage } from './payment-page.ts';
+import { WEIGHTS_SETTLED } from './refund-reasons.ts';
 import {
   findPayment,
   findPaymentByProviderId,
@@ -59,6 +60,8 @@ async function finish(deps: Deps, refund: PaymentRow, providerId: string): Promi
     if (!order || current?.state !== 'asked') return;
     await updatePayment(tx, refund.id, { state: 'done', providerId, error: null });
     await refreshPaymentState(tx, order.id);
+    // One mail a settlement: it went out with the weights and the trace codes.
+    if (refund.reason.startsWith(WEIGHTS_SETTLED)) return;
     await queueMail(tx, {
       eventKey: `refund sent ${refund.id}`,
       kind: 'refund sent',

@@ -85,6 +85,11 @@ export const losePackSchema = {
 /** Puts real packs into real orders. Whatever is filled already stays as it is. */
 export const fillOrdersSchema = { params: DayId, answer: PackingDay };
 
+export const packShortSchema = {
+  params: z.strictObject({ dayId: Id, orderNo: z.coerce.number().int().min(1).max(2_000_000_000) }),
+  answer: PackingDay,
+};
+
 export const MailState = z.enum(['queued', 'sent', 'failed', 'bounced']);
 export const CollectionMail = z.strictObject({
   orderId: Id,

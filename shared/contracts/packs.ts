@@ -20,3 +20,9 @@ export const fillOrders = endpoint<typeof schema.fillOrdersSchema>('POST', '/api
   'owner',
   'packer',
 ]);
+/** Sends an order that cannot be filled with what there is, and pays back what is missing. */
+export const packShort = endpoint<typeof schema.packShortSchema>(
+  'POST',
+  '/api/cutting-days/:dayId/orders/:orderNo/pack-short',
+  ['owner'],
+);

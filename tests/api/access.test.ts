@@ -69,6 +69,7 @@ const MAY_CALL: Record<string, Who[]> = {
   'PUT /api/packs/:packId/weight': FARM,
   'POST /api/packs/:packId/lose': FARM,
   'POST /api/cutting-days/:dayId/fill': FARM,
+  'POST /api/cutting-days/:dayId/orders/:orderNo/pack-short': OWNER,
   'GET /api/cutting-days/:dayId/collection-mails': OWNER,
   'POST /api/cutting-days/:dayId/collection-mails': OWNER,
   'GET /api/mails': OWNER,

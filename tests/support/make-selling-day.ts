@@ -99,12 +99,12 @@ export async function makeShelves(db: Db) {
 }
 
 /** A farm with a day of two weighed steers, two kinds of box and a slot: ready to be allocated, nothing on sale yet. */
-export async function makeSellingDay(db: Db, clock: Clock) {
+export async function makeSellingDay(db: Db, clock: Clock, hotGramsOfEach: readonly number[] = [330_000, 318_000]) {
   const today = clock.today();
   const { everydayId, grillId, specification } = await makeShelves(db);
   const day = await makeCuttingDay(db, today, { specificationId: specification.id, state: 'planned' });
   const carcases = [];
-  for (const hotGrams of [330_000, 318_000]) {
+  for (const hotGrams of hotGramsOfEach) {
     const animal = await makeAnimal(db, { born: addDays(today, -24 * 30) });
     const more = { animalId: animal.id, killDay: addDays(today, -5), liveGrams: 600_000, state: 'hanging' as const };
     carcases.push(await makeCarcase(db, day.id, { ...more, hotGrams, conformation: 'R', fatClass: '4L' }));
