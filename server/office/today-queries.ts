@@ -1,4 +1,4 @@
-import { and, asc, count, desc, eq, inArray, lte, ne, notInArray, sql, sum } from 'drizzle-orm';
+import { and, asc, count, desc, eq, inArray, lte, ne, notInArray, sum } from 'drizzle-orm';
 import { allocation } from '#db/schema/allocations.ts';
 import { carcase, cuttingDay } from '#db/schema/carcases.ts';
 import { animal } from '#db/schema/herd.ts';
@@ -11,20 +11,19 @@ export type TodayDay = typeof cuttingDay.$inferSelect & { carcases: number };
 
 /** Days that are not closed, soonest first, then the newest closed ones. */
 export async function listTodayDays(db: Db, closedLimit: number): Promise<TodayDay[]> {
-  const carcases = sql<number>`(select count(*)::int from ${carcase} where ${carcase.cuttingDayId} = ${cuttingDay.id})`;
-  const columns = { day: cuttingDay, carcases };
-  const working = await db
-    .select(columns)
-    .from(cuttingDay)
-    .where(ne(cuttingDay.state, 'closed'))
-    .orderBy(asc(cuttingDay.day));
+  const working = await db.select().from(cuttingDay).where(ne(cuttingDay.state, 'closed')).orderBy(asc(cuttingDay.day));
   const closed = await db
-    .select(columns)
+    .select()
     .from(cuttingDay)
     .where(eq(cuttingDay.state, 'closed'))
     .orderBy(desc(cuttingDay.day))
     .limit(closedLimit);
-  return [...working, ...closed].map((row) => ({ ...row.day, carcases: row.carcases }));
+  const rows = await db
+    .select({ dayId: carcase.cuttingDayId, carcases: count() })
+    .from(carcase)
+    .groupBy(carcase.cuttingDayId);
+  const carcases = new Map(rows.map((row) => [row.dayId, row.carcases]));
+  return [...working, ...closed].map((day) => ({ ...day, carcases: carcases.get(day.id) ?? 0 }));
 }
 
 /** Carcases whose kill day has come and whose kill sheet has not. */
