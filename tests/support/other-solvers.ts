@@ -1,0 +1,62 @@
+import { execFile } from 'node:child_process';
+import { mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
+import os from 'node:os';
+import path from 'node:path';
+import { promisify } from 'node:util';
+
+const run = promisify(execFile);
+
+export type Answer = { objective: number; seconds: number; isProven: boolean };
+export type OtherSolver = (lpText: string, about: { gap: number; seconds: number }) => Promise<Answer>;
+
+async function withModel<Result>(
+  lpText: string,
+  use: (file: string, folder: string) => Promise<Result>,
+): Promise<Result> {
+  const folder = await mkdtemp(path.join(os.tmpdir(), 'wholeside-model-'));
+  try {
+    const file = path.join(folder, 'model.lp');
+    await writeFile(file, lpText);
+    return await use(file, folder);
+  } finally {
+    await rm(folder, { recursive: true });
+  }
+}
+
+async function start(command: string, args: string[], seconds: number): Promise<string> {
+  try {
+    const { stdout } = await run(command, args, { timeout: (seconds + 30) * 1000, maxBuffer: 64 * 1024 * 1024 });
+    return stdout;
+  } catch (error) {
+    if ((error as NodeJS.ErrnoException).code !== 'ENOENT') throw error;
+    throw new Error(`${command} is not installed: apt-get install glpk-utils coinor-cbc`, { cause: error });
+  }
+}
+
+/** GLPK's stand-alone solver (Debian package glpk-utils). */
+export const solveWithGlpk: OtherSolver = (lpText, { gap, seconds }) =>
+  withModel(lpText, async (file, folder) => {
+    const startedAt = performance.now();
+    const output = path.join(folder, 'answer.txt');
+    const args = ['--lp', file, '--mipgap', String(gap), '--tmlim', String(seconds), '--cuts', '-o', output];
+    await start('glpsol', args, seconds);
+    const text = await readFile(output, 'utf8');
+    return {
+      objective: Number(/Objective:\s+\S+ = (\S+)/.exec(text)?.[1]),
+      seconds: (performance.now() - startedAt) / 1000,
+      isProven: /Status:\s+(INTEGER )?OPTIMAL/.test(text),
+    };
+  });
+
+/** COIN-OR's branch and cut (Debian package coinor-cbc). It minimises what it reads and prints the sign so. */
+export const solveWithCbc: OtherSolver = (lpText, { gap, seconds }) =>
+  withModel(lpText, async (file) => {
+    const startedAt = performance.now();
+    const args = [file, 'ratio', String(gap), 'sec', String(seconds), 'solve'];
+    const text = await start('cbc', args, seconds);
+    return {
+      objective: Math.abs(Number(/Objective value:\s+(\S+)/.exec(text)?.[1])),
+      seconds: (performance.now() - startedAt) / 1000,
+      isProven: /Result - Optimal solution found/.test(text),
+    };
+  });
