@@ -51,6 +51,15 @@ export async function sellHeld(tx: Tx, { offerId, quantity }: OfferTake): Promis
     .where(eq(offer.id, offerId));
 }
 
+/** True when the last of one of these has just been paid for. */
+export async function hasSoldOut(tx: Tx, offerIds: readonly string[]): Promise<boolean> {
+  const rows = await tx
+    .select({ id: offer.id })
+    .from(offer)
+    .where(and(inArray(offer.id, [...offerIds]), sql`${offer.sold} = ${offer.offered}`));
+  return rows.length > 0;
+}
+
 /** False: the slot is full, or is none of this day. */
 export async function takeSlot(tx: Tx, slotId: string, dayId: string): Promise<boolean> {
   const rows = await tx

@@ -8,6 +8,7 @@ import { queueMail } from '#server/mail/outbox.ts';
 import { release, sell, take } from '#server/orders/hold.ts';
 import { listLines, lockOrder, updateOrder, type OrderRow } from '#server/orders/order-queries.ts';
 import { getDay, readOrderFacts } from '#server/orders/read-order.ts';
+import { hasSoldOut } from '#server/orders/stock-queries.ts';
 import { insertCharge, insertRefund } from './payment-queries.ts';
 import { enqueue } from '#server/queue.ts';
 
@@ -75,6 +76,13 @@ async function confirm(tx: Tx, deps: Deps, { order }: Paid): Promise<void> {
     sessionUrl: null,
     version: order.version + 1,
   });
+  const lines = await listLines(tx, order.id);
+  // What has sold out may be worth making more of: the day is worked out again.
+  const isSoldOut = await hasSoldOut(
+    tx,
+    lines.map((line) => line.offerId),
+  );
+  if (isSoldOut) await enqueue(tx, 'replan-day', { dayId: order.cuttingDayId });
   const facts = await readOrderFacts(deps, tx, confirmed);
   await queueMail(tx, {
     eventKey: `order confirmed ${order.id} ${order.version}`,

@@ -50,7 +50,7 @@ export async function railOfDay(db: Db, day: ShopDayRow, offers: readonly ShopOf
   return { rail, productGrams: sum('grams'), soldGrams: sum('soldGrams') };
 }
 
-export function countsOf(offers: readonly ShopOfferRow[]): Counts {
+function countsOf(offers: readonly ShopOfferRow[]): Counts {
   return {
     boxes: offers.flatMap(({ boxKindId, sold, held }) => (boxKindId ? [{ kindId: boxKindId, sold, held }] : [])),
     loose: offers.flatMap(({ cutId, sold, held }) => (cutId ? [{ cutId, sold, held }] : [])),

@@ -236,3 +236,16 @@ test.each([
   expect(answer.status).toBe(400);
   expect((answer.body as { fields: Record<string, string> }).fields[field]).toEqual(TEXT);
 });
+
+test('JSON that cannot be read, and more of it than anyone orders, are refused as problems', async () => {
+  const broken = await world.request().post('/api/orders').set('Content-Type', 'application/json').send('{"lines": [');
+  expect(broken.status).toBe(400);
+  expect(broken.headers['content-type']).toContain('application/problem+json');
+  expect(broken.body).toMatchObject({ code: 'INVALID_INPUT' });
+  const huge = await world
+    .request()
+    .post('/api/orders')
+    .send(basketFor(stall, { note: 'x'.repeat(300_000) }));
+  expect(huge.status).toBe(413);
+  expect(huge.body).toMatchObject({ code: 'TOO_LARGE' });
+});
