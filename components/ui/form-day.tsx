@@ -1,6 +1,7 @@
 import type { ComponentProps } from 'react';
 import { useController, type Control, type FieldPath, type FieldValues } from 'react-hook-form';
 import { DateField } from './date-field.tsx';
+import { shownError } from './shown-error.ts';
 
 type FormDayProps<Values extends FieldValues> = Omit<
   ComponentProps<typeof DateField>,
@@ -9,14 +10,14 @@ type FormDayProps<Values extends FieldValues> = Omit<
 
 /** A day of a form. */
 export function FormDay<Values extends FieldValues>({ control, name, ...date }: FormDayProps<Values>) {
-  const { field: bound, fieldState } = useController({ control, name });
+  const { field: bound, fieldState, formState } = useController({ control, name });
   return (
     <DateField
       {...date}
       value={bound.value ?? ''}
       onChange={bound.onChange}
       onBlur={bound.onBlur}
-      error={fieldState.error?.message}
+      error={shownError({ fieldState, formState })}
     />
   );
 }

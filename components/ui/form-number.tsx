@@ -1,6 +1,7 @@
 import type { ComponentProps } from 'react';
 import { useController, type Control, type FieldPath, type FieldValues } from 'react-hook-form';
 import { NumberField } from './number-field.tsx';
+import { shownError } from './shown-error.ts';
 
 type FormNumberProps<Values extends FieldValues> = Omit<
   ComponentProps<typeof NumberField>,
@@ -9,14 +10,14 @@ type FormNumberProps<Values extends FieldValues> = Omit<
 
 /** A figure of a form: grams, pence, a rate or a count. */
 export function FormNumber<Values extends FieldValues>({ control, name, ...field }: FormNumberProps<Values>) {
-  const { field: bound, fieldState } = useController({ control, name });
+  const { field: bound, fieldState, formState } = useController({ control, name });
   return (
     <NumberField
       {...field}
       value={bound.value ?? null}
       onChange={bound.onChange}
       onBlur={bound.onBlur}
-      error={fieldState.error?.message}
+      error={shownError({ fieldState, formState })}
     />
   );
 }

@@ -1,6 +1,7 @@
 import type { ComponentProps } from 'react';
 import { useController, type Control, type FieldPath, type FieldValues } from 'react-hook-form';
 import { Field } from './field.tsx';
+import { shownError } from './shown-error.ts';
 
 type FormTextProps<Values extends FieldValues> = Omit<
   ComponentProps<typeof Field>,
@@ -15,14 +16,14 @@ type FormTextProps<Values extends FieldValues> = Omit<
 /** A field of a form: holds its text and shows the form's error beside it. */
 export function FormText<Values extends FieldValues>(props: FormTextProps<Values>) {
   const { control, name, emptyIsNull = false, ...field } = props;
-  const { field: bound, fieldState } = useController({ control, name });
+  const { field: bound, fieldState, formState } = useController({ control, name });
   return (
     <Field
       {...field}
       value={bound.value ?? ''}
       onChangeText={(text) => bound.onChange(emptyIsNull && text.trim() === '' ? null : text)}
       onBlur={bound.onBlur}
-      error={fieldState.error?.message}
+      error={shownError({ fieldState, formState })}
     />
   );
 }

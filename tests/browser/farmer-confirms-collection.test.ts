@@ -1,6 +1,8 @@
 import { randomUUID } from 'node:crypto';
+import { eq } from 'drizzle-orm';
 import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, expect, test } from 'vitest';
+import { cuttingDay } from '#db/schema/carcases.ts';
 import {
   type BrowserWorld,
   enterAs,
@@ -20,6 +22,7 @@ beforeAll(async () => {
   farm = await startBrowserWorld();
   const { world } = farm;
   day = await makePublishedDay(world);
+  await world.db.update(cuttingDay).set({ state: 'open' }).where(eq(cuttingDay.id, day.day.id));
   const placed = await place(world, {
     basketKey: randomUUID(),
     dayId: day.day.id,

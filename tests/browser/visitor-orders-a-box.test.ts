@@ -43,7 +43,7 @@ async function fillCheckout(page: Page): Promise<void> {
   await pay.click();
   await page.getByText('Choose a place and a time.').waitFor();
   await expectAccessible(page);
-  await page.getByText('10:00–10:30').click();
+  await page.getByRole('radio', { name: /^10:00–10:30/ }).check();
   await page.getByLabel('Name').fill('Ada Fell');
   await page.getByLabel('E-mail').fill('ada at example');
   await page.getByLabel('Phone').fill('07700 900123');
