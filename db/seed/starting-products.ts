@@ -5,7 +5,7 @@ import { traditionalSide } from '#shared/engine/figures/traditional-side.ts';
 import { LOOSE_CUTS, STARTING_BOXES } from './box-kinds.ts';
 
 /** What every farm starts with: one way to cut a side, its cuts with prices to set, and the five boxes. */
-export async function insertStartingProducts(tx: Tx): Promise<{ specificationId: string }> {
+export async function insertStartingProducts(tx: Tx, { isActive = true } = {}): Promise<{ specificationId: string }> {
   const [specification] = await tx
     .insert(cuttingSpecification)
     .values({ name: traditionalSide.name, edition: 1, body: traditionalSide })
@@ -30,7 +30,7 @@ export async function insertStartingProducts(tx: Tx): Promise<{ specificationId:
   for (const [position, { lines, ...kind }] of STARTING_BOXES.entries()) {
     const [row] = await tx
       .insert(boxKind)
-      .values({ ...kind, position: position + 1 })
+      .values({ ...kind, isActive, position: position + 1 })
       .returning({ id: boxKind.id });
     if (row) await insertLines(tx, row.id, lines);
   }
