@@ -28,30 +28,36 @@ function createOwner(...args: string[]) {
   });
 }
 
-test('the first owner needs the farm, is made with it, can sign in, and is not made twice', { timeout: 180_000 }, async () => {
-  const me = ['--email', 'Jo@example.com', '--name', 'Jo Hag'];
-  const without = createOwner(...me);
-  expect(without.status).toBe(1);
-  expect(without.stderr).toContain('--farm');
+test(
+  'the first owner needs the farm, is made with it, can sign in, and is not made twice',
+  { timeout: 180_000 },
+  async () => {
+    const me = ['--email', 'Jo@example.com', '--name', 'Jo Hag'];
+    const without = createOwner(...me);
+    expect(without.status).toBe(1);
+    expect(without.stderr).toContain('--farm');
 
-  const made = createOwner(...me, ...FARM);
-  expect(made.stderr).toBe('');
-  expect(made.status).toBe(0);
-  const answer = await supertest(world.origin)
-    .post('/api/auth/sign-in/email')
-    .set('Origin', world.origin)
-    .send({ email: 'jo@example.com', password: PASSWORD })
-    .expect(200);
-  const cookie = (answer.headers['set-cookie'] as unknown as string[]).map((each) => each.split(';')[0]).join('; ');
-  const owner = world.request(cookie);
-  expect((await owner.get('/api/me').expect(200)).body).toMatchObject({ user: { role: 'owner', name: 'Jo Hag' } });
-  const { specifications } = (await owner.get('/api/specifications').expect(200)).body as { specifications: unknown[] };
-  expect(specifications).toHaveLength(1);
+    const made = createOwner(...me, ...FARM);
+    expect(made.stderr).toBe('');
+    expect(made.status).toBe(0);
+    const answer = await supertest(world.origin)
+      .post('/api/auth/sign-in/email')
+      .set('Origin', world.origin)
+      .send({ email: 'jo@example.com', password: PASSWORD })
+      .expect(200);
+    const cookie = (answer.headers['set-cookie'] as unknown as string[]).map((each) => each.split(';')[0]).join('; ');
+    const owner = world.request(cookie);
+    expect((await owner.get('/api/me').expect(200)).body).toMatchObject({ user: { role: 'owner', name: 'Jo Hag' } });
+    const { specifications } = (await owner.get('/api/specifications').expect(200)).body as {
+      specifications: unknown[];
+    };
+    expect(specifications).toHaveLength(1);
 
-  const again = createOwner(...me);
-  expect(again.status).toBe(1);
-  expect(again.stderr).toContain('has an account already');
-});
+    const again = createOwner(...me);
+    expect(again.status).toBe(1);
+    expect(again.stderr).toContain('has an account already');
+  },
+);
 
 test('a mistyped argument is answered with what the command takes', { timeout: 120_000 }, () => {
   const answer = createOwner('--mail', 'jo@example.com');
