@@ -27,13 +27,19 @@ const POLL_SOON_MS = 1_500;
 const POLL_LATER_MS = 10_000;
 const SOON_POLLS = 40;
 
+/** The payment company has the next word: on a payment, or on a refund after cancelling. */
+function isMoving({ state, paymentUrl, paymentState }: Order): boolean {
+  if (state === 'awaiting payment') return paymentUrl !== null;
+  return state === 'cancelled' && (paymentState === 'paid' || paymentState === 'part paid');
+}
+
 export function orderQuery(token: string) {
   return queryOptions({
     queryKey: ['orders', token],
     queryFn: ({ signal }) => call(getOrder, { params: { token }, signal }),
     staleTime: STALE.stock,
     refetchInterval: ({ state }) => {
-      if (state.data?.state !== 'awaiting payment') return false;
+      if (!state.data || !isMoving(state.data)) return false;
       return state.dataUpdateCount < SOON_POLLS ? POLL_SOON_MS : POLL_LATER_MS;
     },
   });

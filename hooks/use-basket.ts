@@ -73,11 +73,11 @@ function write(change: (basket: Basket) => Basket): void {
   const before = read();
   const basket = change(before.key ? before : { ...before, key: crypto.randomUUID() });
   const text = JSON.stringify(basket);
-  unsaved = text;
   try {
     localStorage.setItem(STORE, text);
+    unsaved = null;
   } catch {
-    // Kept in `unsaved`.
+    unsaved = text;
   }
   listeners.forEach((tell) => tell());
 }
@@ -85,7 +85,6 @@ function write(change: (basket: Basket) => Basket): void {
 function subscribe(onChange: () => void): () => void {
   const fromOtherTab = (event: StorageEvent) => {
     if (event.key !== STORE && event.key !== null) return;
-    unsaved = event.newValue;
     onChange();
   };
   listeners.add(onChange);

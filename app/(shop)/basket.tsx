@@ -105,6 +105,7 @@ function OpenOrder({ token }: { token: string }) {
   useEffect(() => {
     if (state && state !== 'awaiting payment') settleOrder(token, state === 'cancelled' ? 'given up' : 'paid');
   }, [state, token]);
-  if (!order || state !== 'awaiting payment') return null;
+  // Without a payment page any more, the order waits for nothing and holds nothing.
+  if (!order?.paymentUrl || state !== 'awaiting payment') return null;
   return <WaitingOrder order={order} isLeaving={leave.isPending} onLeave={() => leave.mutate()} />;
 }

@@ -78,7 +78,7 @@ function BuyButton({ box, free, quantity, onQuantity }: BuyButtonProps) {
   }
   return (
     <View style={css('w-buy')}>
-      <View style={css('w-row-between')}>
+      <View style={css('w-buy-count')}>
         <Text weight="strong" live="status">{`${quantity} in your basket`}</Text>
         <Stepper label={box.name} value={quantity} max={Math.max(free, quantity)} onChange={onQuantity} />
       </View>

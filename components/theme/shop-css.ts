@@ -41,6 +41,7 @@ const box = `
 :root .w-inside-words{display:flex;flex-direction:column;gap:2px;min-width:0}
 :root .w-buy{display:flex;flex-direction:column;gap:14px;min-width:0}
 :root .w-buy-price{display:flex;flex-direction:row;flex-wrap:wrap;align-items:baseline;gap:2px 10px}
+:root .w-buy-count{display:flex;flex-direction:row;align-items:center;justify-content:space-between;gap:16px}
 :root .w-buy-end{margin-inline-start:auto}
 @media (min-width:760px){:root .w-stay{position:sticky;top:24px;align-self:start}}
 `;
