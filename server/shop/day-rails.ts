@@ -7,9 +7,16 @@ import type { Db } from '#server/deps.ts';
 import { getPlannedFigures, type ShopDayRow, type ShopOfferRow } from './shop-queries.ts';
 
 type Names = Pick<Specification, 'quarters' | 'narrowPrimals'>;
-type Figures = { basis: RailBasis; names: Names };
+type BoxRail = { boxes: number; rail: Rail };
+type Figures = {
+  basis: RailBasis;
+  names: Names;
+  /** The rail as it was last drawn, and for which counts: between two sales every visitor sees the same. */
+  drawn: { counts: string; rail: DayRail } | null;
+  boxRails: Map<string, BoxRail | null>;
+};
 
-/** An allocation never changes once it is kept, so what it means for the rail is worked out once. */
+/** The plan of an allocation never changes once it is kept, so what it means for the rail is worked out once. */
 const known = new Map<string, Promise<Figures>>();
 const MOST_KNOWN = 30;
 
@@ -32,6 +39,8 @@ async function readFigures(db: Db, ids: { allocationId: string; specificationId:
   return {
     basis: railBasis(input.input, plan.plan),
     names: { quarters, narrowPrimals },
+    drawn: null,
+    boxRails: new Map(),
   };
 }
 
@@ -43,9 +52,17 @@ const BARE: DayRail = { rail: { primals: [], narrowPrimals: [] }, productGrams: 
 export async function railOfDay(db: Db, day: ShopDayRow, offers: readonly ShopOfferRow[]): Promise<DayRail> {
   const { allocationId, specificationId } = day;
   if (!allocationId) return BARE;
-  const { basis, names } = await figuresOf(db, { allocationId, specificationId });
-  const fills = sumSides(spokenFor(basis, countsOf(offers.filter((each) => each.dayId === day.id))));
-  const rail = railOfPrimals(names, fills);
+  const figures = await figuresOf(db, { allocationId, specificationId });
+  const counts = countsOf(offers.filter((each) => each.dayId === day.id));
+  const key = JSON.stringify(counts);
+  if (figures.drawn?.counts === key) return figures.drawn.rail;
+  const rail = drawDay(figures, counts);
+  figures.drawn = { counts: key, rail };
+  return rail;
+}
+
+function drawDay({ basis, names }: Figures, counts: Counts): DayRail {
+  const rail = railOfPrimals(names, sumSides(spokenFor(basis, counts)));
   const sum = (key: 'grams' | 'soldGrams') => rail.primals.reduce((total, primal) => total + primal[key], 0);
   return { rail, productGrams: sum('grams'), soldGrams: sum('soldGrams') };
 }
@@ -58,16 +75,19 @@ function countsOf(offers: readonly ShopOfferRow[]): Counts {
 }
 
 /** What a box takes of one side, by the first day whose plan makes it. */
-export async function railOfBox(
-  db: Db,
-  days: readonly ShopDayRow[],
-  boxKindId: string,
-): Promise<{ boxes: number; rail: Rail }> {
+export async function railOfBox(db: Db, days: readonly ShopDayRow[], boxKindId: string): Promise<BoxRail> {
   for (const { allocationId, specificationId } of days) {
     if (!allocationId) continue;
-    const { basis, names } = await figuresOf(db, { allocationId, specificationId });
-    const takes = boxTakes(basis, boxKindId);
-    if (takes) return { boxes: takes.boxes, rail: railOfPrimals(names, takes.fills) };
+    const figures = await figuresOf(db, { allocationId, specificationId });
+    const known = figures.boxRails.get(boxKindId);
+    const rail = known === undefined ? drawBox(figures, boxKindId) : known;
+    figures.boxRails.set(boxKindId, rail);
+    if (rail) return rail;
   }
   return { boxes: 0, rail: BARE.rail };
+}
+
+function drawBox({ basis, names }: Figures, boxKindId: string): BoxRail | null {
+  const takes = boxTakes(basis, boxKindId);
+  return takes && { boxes: takes.boxes, rail: railOfPrimals(names, takes.fills) };
 }

@@ -55,6 +55,7 @@ function prepareSale(db: Db) {
       .from(offer)
       .innerJoin(cuttingDay, eq(cuttingDay.id, offer.cuttingDayId))
       .where(and(isCurrent, inArray(offer.kind, ['box', 'loose'])))
+      .orderBy(asc(offer.id))
       .prepare('shop_offers'),
   };
 }
