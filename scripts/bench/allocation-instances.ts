@@ -1,4 +1,3 @@
-import type { Day } from '#shared/domain/day.ts';
 import type {
   AllocationInput,
   BoxVariant,

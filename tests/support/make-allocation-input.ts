@@ -1,163 +1,68 @@
-import type {
-  AllocationInput,
-  BoxVariant,
-  Fit,
-  RecipeLine,
-  TradeLine,
-} from '#shared/engine/allocation/allocation-input.ts';
-import type { ChoiceSupply, SideName, SideSupply } from '#shared/engine/cutout/cutout-types.ts';
-import type { Cut } from '#shared/engine/figures/specification.ts';
+import type { AllocationInput, BoxVariant, RecipeLine } from '#shared/engine/allocation/allocation-input.ts';
+import type { CarcaseFacts } from '#shared/engine/cutout/cutout-types.ts';
+import { traditionalSide } from '#shared/engine/figures/traditional-side.ts';
+import { cutCarcase } from './make-carcase-facts.ts';
 
-export function makeCut(id: string, cut: Partial<Cut> = {}): Cut {
-  return {
-    id,
-    name: id,
-    description: '',
-    kind: 'cut',
-    primalId: null,
-    cooking: 'roast',
-    minPackGrams: 100,
-    maxPackGrams: 1_000,
-    upperLooseGrams: 1_000,
-    tenthPencePerKg: 12_000,
-    clearanceTenthPencePerKg: 4_000,
-    leanPpht: 90_000,
-    isSoldLoose: true,
-    mayBeMinced: false,
-    useByDays: 10,
-    ...cut,
-  };
+const STEAKS = ['sirloin-steak', 'rump-steak', 'rib-eye-steak', 'fillet-steak', 'rump-heart-steak', 'bistro-rump'];
+const ROASTS = ['topside-joint', 'silverside-joint', 'top-rump-joint', 'salmon-cut-joint'];
+const SLOW = ['braising-steak', 'diced-beef', 'feather-steak', 'shin-slices', 'leg-of-mutton-joint', 'brisket-joint'];
+
+function line(id: string, cutIds: string[], grams: readonly [least: number, most: number]): RecipeLine {
+  const [minGrams, maxGrams] = grams;
+  return { id, name: id, cutIds, minGrams, maxGrams, minPacks: 1, maxPacks: null, state: 'either' };
 }
 
-/** A choice of one primal with the same id; `ways`: grams by cut, by way. */
-export function makeChoice(
-  choiceId: string,
-  ways: Record<string, Record<string, number>>,
-  choice: Partial<ChoiceSupply> & { closed?: Record<string, string>; costs?: Record<string, number> } = {},
-): ChoiceSupply {
-  const { closed = {}, costs = {}, ...rest } = choice;
+export function makeBox(more: Partial<BoxVariant> & Pick<BoxVariant, 'id'>): BoxVariant {
   return {
-    choiceId,
-    name: choiceId,
-    quarter: 'fore',
-    primals: [{ primalId: choiceId, name: choiceId, grams: 20_000, hasVertebrae: false }],
-    ways: Object.entries(ways).map(([wayId, yields]) => ({
-      wayId,
-      name: wayId,
-      closedReason: closed[wayId] ?? null,
-      costPence: costs[wayId] ?? 0,
-      yields: Object.entries(yields).map(([cutId, grams]) => ({ primalId: choiceId, cutId, grams })),
-    })),
-    ...rest,
-  };
-}
-
-export function makeSide(
-  carcaseId: string,
-  side: SideName,
-  choices: ChoiceSupply[],
-  more: Partial<SideSupply> = {},
-): SideSupply {
-  return {
-    id: `${carcaseId}/${side}`,
-    carcaseId,
-    side,
-    grams: 150_000,
-    quarterGrams: { fore: 77_000, hind: 73_000 },
-    coldCarcaseGrams: 300_000,
-    conformation: 'R',
-    fatClass: '4L',
-    hangingDays: 21,
-    closedUnitReason: null,
-    choices,
+    kindId: more.id,
+    name: more.id,
+    pricePence: 14_500,
+    packagingPence: 450,
+    guaranteedGrams: 10_000,
+    floor: 0,
+    priority: 2,
+    steps: [{ boxes: 40, valuePence: 14_500 }],
+    lines: [
+      line('steaks', STEAKS, [1_600, 2_400]),
+      line('roasts', ROASTS, [2_000, 3_400]),
+      line('slow', SLOW, [2_200, 3_800]),
+      line('mince', ['mince'], [2_000, 4_000]),
+    ],
     ...more,
   };
 }
 
-export function makeLine(id: string, cutIds: string[], line: Partial<RecipeLine> = {}): RecipeLine {
+/** Two R4L carcases and two kinds of box that share their steaks; every loose cut sells at its price. */
+export function makeAllocationInput(
+  more: Partial<AllocationInput> = {},
+  carcases: readonly Partial<CarcaseFacts>[] = [{ id: 'one' }, { id: 'two' }],
+): AllocationInput {
+  const { cuts } = traditionalSide;
   return {
-    id,
-    name: id,
-    cutIds,
-    minGrams: 1_000,
-    maxGrams: 2_000,
-    minPacks: 0,
-    maxPacks: null,
-    state: 'fresh',
-    ...line,
-  };
-}
-
-export function makeBoxVariant(id: string, lines: RecipeLine[], box: Partial<BoxVariant> = {}): BoxVariant {
-  return {
-    id,
-    kindId: id,
-    name: id,
-    guaranteedGrams: 3_000,
-    lines,
-    pricePence: 4_500,
-    packagingPence: 300,
-    floor: 0,
-    priority: 1,
-    steps: [{ boxes: 100, valuePence: 4_500 }],
-    ...box,
-  };
-}
-
-export const ANY_SIDE: Fit = {
-  carcaseId: null,
-  side: null,
-  minSideGrams: null,
-  maxSideGrams: null,
-  conformations: null,
-  fatClasses: null,
-  minHangingDays: null,
-};
-
-type UnitLine = Extract<TradeLine, { kind: 'unit' }>;
-
-export function makeUnitLine(id: string, unit: UnitLine['unit'], line: Partial<UnitLine> = {}): TradeLine {
-  return {
-    id,
-    name: id,
-    tenthPencePerKg: 5_000,
-    isConfirmed: true,
-    priority: 1,
-    kind: 'unit',
-    unit,
-    quantity: 1,
-    fit: ANY_SIDE,
-    instructions: [],
-    ...line,
-  };
-}
-
-/** One carcase of two like sides with two choices, one box and nothing else. */
-export function makeAllocationInput(input: Partial<AllocationInput> = {}): AllocationInput {
-  const rib = () => makeChoice('rib', { 'on-the-bone': { roast: 9_000 }, boned: { steak: 5_000, trim: 2_000 } });
-  const chuck = () => makeChoice('chuck', { diced: { dice: 12_000, trim: 1_000 }, minced: { trim: 13_000 } });
-  return {
-    sides: (['left', 'right'] as const).map((side) => makeSide('carcase-1', side, [rib(), chuck()])),
-    cuts: [
-      makeCut('roast', { tenthPencePerKg: 20_000, clearanceTenthPencePerKg: 8_000 }),
-      makeCut('steak', { tenthPencePerKg: 32_000, clearanceTenthPencePerKg: 12_000 }),
-      makeCut('dice', { clearanceTenthPencePerKg: 6_000 }),
-      makeCut('trim', { kind: 'trim', clearanceTenthPencePerKg: 4_000, mayBeMinced: true, leanPpht: 86_000 }),
-      makeCut('mince', { kind: 'mince', clearanceTenthPencePerKg: 5_000, leanPpht: 85_000 }),
-    ],
+    sides: carcases.flatMap((facts) => cutCarcase(facts).sides),
+    cuts,
     stock: [],
-    boxes: [makeBoxVariant('box', [makeLine('stew', ['dice']), makeLine('roast', ['roast', 'steak'])])],
-    loose: [],
+    boxes: [
+      makeBox({ id: 'everyday' }),
+      makeBox({
+        id: 'grill',
+        pricePence: 12_000,
+        guaranteedGrams: 4_000,
+        steps: [{ boxes: 8, valuePence: 12_000 }],
+        lines: [line('steaks', STEAKS, [2_400, 3_200]), line('mince', ['mince'], [1_200, 2_000])],
+      }),
+    ],
+    loose: [{ cutId: 'mince', floor: 0, priority: 2, steps: [{ packs: 20, tenthPencePerKg: 11_200 }] }],
     trade: [],
     mince: {
       closedReason: null,
       productCutId: 'mince',
-      minLeanPpht: 85_000,
-      costTenthPencePerKg: 500,
-      allowedCutIds: ['trim'],
+      minLeanPpht: 82_000,
+      costTenthPencePerKg: 700,
+      allowedCutIds: cuts.filter((cut) => cut.mayBeMinced).map(({ id }) => id),
     },
     locks: [],
-    packingTenthPencePerKg: 400,
-    ...input,
+    packingTenthPencePerKg: 600,
+    ...more,
   };
 }

@@ -11,13 +11,13 @@ export type OtherSolver = (lpText: string, about: { gap: number; seconds: number
 
 async function withModel<Result>(
   lpText: string,
-  use: (file: string, folder: string) => Promise<Result>,
+  act: (file: string, folder: string) => Promise<Result>,
 ): Promise<Result> {
   const folder = await mkdtemp(path.join(os.tmpdir(), 'wholeside-model-'));
   try {
     const file = path.join(folder, 'model.lp');
     await writeFile(file, lpText);
-    return await use(file, folder);
+    return await act(file, folder);
   } finally {
     await rm(folder, { recursive: true });
   }

@@ -2,13 +2,7 @@ import { afterAll, expect, test } from 'vitest';
 import { createSolver } from '#server/allocation/solver/solver-pool.ts';
 import { allocate } from '#shared/engine/allocation/allocate.ts';
 import { costsOfLocks, limitsOfBoxes, worthOfCuts } from '#shared/engine/allocation/explain.ts';
-import {
-  makeAllocationInput,
-  makeBoxVariant,
-  makeChoice,
-  makeLine,
-  makeSide,
-} from '#tests/support/make-allocation-input.ts';
+import { makeAllocationInput, makeBoxVariant, makeChoice, makeLine, makeSide } from '#tests/support/make-small-day.ts';
 
 const solver = createSolver({ size: 1 });
 afterAll(() => solver.stop());
