@@ -9,7 +9,7 @@ export function lazyResolver<In extends FieldValues, Out>(
   loadSchema: () => Promise<z.ZodType<Out, In>>,
 ): Resolver<In, unknown, Out> {
   return async (values, context, options) => {
-    const [{ zodResolver }, schema] = await Promise.all([import('@hookform/resolvers/zod'), loadSchema()]);
+    const [{ zodResolver }, schema] = await Promise.all([import('./form-schemas.ts'), loadSchema()]);
     return zodResolver(schema)(values, context, options);
   };
 }

@@ -1,5 +1,6 @@
 import { useLoaderData, useRouter } from 'expo-router';
 import type { GenerateMetadataFunction } from 'expo-server';
+import { useEffect } from 'react';
 import { View } from 'react-native';
 import { NoDayOpen } from '#components/basket/no-day-open.tsx';
 import { CheckoutForm, type CheckoutFields } from '#components/checkout/checkout-form.tsx';
@@ -15,7 +16,7 @@ import { StateView } from '#components/ui/state-view.tsx';
 import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useBasketOrder } from '#hooks/basket-lines.ts';
-import { checkoutResolver } from '#hooks/checkout-resolver.ts';
+import { checkoutResolver, warmCheckoutRules } from '#hooks/checkout-resolver.ts';
 import { loadCounter, useCounter } from '#hooks/counter.ts';
 import { useMe } from '#hooks/me.ts';
 import { refusalOf, usePlaceOrder } from '#hooks/orders.ts';
@@ -66,6 +67,7 @@ function Checkout({ home, cuts }: { home: ShopHome; cuts: CutList }) {
   const { data: me } = useMe();
   const place = usePlaceOrder();
   usePageReturn(place.reset);
+  useEffect(warmCheckoutRules, []);
   if (!day) return <NoDayOpen />;
 
   const send = (fields: CheckoutFields, basketKey = basket.key) => {

@@ -11,7 +11,7 @@ import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { Settings } from '#shared/contracts/office.ts';
 
-const loadSchema = async () => (await import('#shared/contracts/office-schema.ts')).Settings;
+const loadSchema = async () => (await import('#hooks/form-schemas.ts')).office.Settings;
 
 export default function SettingsScreen() {
   const settings = useSettings();

@@ -13,7 +13,7 @@ import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { TradeAccount } from '#shared/contracts/trade.ts';
 
-const loadSchema = async () => (await import('#shared/contracts/trade-schema.ts')).applyForTradeSchema.body;
+const loadSchema = async () => (await import('#hooks/form-schemas.ts')).trade.applyForTradeSchema.body;
 
 const states = {
   applied: { kind: 'held', words: 'The farm looks at your application and writes to you. You can still correct it.' },

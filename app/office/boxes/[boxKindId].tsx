@@ -15,7 +15,7 @@ import { useTitle } from '#hooks/use-title.ts';
 import type { BoxKind, BoxKindEdit, Cut } from '#shared/contracts/office.ts';
 import { formatWeight } from '#shared/domain/words.ts';
 
-const loadSchema = async () => (await import('#shared/contracts/office-schema.ts')).BoxKindEdit;
+const loadSchema = async () => (await import('#hooks/form-schemas.ts')).office.BoxKindEdit;
 
 export default function BoxKindScreen() {
   const { boxKindId } = useLocalSearchParams<{ boxKindId: string }>();

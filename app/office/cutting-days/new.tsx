@@ -11,7 +11,7 @@ import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { NewCuttingDay } from '#shared/contracts/carcases.ts';
 
-const loadSchema = async () => (await import('#shared/contracts/carcases-schema.ts')).NewCuttingDay;
+const loadSchema = async () => (await import('#hooks/form-schemas.ts')).carcases.NewCuttingDay;
 
 export default function NewCuttingDayScreen() {
   const specifications = useSpecifications();

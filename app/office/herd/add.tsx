@@ -10,7 +10,7 @@ import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { NewAnimal } from '#shared/contracts/herd.ts';
 
-const loadSchema = async () => (await import('#shared/contracts/herd-schema.ts')).NewAnimal;
+const loadSchema = async () => (await import('#hooks/form-schemas.ts')).herd.NewAnimal;
 
 export default function AddAnimalScreen() {
   const add = useAddAnimal();

@@ -17,7 +17,7 @@ import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { TradeAccount } from '#shared/contracts/trade.ts';
 
-const loadPrices = async () => (await import('#shared/contracts/trade-schema.ts')).setTradePricesSchema.body;
+const loadPrices = async () => (await import('#hooks/form-schemas.ts')).trade.setTradePricesSchema.body;
 
 export default function TradeAccountScreen() {
   const { accountId } = useLocalSearchParams<{ accountId: string }>();

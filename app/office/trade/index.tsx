@@ -23,7 +23,7 @@ import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { Reservation } from '#shared/contracts/trade.ts';
 
-const loadRefusal = async () => (await import('#shared/contracts/trade-schema.ts')).refuseReservationSchema.body;
+const loadRefusal = async () => (await import('#hooks/form-schemas.ts')).trade.refuseReservationSchema.body;
 
 export default function OfficeTradeScreen() {
   const accounts = useTradeAccounts();

@@ -15,7 +15,7 @@ import { useTitle } from '#hooks/use-title.ts';
 import type { NewReservation, TradeDay } from '#shared/contracts/trade.ts';
 import { formatDay, formatDayTime } from '#shared/domain/words.ts';
 
-const loadSchema = async () => (await import('#shared/contracts/trade-schema.ts')).NewReservation;
+const loadSchema = async () => (await import('#hooks/form-schemas.ts')).trade.NewReservation;
 
 export default function ReserveScreen() {
   const { dayId } = useLocalSearchParams<{ dayId: string }>();

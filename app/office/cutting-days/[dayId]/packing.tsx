@@ -24,8 +24,8 @@ import { useTitle } from '#hooks/use-title.ts';
 import type { Pack, PackingDay } from '#shared/contracts/packs.ts';
 import { formatCount, formatDay, formatGrams, formatKilograms } from '#shared/domain/words.ts';
 
-const loadPacks = async () => (await import('#shared/contracts/packs-schema.ts')).addPacksSchema.body;
-const loadWeight = async () => (await import('#shared/contracts/packs-schema.ts')).reweighPackSchema.body;
+const loadPacks = async () => (await import('#hooks/form-schemas.ts')).packs.addPacksSchema.body;
+const loadWeight = async () => (await import('#hooks/form-schemas.ts')).packs.reweighPackSchema.body;
 
 export default function PackingScreen() {
   const { dayId } = useLocalSearchParams<{ dayId: string }>();
