@@ -1,6 +1,4 @@
 import type { PackingDay } from '#shared/contracts/packs.ts';
-import type { Recipe } from '#shared/engine/allocation/allocation-input.ts';
-import type { PlacedPack, WeighedPack } from '#shared/engine/box-fill/box-fill-types.ts';
 import { fillBoxes } from '#shared/engine/box-fill/fill-boxes.ts';
 import { AppError } from '#shared/errors.ts';
 import { lockCuttingDay } from '#server/carcases/cutting-day-queries.ts';
@@ -60,53 +58,15 @@ async function ofOrder(tx: Tx, dayId: string, isOurs: (job: Job) => boolean): Pr
   return { jobs: jobs.filter(isOurs), packs };
 }
 
-/** Each box by a recipe that asks for no more than the packs there are can give. */
+/** Each open box as full as the packs there are can make it. */
 function planPartBoxes({ jobs, packs }: PackingWork): Placement[] {
-  const free = freePacks(packs);
-  return jobs.flatMap((job): Placement[] => {
-    if (job.kind !== 'box' || describeFill(job).isFilled) return [];
-    const placements = fillPart(job, job.recipe, free).map(({ lineId, ...pack }) => ({ pack, job, boxLine: lineId }));
-    for (const { pack } of placements) {
-      free.splice(
-        free.findIndex((each) => each.id === pack.id),
-        1,
-      );
-    }
-    return placements;
+  const open = jobs.filter((job) => job.kind === 'box' && !describeFill(job).isFilled);
+  const boxes = open.flatMap((job) =>
+    job.kind === 'box' ? [{ id: job.id, recipe: job.recipe, earlierGiveAwayGrams: 0 }] : [],
+  );
+  const fill = fillBoxes({ boxes, packs: freePacks(packs), kept: [], seed: SEED });
+  return fill.boxes.flatMap((box) => {
+    const job = open.find((candidate) => candidate.id === box.boxId);
+    return job ? box.packs.map(({ lineId, ...pack }) => ({ pack, job, boxLine: lineId })) : [];
   });
-}
-
-/** Lowers the recipe by what each try still misses, until what is left of it can be met. */
-function fillPart(job: Job, recipe: Recipe, free: readonly WeighedPack[]): PlacedPack[] {
-  const fill = fillBoxes({
-    boxes: [{ id: job.id, recipe, earlierGiveAwayGrams: 0 }],
-    packs: free,
-    kept: [],
-    seed: SEED,
-  });
-  const [box] = fill.boxes;
-  if (!box) return [];
-  if (box.isFilled) return box.packs;
-  const lower = lowerRecipe(recipe, box);
-  return lower ? fillPart(job, lower, free) : [];
-}
-
-type Shortage = Pick<ReturnType<typeof fillBoxes>['boxes'][number], 'missing' | 'grams'>;
-
-/** Null once nothing of the recipe can be lowered any more. */
-function lowerRecipe(recipe: Recipe, { missing, grams }: Shortage): Recipe | null {
-  const lines = recipe.lines.map((line) => {
-    const short = missing.find((each) => each.lineId === line.id);
-    if (!short) return line;
-    const minGrams = Math.max(0, line.minGrams - short.shortGrams);
-    return { ...line, minGrams, minPacks: Math.max(0, line.minPacks - short.shortPacks) };
-  });
-  const guaranteedGrams = Math.min(recipe.guaranteedGrams, grams);
-  const isLower =
-    guaranteedGrams < recipe.guaranteedGrams ||
-    lines.some((line, index) => {
-      const before = recipe.lines[index];
-      return before && (line.minGrams < before.minGrams || line.minPacks < before.minPacks);
-    });
-  return isLower ? { ...recipe, lines, guaranteedGrams } : null;
 }

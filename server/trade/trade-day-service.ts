@@ -73,20 +73,29 @@ function describeUnits(side: SideSupply, { taken, prices }: UnitFacts): TradeCar
 
 type CutFacts = { published: AllocationRow | null; names: ProductNames; prices: readonly PriceRow[] };
 
-/** Cuts on the butcher's own list, with what the day makes of them: by the plan, or by the usual ways before there is one. */
+/**
+ * Cuts on the butcher's own list, with what the day makes of them. Where the plan has found a better use, what it could
+ * make: a reservation has the day worked out again.
+ */
 function describeCuts(figures: DayCutouts, { published, names, prices }: CutFacts): TradeDay['cuts'] {
   return prices.flatMap(({ product, tenthPencePerKg }) => {
     if (!product.startsWith('cut:')) return [];
     const cutId = product.slice('cut:'.length);
     const planned = published?.plan.plan.cuts.find((cut) => cut.cutId === cutId);
-    const madeGrams = planned?.madeGrams ?? usualGrams(figures, cutId);
+    const madeGrams = planned && planned.madeGrams > 0 ? planned.madeGrams : possibleGrams(figures, cutId);
     return madeGrams > 0 ? [{ cutId, name: names.get(product) ?? cutId, tenthPencePerKg, madeGrams }] : [];
   });
 }
 
-function usualGrams(figures: DayCutouts, cutId: string): number {
-  return figures.carcases
-    .flatMap((carcase) => carcase.cutout.nodes)
-    .filter((node) => node.cutId === cutId)
-    .reduce((sum, node) => sum + node.grams, 0);
+/** Of each choice of each side the open way that gives most of this cut. */
+function possibleGrams(figures: DayCutouts, cutId: string): number {
+  const choices = figures.sides.flatMap((side) => side.choices);
+  return choices.reduce((total, choice) => {
+    const open = choice.ways.filter((way) => way.closedReason === null);
+    return total + Math.max(0, ...open.map((way) => gramsOf(way.yields, cutId)));
+  }, 0);
+}
+
+function gramsOf(yields: readonly { cutId: string; grams: number }[], cutId: string): number {
+  return yields.filter((each) => each.cutId === cutId).reduce((sum, each) => sum + each.grams, 0);
 }

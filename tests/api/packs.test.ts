@@ -16,13 +16,15 @@ import {
 import { makeReservation } from '#tests/support/make-reservation.ts';
 import { makeTradeAccount } from '#tests/support/make-selling-day.ts';
 
+const TEXT: unknown = expect.any(String);
+
 let world: World;
 let bench: PackingBench;
 
 beforeAll(async () => {
   world = await startWorld();
   bench = await makePackingDay(world);
-}, 300_000);
+});
 afterAll(() => world.stop());
 
 function fillsOf(day: PackingDay, orderNo: number): Fill[] {
@@ -91,8 +93,6 @@ describe('weighing packs in', () => {
   });
 });
 
-const TEXT: unknown = expect.any(String);
-
 describe('a weight or a pack put right', () => {
   test('weighed again, goes back into the carcase and comes out at its true weight', async () => {
     const [wrong] = await bench.weigh('mince', [5_000]);
@@ -129,51 +129,45 @@ describe('filling the orders of a day', () => {
   const boxes = (quantity: number) => ({ offerId: bench.boxOffer.id, quantity });
 
   test('fills boxes, loose packs and butchers’ cuts, and names the box that it cannot fill and why', async () => {
-    const whole = await makeConfirmedOrder(world, bench, { lines: [boxes(1), looseLine()] });
-    const open = await makeConfirmedOrder(world, bench, { lines: [boxes(1)] });
+    const first = await makeConfirmedOrder(world, bench, { lines: [boxes(1)] });
+    const second = await makeConfirmedOrder(world, bench, { lines: [boxes(1)] });
+    const third = await makeConfirmedOrder(world, bench, { lines: [looseLine()] });
     const butcher = await world.signIn('butcher');
     const accountId = await makeTradeAccount(world.db, butcher.userId);
     const line = { kind: 'cut' as const, cutId: 'brisket-joint', grams: 4_000, tenthPencePerKg: 9_400 };
     const head = { accountId, cuttingDayId: bench.dayId, state: 'confirmed' as const };
     const reserved = await makeReservation(world.db, head, [line]);
 
-    const packs = await weighEverydayBox(bench);
-    await bench.weigh(bench.looseCutId, [(bench.looseOffer.upperGrams ?? 0) - 20]);
+    await weighEverydayBox(bench);
+    const looseGrams = (bench.looseOffer.upperGrams ?? 0) - 20;
+    await bench.weigh(bench.looseCutId, [looseGrams]);
     await bench.weigh('brisket-joint', [1_900, 2_000, 2_600]);
     await bench.weigh('mince', [500, 500, 500]);
     const day = await bench.fill();
 
-    expect(fillsOf(day, whole.orderNo).every((fill) => fill.isFilled)).toBe(true);
-    expect(fillsOf(day, whole.orderNo).find((fill) => fill.guaranteedGrams > 0)).toMatchObject({ grams: 4_300 });
-    expect((await getOrderRow(world, whole.token)).state).toBe('packed');
-    const [unfilled] = fillsOf(day, open.orderNo);
-    expect(unfilled).toMatchObject({ isFilled: false, grams: 0, packs: [] });
-    expect(unfilled?.missing.map((each) => each.line).sort()).toEqual(['A joint', 'For the stew']);
-    expect((await getOrderRow(world, open.token)).state).toBe('confirmed');
-    // 1.9 kg and 2.6 kg would be nearer to too much; 4.0 kg is met within the tolerance by the two lighter ones.
+    const everyday = [first, second].flatMap((order) => fillsOf(day, order.orderNo));
+    const unfilled = everyday.find((fill) => !fill.isFilled);
+    expect(everyday.find((fill) => fill.isFilled)).toMatchObject({ grams: 4_300, missing: [] });
+    expect(unfilled).toMatchObject({ grams: 0, packs: [] });
+    expect(unfilled?.missing.map((each) => each.line)).toContain('A joint');
+    expect(fillsOf(day, third.orderNo)).toMatchObject([{ isFilled: true, packs: [{ grams: looseGrams }] }]);
+    for (const { token, orderNo } of [first, second, third]) {
+      const state = orderNo === unfilled?.orderNo ? 'confirmed' : 'packed';
+      expect((await getOrderRow(world, token)).state).toBe(state);
+    }
     const [cuts] = fillsOf(day, reserved.reservationNo);
     expect(cuts?.isFilled).toBe(true);
     expect(Math.abs((cuts?.grams ?? 0) - 4_000)).toBeLessThanOrEqual(500);
-    expect(packs).toHaveLength(6);
     await expectBalanced();
   });
 
   test('leaves what is filled as it is when more packs come, and fills the rest', async () => {
     const before = (await bench.read()).fills.filter((fill) => fill.isFilled);
+    expect(before).not.toEqual([]);
     await bench.weigh('diced-beef', [650, 760]);
     await bench.weigh('topside-joint', [1_500]);
     const day = await bench.fill();
-    expect(
-      day.fills.filter((fill) =>
-        before.some(
-          (old) =>
-            old.orderNo === fill.orderNo &&
-            old.item === fill.item &&
-            old.copy === fill.copy &&
-            fill.packs.length === old.packs.length,
-        ),
-      ),
-    ).toHaveLength(before.length);
+    for (const fill of before) expect(day.fills).toContainEqual(fill);
     expect(day.fills.every((fill) => fill.isFilled)).toBe(true);
     for (const { id } of day.packs) expect((await liveAssignments(world, id)).length).toBeLessThanOrEqual(1);
     await expectBalanced();
@@ -181,16 +175,11 @@ describe('filling the orders of a day', () => {
 
   test('a pack that is lost opens its order again, and the next fill mends that box alone', async () => {
     const before = await bench.read();
-    const broken =
-      before.fills.find(
-        (fill) => fill.guaranteedGrams === 4_000 && fill.packs.some(({ cut }) => cut === 'Topside joint'),
-      ) ?? before.fills[0];
+    expect(before.fills.every((fill) => fill.isFilled)).toBe(true);
+    const broken = before.fills.find((fill) => fill.item === 'Everyday');
     const joint = before.packs.find((each) => each.orderNo === broken?.orderNo && each.cutId === 'topside-joint');
     const opened = await bench.lose(joint?.id ?? '', 'dropped');
     expect(fillsOf(opened, broken?.orderNo ?? 0).some((fill) => !fill.isFilled)).toBe(true);
-    const orders = await world.db.select().from(orderLine);
-    expect(orders.length).toBeGreaterThan(0);
-
     await bench.weigh('topside-joint', [1_350]);
     const mended = await bench.fill();
     expect(mended.fills.every((fill) => fill.isFilled)).toBe(true);

@@ -96,9 +96,8 @@ test('the coming days show each side with what may leave whole, at the butcherâ€
     expect(unit('side')).toMatchObject({ tenthPencePerKg: null, grams: side.sideGrams });
     expect((unit('hind')?.grams ?? 0) + (unit('fore')?.grams ?? 0)).toBe(side.sideGrams);
   }
-  expect(day?.cuts).toEqual([
-    expect.objectContaining({ cutId: 'brisket-joint', tenthPencePerKg: 9_400, madeGrams: NUMBER }),
-  ]);
+  expect(day?.cuts).toMatchObject([{ cutId: 'brisket-joint', tenthPencePerKg: 9_400 }]);
+  expect(day?.cuts[0]?.madeGrams).toBeGreaterThan(0);
 });
 
 describe('reserving, while automatic re-allocation is off', () => {
@@ -234,20 +233,20 @@ describe('reserving, while automatic re-allocation is on', () => {
   test(
     'what is sold or held is never taken',
     async () => {
-      const isGrill = and(eq(offer.cuttingDayId, farm.day.id), eq(offer.boxKindId, farm.grillId));
-      const [grill] = await world.db.select().from(offer).where(isGrill);
-      const most = grill?.offered ?? 0;
+      const isEveryday = and(eq(offer.cuttingDayId, farm.day.id), eq(offer.boxKindId, farm.everydayId));
+      const [everyday] = await world.db.select().from(offer).where(isEveryday);
+      const most = everyday?.offered ?? 0;
       expect(most).toBeGreaterThan(1);
       await world.db
         .update(offer)
         .set({ sold: most - 1, held: 1 })
-        .where(isGrill);
+        .where(isEveryday);
       const before = await readOffers();
-      // The steaks of these boxes lie in the hindquarter that is left.
+      // The joints of these boxes lie in the hindquarter that is left.
       const refused = await reserve(ask([HIND]));
       expect(refused).toMatchObject({ state: 'refused' });
       expect(await readOffers()).toEqual(before);
-      await world.db.update(offer).set({ sold: 0, held: 0 }).where(isGrill);
+      await world.db.update(offer).set({ sold: 0, held: 0 }).where(isEveryday);
     },
     SLOW,
   );

@@ -1,11 +1,11 @@
 import { and, eq } from 'drizzle-orm';
 import { offer } from '#db/schema/allocations.ts';
 import { packAssignment, stockMovement } from '#db/schema/packs.ts';
-import type { Allocation } from '#shared/contracts/allocation.ts';
 import type { Pack, PackingDay } from '#shared/contracts/packs.ts';
 import { listBalances } from '#server/carcases/ledger-queries.ts';
 import type { World } from './harness.ts';
 import { makeSellingDay } from './make-selling-day.ts';
+import { publishByHand } from './publish-by-hand.ts';
 
 export type PackingBench = Awaited<ReturnType<typeof makePackingDay>>;
 
@@ -20,10 +20,7 @@ export async function makePackingDay(world: World) {
   const dayId = farm.day.id;
   const carcaseId = farm.carcases[0]?.id ?? '';
   const path = `/api/cutting-days/${dayId}`;
-  const plan = (await world.request(owner).post(`${path}/allocations`).send({ locks: [] })).body as Allocation;
-  const wish = { figuresVersion: plan.figuresVersion };
-  await world.request(owner).post(`/api/allocations/${plan.id}/publish`).send(wish).expect(200);
-
+  await publishByHand(world, dayId);
   const offers = await world.db.select().from(offer).where(eq(offer.cuttingDayId, dayId));
   const boxOffer = offers.find((each) => each.boxKindId === farm.everydayId);
   const looseOffer = offers.find(
