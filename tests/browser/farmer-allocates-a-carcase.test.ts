@@ -125,7 +125,7 @@ test('the farmer, with four animals in the field, plans a day, locks one way and
   await planDay(page, day);
 
   const booking = page.getByRole('form', { name: 'Book animals' });
-  await booking.getByLabel('Kill day').fill(killDay);
+  await booking.getByRole('textbox', { name: 'Kill day' }).fill(killDay);
   for (const animal of await booking.getByRole('checkbox').all()) await animal.check();
   await booking.getByRole('button', { name: /^Book 4/ }).click();
   await page.getByRole('table', { name: 'Carcases of this day' }).getByRole('link').nth(3).waitFor();
