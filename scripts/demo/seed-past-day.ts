@@ -3,13 +3,16 @@ import type { Chance } from '#db/seed/chance.ts';
 import type { DemoPeople } from '#db/seed/demo-people.ts';
 import { mailMessage } from '#db/schema/mail.ts';
 import { customerOrder } from '#db/schema/orders.ts';
+import { pack } from '#db/schema/packs.ts';
 import { findPublishedAllocation } from '#server/allocation/allocation-queries.ts';
+import { getCarcase } from '#server/carcases/carcase-service.ts';
 import { closeCuttingDay } from '#server/carcases/close-day-service.ts';
+import { recordMovements } from '#server/carcases/ledger-queries.ts';
 import { confirmCollectionMails } from '#server/collections/collection-mails.ts';
 import { markOrder } from '#server/collections/run-sheet.ts';
-import type { Deps } from '#server/deps.ts';
+import type { Deps, Tx } from '#server/deps.ts';
 import { fillOrders } from '#server/packs/fill-service.ts';
-import { addPacks } from '#server/packs/pack-service.ts';
+import { markCut } from '#server/packs/pack-queries.ts';
 import { readPackingDay } from '#server/packs/packing-day.ts';
 import { addDays, londonInstant } from '#shared/domain/day.ts';
 import { weighPacks } from './weigh-packs.ts';
@@ -29,18 +32,57 @@ export async function seedPastDay(deps: Deps, chance: Chance, { day, people }: P
   await closeCuttingDay(after, ownerId, { dayId: day.id, version: 1 });
 }
 
+/** As the cold room weighs packs in, but all of the day in one go. */
 async function packEverything(
   deps: Deps,
   chance: Chance,
   { dayId, packerId }: { dayId: string; packerId: string },
 ): Promise<void> {
-  const { cuttingList } = await readPackingDay(deps.db, dayId);
+  const { cuttingList, carcases } = await readPackingDay(deps.db, dayId);
   const published = await findPublishedAllocation(deps.db, dayId);
   const mince = published?.input.input.mince?.productCutId ?? '';
   const plan = published?.plan.plan.cuts ?? [];
-  for (const batch of weighPacks(chance, { cuttingList, plan, mince })) {
-    await addPacks(deps, packerId, { dayId, ...batch });
-  }
+  const useBy = new Map(published?.input.input.cuts.map((cut) => [cut.id, cut.useByDays]));
+  const packedOn = deps.clock.today();
+  const rows = weighPacks(chance, { cuttingList, plan, mince }).flatMap(({ carcaseId, cutId, grams }) =>
+    grams.map((each) => ({
+      cuttingDayId: dayId,
+      carcaseId,
+      cutId,
+      grams: each,
+      code: makeCode(chance),
+      packedOn,
+      useBy: addDays(packedOn, useBy.get(cutId) ?? 5),
+    })),
+  );
+  await deps.db.transaction(async (tx) => {
+    for (const { id } of carcases) await enterLedger(tx, { carcaseId: id, packerId });
+    const packs = await tx.insert(pack).values(rows).returning();
+    await recordMovements(
+      tx,
+      packs.map(({ id, carcaseId, grams }) => ({
+        carcaseId,
+        packId: id,
+        fromPlace: 'carcase' as const,
+        toPlace: 'chiller' as const,
+        grams,
+        reason: 'packed',
+        byUserId: packerId,
+      })),
+    );
+    for (const { id } of carcases) await markCut(tx, id);
+  });
+}
+
+async function enterLedger(tx: Tx, { carcaseId, packerId }: { carcaseId: string; packerId: string }): Promise<void> {
+  const { coldGrams } = await getCarcase(tx, carcaseId);
+  const movement = { carcaseId, fromPlace: null, toPlace: 'carcase' as const, byUserId: packerId };
+  await recordMovements(tx, [{ ...movement, grams: coldGrams, reason: 'cold weight' }]);
+}
+
+function makeCode(chance: Chance): string {
+  const alphabet = [...'23456789ABCDEFGHJKLMNPQRSTUVWXYZ'];
+  return Array.from({ length: 10 }, () => chance.pick(alphabet)).join('');
 }
 
 /** Everybody is told and comes for their box, but for one who forgot. What could not be filled was settled before. */
