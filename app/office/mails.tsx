@@ -12,7 +12,7 @@ import { useMails, useResendMail } from '#hooks/collections.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import { formatCount } from '#shared/domain/words.ts';
 
-const states = ['queued', 'sent', 'failed', 'bounced'].map((value) => ({ value, label: value }));
+const states = ['', 'queued', 'sent', 'failed', 'bounced'].map((value) => ({ value, label: value || 'all' }));
 
 export default function MailsScreen() {
   const mails = useMails();
@@ -38,15 +38,7 @@ export default function MailsScreen() {
               />
             ) : (
               <>
-                <Select
-                  label="Show"
-                  optional
-                  width="short"
-                  placeholder="all"
-                  value={state}
-                  options={states}
-                  onChange={setState}
-                />
+                <Select label="Show" width="short" value={state} options={states} onChange={setState} />
                 <OutboxTable
                   mails={shown}
                   onResend={(mailId) => resend.mutate(mailId)}

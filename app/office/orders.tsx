@@ -17,8 +17,8 @@ import type { OrderSummary } from '#shared/contracts/orders.ts';
 import { ORDER_STATES } from '#shared/domain/order-state.ts';
 import { formatCount, formatDayWithYear, formatMoney } from '#shared/domain/words.ts';
 
-const loadReason = async () => (await import('#shared/contracts/orders-schema.ts')).cancelOrderByOwnerSchema.body;
-const states = ORDER_STATES.map((value) => ({ value, label: value }));
+const loadReason = async () => (await import('#hooks/form-schemas.ts')).orders.cancelOrderByOwnerSchema.body;
+const states = [{ value: '', label: 'all states' }, ...ORDER_STATES.map((value) => ({ value, label: value }))];
 
 export default function OrdersScreen() {
   const [dayId, setDayId] = useState('');
@@ -40,20 +40,11 @@ export default function OrdersScreen() {
               <View style={css('w-fields')}>
                 <Select
                   label="Cutting day"
-                  optional
-                  placeholder="all days"
                   value={dayId}
-                  options={dayOptions}
+                  options={[{ value: '', label: 'all days' }, ...dayOptions]}
                   onChange={setDayId}
                 />
-                <Select
-                  label="State"
-                  optional
-                  placeholder="all states"
-                  value={state}
-                  options={states}
-                  onChange={setState}
-                />
+                <Select label="State" value={state} options={states} onChange={setState} />
               </View>
               <OrderTable orders={shown} onCancel={setCancelling} />
             </>

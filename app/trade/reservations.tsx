@@ -64,7 +64,7 @@ export default function ReservationsScreen() {
             {data.reservations.length === 0 ? (
               <EmptyState title="Nothing reserved yet" words="Choose from the coming carcases." />
             ) : (
-              <ReservationList reservations={data.reservations} actionsOf={actionsOf} />
+              <ReservationList level={2} reservations={data.reservations} actionsOf={actionsOf} />
             )}
           </View>
         );

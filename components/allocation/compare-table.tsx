@@ -11,14 +11,16 @@ type CompareTableProps = {
   nowTitle: string;
   before: Allocation | null;
   now: Allocation;
+  /** Counts what goes on sale rather than what the plans make. */
+  onSale?: boolean;
 };
 
 /** Two answers side by side, in boxes, packs and pounds. */
-export function CompareTable({ beforeTitle, nowTitle, before, now }: CompareTableProps) {
+export function CompareTable({ beforeTitle, nowTitle, before, now, onSale = false }: CompareTableProps) {
   return (
     <Table<Row>
       caption={`${beforeTitle} against ${nowTitle.toLowerCase()}`}
-      rows={compareRows(before, now)}
+      rows={compareRows(before, now, onSale)}
       rowKey={(row) => row.id}
       columns={[
         { id: 'name', title: 'What', cell: (row) => row.name },
@@ -31,11 +33,16 @@ export function CompareTable({ beforeTitle, nowTitle, before, now }: CompareTabl
 }
 
 /** Box kinds and loose cuts of either answer; one that only the other has counts as none. */
-export function compareRows(before: Allocation | null, now: Allocation): Row[] {
+export function compareRows(before: Allocation | null, now: Allocation, onSale = false): Row[] {
+  const countOf = (made: number, promised: number | null) => (onSale ? (promised ?? made) : made);
   const counts = (plan: Allocation | null) =>
     new Map([
-      ...(plan?.boxes ?? []).map((box) => [box.boxKindId, { name: box.name, count: box.count }] as const),
-      ...(plan?.loose ?? []).map((row) => [row.cutId, { name: `${row.name}, loose`, count: row.packs }] as const),
+      ...(plan?.boxes ?? []).map(
+        (box) => [box.boxKindId, { name: box.name, count: countOf(box.count, box.promised) }] as const,
+      ),
+      ...(plan?.loose ?? []).map(
+        (row) => [row.cutId, { name: `${row.name}, loose`, count: countOf(row.packs, row.promised) }] as const,
+      ),
     ]);
   const was = counts(before);
   const is = counts(now);

@@ -14,8 +14,9 @@ const weighed: readonly { id: GramsKey; title: string }[] = [
   { id: 'leftGrams', title: 'Over' },
 ];
 
-/** Each cut: kilograms in, where they go, what is left, and what one more would be worth. */
+/** Each cut that the day makes: kilograms in, where they go, what is left, and what one more would be worth. */
 export function CutTable({ cuts }: { cuts: readonly CutRow[] }) {
+  const moved = cuts.filter((cut) => weighed.some(({ id }) => cut[id] !== 0));
   const sum = (id: GramsKey) => cuts.reduce((total, cut) => total + cut[id], 0);
   const columns: Column<CutRow>[] = [
     { id: 'name', title: 'Cut', cell: (cut) => cut.name, foot: 'All cuts' },
@@ -30,14 +31,14 @@ export function CutTable({ cuts }: { cuts: readonly CutRow[] }) {
       id: 'worth',
       title: 'One more kg',
       align: 'end',
-      cell: (cut) => (cut.worthPencePerKg === null ? 'not asked' : formatRate(cut.worthPencePerKg * 10)),
+      cell: (cut) => (cut.worthPencePerKg === null ? '–' : formatRate(cut.worthPencePerKg * 10)),
       foot: '',
     },
   ];
   return (
     <Table
       caption="Kilograms of each cut: in, out and over"
-      rows={cuts}
+      rows={moved}
       rowKey={(cut) => cut.cutId}
       columns={columns}
     />

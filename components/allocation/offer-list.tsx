@@ -4,8 +4,10 @@ import { Figure } from '#components/ui/figure.tsx';
 import { Text } from '#components/ui/text.tsx';
 import type { Allocation } from '#shared/contracts/allocation.ts';
 
+type OfferListProps = Pick<Allocation, 'boxes' | 'isExplained'>;
+
 /** The boxes on offer, what is spoken for, and what holds back the next one. */
-export function OfferList({ boxes }: { boxes: Allocation['boxes'] }) {
+export function OfferList({ boxes, isExplained }: OfferListProps) {
   return (
     <View role="list" style={css('w-rows')}>
       {boxes.map((box) => (
@@ -15,10 +17,13 @@ export function OfferList({ boxes }: { boxes: Allocation['boxes'] }) {
             <Figure>{box.count}</Figure>
           </View>
           <Text size="small" tone="quiet">
-            {box.limitedBy.length > 0
-              ? `Limited by ${box.limitedBy.join('; ')}`
-              : 'Limited by what people are likely to buy'}
+            {isExplained ? limitWords(box.limitedBy) : 'What limits it is being worked out …'}
           </Text>
+          {box.promised === null || box.promised === box.count ? null : (
+            <Text size="small" tone="waiting" figures>
+              {`${box.promised} may be put on sale while weights are estimates`}
+            </Text>
+          )}
           {box.sold + box.held > 0 ? (
             <Text size="small" figures>
               {[box.sold > 0 ? `${box.sold} sold` : '', box.held > 0 ? `${box.held} held` : '']
@@ -30,4 +35,8 @@ export function OfferList({ boxes }: { boxes: Allocation['boxes'] }) {
       ))}
     </View>
   );
+}
+
+function limitWords(limitedBy: readonly string[]): string {
+  return limitedBy.length > 0 ? `Limited by ${limitedBy.join('; ')}` : 'Limited by what people are likely to buy';
 }

@@ -3,6 +3,7 @@ import { css } from '#components/theme/css.ts';
 import { Table } from '#components/ui/table.tsx';
 import type { Allocation } from '#shared/contracts/allocation.ts';
 import { formatCount, formatWeight } from '#shared/domain/words.ts';
+import { boxesOnSale, nameTradeLine } from './plan-words.ts';
 
 /** What leaves beside the boxes: loose packs and the butchers' lines. */
 export function Outlets({ loose, trade }: Pick<Allocation, 'loose' | 'trade'>) {
@@ -11,7 +12,7 @@ export function Outlets({ loose, trade }: Pick<Allocation, 'loose' | 'trade'>) {
       <Table
         caption="Loose packs"
         captionShown
-        rows={loose}
+        rows={loose.filter((row) => row.packs + row.sold + row.held > 0)}
         rowKey={(row) => row.cutId}
         empty="No loose packs in this plan."
         columns={[
@@ -28,7 +29,7 @@ export function Outlets({ loose, trade }: Pick<Allocation, 'loose' | 'trade'>) {
         rowKey={(row) => `${row.reservationNo} ${row.name}`}
         empty="Nothing is reserved by a butcher."
         columns={[
-          { id: 'name', title: 'Line', cell: (row) => row.name },
+          { id: 'name', title: 'Line', cell: nameTradeLine },
           { id: 'to', title: 'To', cell: (row) => `${row.businessName}, no. ${row.reservationNo}` },
           { id: 'grams', title: 'Weight', align: 'end', cell: (row) => formatWeight(row.grams) },
         ]}
@@ -37,9 +38,8 @@ export function Outlets({ loose, trade }: Pick<Allocation, 'loose' | 'trade'>) {
   );
 }
 
-/** `61 boxes, 20 loose packs`. */
-export function describeOutlets({ boxes, loose }: Pick<Allocation, 'boxes' | 'loose'>): string {
-  const boxTotal = boxes.reduce((sum, box) => sum + box.count, 0);
-  const packTotal = loose.reduce((sum, row) => sum + row.packs, 0);
-  return `${formatCount(boxTotal, 'box', 'boxes')} and ${formatCount(packTotal, 'loose pack')}`;
+/** `61 boxes and 20 loose packs`, as they go on sale. */
+export function describeOutlets(plan: Pick<Allocation, 'boxes' | 'loose'>): string {
+  const packs = plan.loose.reduce((sum, row) => sum + (row.promised ?? row.packs), 0);
+  return `${formatCount(boxesOnSale(plan), 'box', 'boxes')} and ${formatCount(packs, 'loose pack')}`;
 }

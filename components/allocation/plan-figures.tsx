@@ -17,6 +17,7 @@ export function PlanFigures({ plan }: { plan: Allocation }) {
           term: plan.isProven ? 'Proven within' : 'Best so far, within',
           value: `${(plan.gapBasisPoints / 100).toFixed(2)} %`,
         },
+        ...(plan.promise ? [{ term: 'Can be filled', value: `${plan.promise.confidencePercent} % sure` }] : []),
         { term: 'Worked out in', value: `${(plan.solveMs / 1000).toFixed(1)} s` },
       ]}
     />

@@ -3,6 +3,7 @@ import { css } from '#components/theme/css.ts';
 import { Notice } from '#components/ui/notice.tsx';
 import { Text } from '#components/ui/text.tsx';
 import type { Allocation } from '#shared/contracts/allocation.ts';
+import { formatWeight } from '#shared/domain/words.ts';
 
 /** What the owner must know before trusting or publishing the plan. */
 export function PlanNotices({ plan }: { plan: Allocation }) {
@@ -23,6 +24,14 @@ export function PlanNotices({ plan }: { plan: Allocation }) {
           next="Work it out again before publishing."
         />
       )}
+      {plan.promise?.isFloorAtRisk ? (
+        <Notice
+          kind="held"
+          title="What is sold already may not be filled, if the carcases come out light."
+          kept={`At worst ${formatWeight(plan.promise.worstShortGrams)} would be missing.`}
+          next="Sell no more of it, or book another animal. Weights settle it."
+        />
+      ) : null}
       {plan.shortfalls.length > 0 ? (
         <Notice
           kind="error"

@@ -30,8 +30,17 @@ export function leftOverGrams(plan: Pick<Allocation, 'cuts'>): number {
   return plan.cuts.reduce((sum, cut) => sum + cut.leftGrams, 0);
 }
 
-export function boxCount(plan: Pick<Allocation, 'boxes'>): number {
-  return plan.boxes.reduce((sum, box) => sum + box.count, 0);
+/** Boxes that publishing puts on sale: fewer than the plan makes while weights are estimates. */
+export function boxesOnSale(plan: Pick<Allocation, 'boxes'>): number {
+  return plan.boxes.reduce((sum, box) => sum + (box.promised ?? box.count), 0);
+}
+
+const QUARTERS: Record<string, string> = { side: 'Side', fore: 'Forequarter', hind: 'Hindquarter' };
+
+/** What goes to a butcher, without the business that stands beside it anyway. */
+export function nameTradeLine({ name, businessName }: Allocation['trade'][number]): string {
+  const bare = name.replace(`, ${businessName}`, '');
+  return QUARTERS[bare] ?? bare;
 }
 
 /** `+ £41.20`, `− £18.60`, `no difference`. */

@@ -34,7 +34,7 @@ export function PublishSheet({ open, plan, published, busy, error, onPublish, on
           ? 'From now on the shop and the butchers see these figures instead. What is sold or held stays sold or held.'
           : 'From now on the shop and the butchers can order from this day.'}
       </Text>
-      <CompareTable beforeTitle="On sale now" nowTitle="After this" before={published} now={plan} />
+      <CompareTable onSale beforeTitle="On sale now" nowTitle="After this" before={published} now={plan} />
       <ProblemNotice error={error} title="Nothing was published." />
     </Sheet>
   );

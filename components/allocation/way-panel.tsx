@@ -23,11 +23,13 @@ type WayPanelProps = {
   primalIds: readonly string[];
   /** The locks as they are set on the screen, worked out or not. */
   locks: readonly Lock[];
+  /** False while the cost of the locks is still being worked out. */
+  isExplained: boolean;
   onLock: (choiceId: string, wayId: string | undefined) => void;
 };
 
 /** How one primal of one side is cut, and the owner's hand on it. */
-export function WayPanel({ side, primalIds, locks, onLock }: WayPanelProps) {
+export function WayPanel({ side, primalIds, locks, isExplained, onLock }: WayPanelProps) {
   const choices = choicesOf(side, primalIds);
   return (
     <View
@@ -49,7 +51,9 @@ export function WayPanel({ side, primalIds, locks, onLock }: WayPanelProps) {
               choices={[freeChoice(choice), ...choice.ways.map((way) => wayChoice(choice, way, lock))]}
               onChange={(value) => onLock(choice.choiceId, value === FREE ? undefined : value)}
             />
-            {choice.isLocked && lock?.wayId === choice.wayId ? <LockCost pence={choice.lockCostPence} /> : null}
+            {choice.isLocked && lock?.wayId === choice.wayId ? (
+              <LockCost pence={choice.lockCostPence} isExplained={isExplained} />
+            ) : null}
           </View>
         );
       })}
@@ -78,8 +82,8 @@ function wayChoice(choice: PlannedChoice, way: PlannedChoice['ways'][number], lo
   };
 }
 
-function LockCost({ pence }: { pence: number | null }) {
-  if (pence === null) return null;
+function LockCost({ pence, isExplained }: { pence: number | null; isExplained: boolean }) {
+  if (pence === null) return isExplained ? null : <Text live="status">What this lock costs is being worked out …</Text>;
   return (
     <Text weight="bold" figures live="status">
       {pence > 0 ? `This lock costs ${formatMoney(pence)}.` : 'This lock costs nothing.'}

@@ -40,7 +40,7 @@ export function BookingForm({ control, animals, latestKillDay, onSubmit, busy }:
     <FormFrame name="Book animals" onSubmit={onSubmit}>
       <View style={css('w-fields')}>
         <FormDay control={control} name="killDay" label="Kill day" max={latestKillDay} />
-        <Field label="Find by ear tag" optional value={typed} onChangeText={setTyped} />
+        <Field label="Find by ear tag" required={false} value={typed} onChangeText={setTyped} />
       </View>
       <View role="group" aria-label="Animals in the field" style={css('w-tiles')}>
         {shown.slice(0, SHOWN + chosen.size).map(({ id, label, note }) => (

@@ -12,17 +12,21 @@ import { differenceWords } from './weight-difference.ts';
 
 export type Weights = { version: number; weights: { path: string; grams: number | null }[] };
 
+export type WeighingDepth = 'quarters' | 'primals' | 'cuts';
+
 type WeightsFormProps = {
   control: Control<Weights>;
   /** The parts of one side that may be weighed, in the order of the form's rows. */
   nodes: readonly CutoutNode[];
+  /** How far down the parts are shown; what was typed further down is kept. */
+  depth: WeighingDepth;
   onSubmit: () => void;
   busy: boolean;
 };
 
 /** Weights read off the scale. What is left empty stays an estimate; an emptied field takes its weight back. */
-export function WeightsForm({ control, nodes, onSubmit, busy }: WeightsFormProps) {
-  const groups = groupsOf(nodes);
+export function WeightsForm({ control, nodes, depth, onSubmit, busy }: WeightsFormProps) {
+  const groups = groupsOf(nodes, depth);
   return (
     <FormFrame name="Weights" onSubmit={onSubmit}>
       {groups.map((group) => (
@@ -52,7 +56,7 @@ function WeightRow({ control, node, at }: { control: Control<Weights>; node: Cut
         unit="kilograms"
         label={node.name}
         hint={`foreseen ${formatGrams(node.estimatedGrams)}`}
-        optional
+        required={false}
       />
       <Text size="small" tone="quiet" figures>
         {differenceWords(grams, node.estimatedGrams)}
@@ -63,16 +67,15 @@ function WeightRow({ control, node, at }: { control: Control<Weights>; node: Cut
 
 type Row = { node: CutoutNode; at: number };
 
-/** Each primal with its lines; sides and quarters stand first. */
-function groupsOf(nodes: readonly CutoutNode[]): { name: string; rows: Row[] }[] {
+/** Sides and quarters, then the primals, each with its lines when the cuts are weighed. */
+function groupsOf(nodes: readonly CutoutNode[], depth: WeighingDepth): { name: string; rows: Row[] }[] {
   const rows = nodes.map((node, at) => ({ node, at }));
   const whole = rows.filter(({ node }) => node.level === 'side' || node.level === 'quarter');
   const primals = rows.filter(({ node }) => node.level === 'primal');
-  return [
-    { name: 'Side and quarters', rows: whole },
-    ...primals.map((primal) => ({
-      name: primal.node.name,
-      rows: [primal, ...rows.filter(({ node }) => node.level === 'line' && node.parentPath === primal.node.path)],
-    })),
-  ].filter((group) => group.rows.length > 0);
+  if (depth === 'quarters') return [{ name: 'Side and quarters', rows: whole }];
+  if (depth === 'primals') return [{ name: 'Primals', rows: primals }];
+  return primals.map((primal) => ({
+    name: primal.node.name,
+    rows: rows.filter(({ node }) => node.level === 'line' && node.parentPath === primal.node.path),
+  }));
 }

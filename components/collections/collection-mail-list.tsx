@@ -28,19 +28,19 @@ export function CollectionMailList(props: CollectionMailListProps) {
             <View style={css('w-grow')}>
               <Choice mail={mail} {...props} />
             </View>
-            {mail.mail ? <MailState state={mail.mail.state} /> : <Waiting holdBack={mail.holdBack} />}
+            <View style={css('w-row')}>
+              {mail.mail ? <MailState state={mail.mail.state} /> : <Waiting holdBack={mail.holdBack} />}
+              <Button
+                kind="quiet"
+                small
+                label="Preview"
+                name={`Preview the mail of order ${mail.orderNo}`}
+                onPress={() => props.onPreview(mail)}
+              />
+              <Resend mail={mail} {...props} />
+            </View>
           </View>
           {mail.mail?.lastError ? <Text tone="danger">{mail.mail.lastError}</Text> : null}
-          <View style={css('w-row')}>
-            <Button
-              kind="quiet"
-              small
-              label="Preview"
-              name={`Preview the mail of order ${mail.orderNo}`}
-              onPress={() => props.onPreview(mail)}
-            />
-            <Resend mail={mail} {...props} />
-          </View>
         </View>
       ))}
     </View>

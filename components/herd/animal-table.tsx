@@ -2,11 +2,14 @@ import { Badge } from '#components/ui/badge.tsx';
 import { Table } from '#components/ui/table.tsx';
 import { TextLink } from '#components/ui/text-link.tsx';
 import type { Animal } from '#shared/contracts/herd.ts';
+import type { Day } from '#shared/domain/day.ts';
 import { formatEarTag } from '#shared/domain/ear-tag.ts';
 import { formatCount, formatDayWithYear, formatKilograms } from '#shared/domain/words.ts';
 import { describeAnimal } from './animal-state.ts';
 
-export function AnimalTable({ animals }: { animals: readonly Animal[] }) {
+type AnimalTableProps = { animals: readonly Animal[]; today: Day | undefined };
+
+export function AnimalTable({ animals, today }: AnimalTableProps) {
   return (
     <Table
       caption="The herd"
@@ -36,7 +39,7 @@ export function AnimalTable({ animals }: { animals: readonly Animal[] }) {
           id: 'state',
           title: 'State',
           cell: (animal) => {
-            const { kind, words } = describeAnimal(animal);
+            const { kind, words } = describeAnimal(animal, today);
             return animal.carcase ? (
               <TextLink href={`/office/carcases/${animal.carcase.id}`} tone="ink">
                 {words}

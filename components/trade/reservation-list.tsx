@@ -15,17 +15,19 @@ type ReservationListProps = {
   reservations: readonly Reservation[];
   /** For the farm, which sees those of all butchers. */
   withBusiness?: boolean;
+  /** Where the list stands in the outline of its page. */
+  level?: 2 | 3;
   /** What can be done about one of them now. */
   actionsOf: (reservation: Reservation) => ReactNode;
 };
 
-export function ReservationList({ reservations, withBusiness = false, actionsOf }: ReservationListProps) {
+export function ReservationList({ reservations, withBusiness = false, level = 3, actionsOf }: ReservationListProps) {
   return (
     <View style={css('w-rows')}>
       {reservations.map((reservation) => (
         <View key={reservation.id} style={css('w-stack')}>
           <View style={css('w-row-between')}>
-            <Heading level={3}>
+            <Heading level={level} look="sub">
               {`${reservation.reservationNo}${withBusiness ? ` ${reservation.businessName}` : ''}, for ${formatDay(reservation.day)}`}
             </Heading>
             <Badge kind={kinds[reservation.state]}>{reservation.state}</Badge>

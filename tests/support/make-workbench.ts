@@ -58,6 +58,8 @@ export function makeAllocation(more: Partial<Allocation> = {}): Allocation {
     figuresVersion: 4,
     isOutOfDate: false,
     isProven: true,
+    isExplained: true,
+    promise: null,
     gapBasisPoints: 1,
     solveMs: 900,
     contributionPence: 273_100,
@@ -67,10 +69,18 @@ export function makeAllocation(more: Partial<Allocation> = {}): Allocation {
     locks: [{ carcaseId: CARCASE, side: 'left', choiceId: 'fore-rib', wayId: 'bone-in' }],
     sides: [makeSide()],
     boxes: [
-      { boxKindId: 'a', name: 'Hearth', count: 38, sold: 4, held: 1, limitedBy: ['Steaks: 300 g short for one more'] },
-      { boxKindId: 'b', name: 'Table', count: 14, sold: 0, held: 0, limitedBy: [] },
+      {
+        boxKindId: 'a',
+        name: 'Hearth',
+        count: 38,
+        promised: 35,
+        sold: 4,
+        held: 1,
+        limitedBy: ['Steaks: 300 g short for one more'],
+      },
+      { boxKindId: 'b', name: 'Table', count: 14, promised: null, sold: 0, held: 0, limitedBy: [] },
     ],
-    loose: [{ cutId: 'mince', name: 'Mince', packs: 20, grams: 10_000, sold: 3, held: 0 }],
+    loose: [{ cutId: 'mince', name: 'Mince', packs: 20, promised: 18, grams: 10_000, sold: 3, held: 0 }],
     trade: [],
     cuts: [
       {

@@ -7,13 +7,13 @@ import { CarcaseRails } from '#components/carcases/carcase-rails.tsx';
 import { describeCarcase, nameCarcase } from '#components/carcases/carcase-words.ts';
 import { CutoutTable } from '#components/carcases/cutout-table.tsx';
 import { KillSheetForm } from '#components/carcases/kill-sheet-form.tsx';
-import { WeightsForm, type Weights } from '#components/carcases/weights-form.tsx';
+import { WeighingChoice } from '#components/carcases/weighing-choice.tsx';
+import { WeightsForm, type WeighingDepth, type Weights } from '#components/carcases/weights-form.tsx';
 import { changedWeights, weighableOf } from '#components/carcases/weight-difference.ts';
 import { css } from '#components/theme/css.ts';
 import { Heading } from '#components/ui/heading.tsx';
 import { Notice } from '#components/ui/notice.tsx';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
-import { Select } from '#components/ui/select.tsx';
 import { Skeleton } from '#components/ui/skeleton.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
 import { TextLink } from '#components/ui/text-link.tsx';
@@ -25,8 +25,8 @@ import type { Carcase, KillSheet } from '#shared/contracts/carcases.ts';
 import { formatDay } from '#shared/domain/words.ts';
 import { CONFORMATIONS, FAT_CLASSES } from '#shared/engine/figures/class-scale.ts';
 
-const loadKillSheet = async () => (await import('#shared/contracts/carcases-schema.ts')).KillSheet;
-const loadWeights = async () => (await import('#shared/contracts/carcases-schema.ts')).enterWeightsSchema.body;
+const loadKillSheet = async () => (await import('#hooks/form-schemas.ts')).carcases.KillSheet;
+const loadWeights = async () => (await import('#hooks/form-schemas.ts')).carcases.enterWeightsSchema.body;
 
 export default function CarcaseScreen() {
   const { carcaseId } = useLocalSearchParams<{ carcaseId: string }>();
@@ -49,6 +49,7 @@ type ReadyProps = { carcase: Carcase; round: number; afresh: () => void };
 
 function Ready({ carcase, round, afresh }: ReadyProps) {
   const [side, setSide] = useState<'left' | 'right'>('left');
+  const [depth, setDepth] = useState<WeighingDepth>('quarters');
   const isKilled = carcase.state !== 'booked';
   useTitle(nameCarcase(carcase));
   return (
@@ -81,17 +82,8 @@ function Ready({ carcase, round, afresh }: ReadyProps) {
       {isKilled ? (
         <View style={css('w-stack')}>
           <Heading level={2}>Weights</Heading>
-          <Select
-            label="Side on the scale"
-            width="short"
-            value={side}
-            options={[
-              { value: 'left', label: 'left' },
-              { value: 'right', label: 'right' },
-            ]}
-            onChange={(value) => setSide(value === 'right' ? 'right' : 'left')}
-          />
-          <WeightsEntry key={`${side} ${round}`} carcase={carcase} side={side} afresh={afresh} />
+          <WeighingChoice side={side} depth={depth} onSide={setSide} onDepth={setDepth} />
+          <WeightsEntry key={`${side} ${round}`} carcase={carcase} side={side} depth={depth} afresh={afresh} />
         </View>
       ) : null}
     </View>
@@ -130,7 +122,9 @@ function KillSheetEntry({ carcase, afresh }: EntryProps) {
   );
 }
 
-function WeightsEntry({ carcase, side, afresh }: EntryProps & { side: 'left' | 'right' }) {
+type WeightsEntryProps = EntryProps & { side: 'left' | 'right'; depth: WeighingDepth };
+
+function WeightsEntry({ carcase, side, depth, afresh }: WeightsEntryProps) {
   const enter = useEnterWeights();
   const [nodes] = useState(() => weighableOf(carcase.nodes, side));
   const before = nodes.map(({ path, grams, source }) => ({ path, grams: source === 'weighed' ? grams : null }));
@@ -143,7 +137,7 @@ function WeightsEntry({ carcase, side, afresh }: EntryProps & { side: 'left' | '
   });
   return (
     <View style={css('w-stack')}>
-      <WeightsForm control={form.control} nodes={nodes} onSubmit={submit} busy={enter.isPending} />
+      <WeightsForm control={form.control} nodes={nodes} depth={depth} onSubmit={submit} busy={enter.isPending} />
       <ProblemNotice error={enter.error} title="The weights were not saved." onShowNewest={afresh} />
     </View>
   );

@@ -13,18 +13,20 @@ import { StateView } from '#components/ui/state-view.tsx';
 import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useAnimals, useEditAnimal, useRecordMedicine } from '#hooks/herd.ts';
+import { useToday } from '#hooks/office.ts';
 import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { Animal, NewAnimal } from '#shared/contracts/herd.ts';
 import { formatEarTag } from '#shared/domain/ear-tag.ts';
 import { formatCount } from '#shared/domain/words.ts';
 
-const loadSchema = async () => (await import('#shared/contracts/herd-schema.ts')).NewAnimal;
-const loadMedicineSchema = async () => (await import('#shared/contracts/herd-schema.ts')).recordMedicineSchema.body;
+const loadSchema = async () => (await import('#hooks/form-schemas.ts')).herd.NewAnimal;
+const loadMedicineSchema = async () => (await import('#hooks/form-schemas.ts')).herd.recordMedicineSchema.body;
 
 export default function AnimalScreen() {
   const { animalId } = useLocalSearchParams<{ animalId: string }>();
   const animals = useAnimals();
+  const today = useToday();
   // Counts up to draw the forms afresh, with the record as it is now.
   const [round, setRound] = useState(0);
   return (
@@ -44,7 +46,7 @@ export default function AnimalScreen() {
               <TitleBar
                 title={formatEarTag(animal.earTag)}
                 above={[animal.breed, animal.sex, formatCount(animal.ageMonths, 'month')].join(' · ')}
-                lead={describeAnimal(animal).words}
+                lead={describeAnimal(animal, today.data?.today).words}
               />
             </View>
             <View style={css('w-columns')}>

@@ -12,6 +12,7 @@ import { Skeleton } from '#components/ui/skeleton.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useAnimals } from '#hooks/herd.ts';
+import { useToday } from '#hooks/office.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { Animal } from '#shared/contracts/herd.ts';
 import { formatCount } from '#shared/domain/words.ts';
@@ -46,6 +47,7 @@ export default function HerdScreen() {
 }
 
 function Herd({ animals }: { animals: readonly Animal[] }) {
+  const today = useToday();
   const [typed, setTyped] = useState('');
   const [isInFieldOnly, setInFieldOnly] = useState(false);
   const [isAll, setAll] = useState(false);
@@ -54,10 +56,10 @@ function Herd({ animals }: { animals: readonly Animal[] }) {
   return (
     <View style={css('w-stack')}>
       <View style={css('w-fields')}>
-        <Field label="Find by tag or breed" value={typed} onChangeText={setTyped} optional />
+        <Field label="Find by tag or breed" value={typed} onChangeText={setTyped} required={false} />
         <Checkbox label="Only those in the field" checked={isInFieldOnly} onChange={setInFieldOnly} />
       </View>
-      <AnimalTable animals={shown} />
+      <AnimalTable animals={shown} today={today.data?.today} />
       {shown.length < found.length ? (
         <View style={css('w-buttons')}>
           <Button kind="quiet" label={`Show all ${found.length}`} onPress={() => setAll(true)} />

@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import { assert, constantFrom, integer, property } from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { parseDecimal, UNITS, writeDecimal, type Unit } from '#components/ui/decimal.ts';
 
@@ -36,8 +36,8 @@ describe('figures as they are typed', () => {
 
   it('reads back what it wrote, for every unit and figure', () => {
     const units = Object.keys(UNITS) as Unit[];
-    fc.assert(
-      fc.property(fc.constantFrom(...units), fc.integer({ min: -1_000_000_000, max: 1_000_000_000 }), (unit, value) => {
+    assert(
+      property(constantFrom(...units), integer({ min: -1_000_000_000, max: 1_000_000_000 }), (unit, value) => {
         expect(parseDecimal(writeDecimal(value, unit), unit)).toBe(value);
       }),
       { seed: 7 },

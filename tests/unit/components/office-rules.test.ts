@@ -56,11 +56,15 @@ const animal: Animal = {
 
 describe('an animal in words', () => {
   it('is in the field, inside a withdrawal period, booked, or further', () => {
+    const today = '2026-12-01';
     const booked = { id: animal.id, state: 'booked', killDay: '2026-12-02', cuttingDayId: animal.id };
-    expect(describeAnimal(animal).words).toBe('in the field');
-    expect(describeAnimal({ ...animal, withdrawalClearDay: '2026-12-20' }).words).toBe('withdrawal to Sun 20 Dec 2026');
-    expect(describeAnimal({ ...animal, carcase: booked }).words).toBe('booked for Wed 2 Dec');
-    expect(describeAnimal({ ...animal, carcase: { ...booked, state: 'hanging' } }).words).toBe('hanging');
+    expect(describeAnimal(animal, today).words).toBe('in the field');
+    expect(describeAnimal({ ...animal, withdrawalClearDay: '2026-12-20' }, today).words).toBe(
+      'withdrawal to Sun 20 Dec 2026',
+    );
+    expect(describeAnimal({ ...animal, carcase: booked }, today).words).toBe('booked for Wed 2 Dec');
+    expect(describeAnimal({ ...animal, carcase: { ...booked, state: 'hanging' } }, today).words).toBe('hanging');
+    expect(describeAnimal({ ...animal, withdrawalClearDay: today }, today).words).toBe('in the field');
   });
 
   it('is found by part of the tag, spaces or not, and by breed', () => {

@@ -83,9 +83,7 @@ describe('reserving', () => {
   it('sends what was chosen, shows the total, and closes what is taken or has no price', async () => {
     const send = vi.fn();
     render(<Screen send={send} />);
-    expect((screen.getByRole('checkbox', { name: /^Forequarter.*Taken already/ }) as HTMLInputElement).disabled).toBe(
-      true,
-    );
+    expect(screen.getByRole<HTMLInputElement>('checkbox', { name: /^Forequarter.*Taken already/ }).disabled).toBe(true);
     expect(screen.queryByRole('checkbox', { name: /^Side/ })).toBeNull();
     fireEvent.click(screen.getByRole('checkbox', { name: /^Hindquarter, 78.0 kg/ }));
     fireEvent.change(screen.getByLabelText(/^Brisket/), { target: { value: '10' } });

@@ -5,7 +5,14 @@ import { compareRows } from '#components/allocation/compare-table.tsx';
 import { CutTable } from '#components/allocation/cut-table.tsx';
 import { areSameLocks, choicesOf, narrowMembers, setLock } from '#components/allocation/locks.ts';
 import { OfferList } from '#components/allocation/offer-list.tsx';
-import { describePlan, gainTenthPencePerKg, nameSide, signedMoney } from '#components/allocation/plan-words.ts';
+import {
+  boxesOnSale,
+  describePlan,
+  gainTenthPencePerKg,
+  nameSide,
+  nameTradeLine,
+  signedMoney,
+} from '#components/allocation/plan-words.ts';
 import { WayPanel } from '#components/allocation/way-panel.tsx';
 import { CARCASE, makeAllocation, makeSide } from '#tests/support/make-workbench.ts';
 
@@ -41,31 +48,56 @@ describe('locks', () => {
 
 describe('the panel of ways', () => {
   it('shows what the lock costs, what is planned and why a way is closed', () => {
-    render(<WayPanel side={makeSide()} primalIds={['fore-rib']} locks={makeAllocation().locks} onLock={vi.fn()} />);
+    render(
+      <WayPanel
+        side={makeSide()}
+        primalIds={['fore-rib']}
+        locks={makeAllocation().locks}
+        isExplained
+        onLock={vi.fn()}
+      />,
+    );
     expect(screen.getByRole('heading', { name: 'Fore rib, Angus steer 00214, left · locked' })).toBeTruthy();
     expect(screen.getByText('This lock costs £18.60.')).toBeTruthy();
-    expect((screen.getByRole('radio', { name: /^On the bone/ }) as HTMLInputElement).checked).toBe(true);
-    const closed = screen.getByRole('radio', { name: /^Cutlets.*vertebral column/ }) as HTMLInputElement;
+    expect(screen.getByRole<HTMLInputElement>('radio', { name: /^On the bone/ }).checked).toBe(true);
+    const closed = screen.getByRole<HTMLInputElement>('radio', { name: /^Cutlets.*vertebral column/ });
     expect(closed.disabled).toBe(true);
   });
 
   it('when another way is chosen, asks for that lock; when the plan shall choose, for none', () => {
     const onLock = vi.fn();
-    render(<WayPanel side={makeSide()} primalIds={['fore-rib']} locks={makeAllocation().locks} onLock={onLock} />);
+    render(
+      <WayPanel
+        side={makeSide()}
+        primalIds={['fore-rib']}
+        locks={makeAllocation().locks}
+        isExplained
+        onLock={onLock}
+      />,
+    );
     fireEvent.click(screen.getByRole('radio', { name: /^Rib-eye steaks/ }));
     expect(onLock).toHaveBeenLastCalledWith('fore-rib', 'rib-eye');
     fireEvent.click(screen.getByRole('radio', { name: /^As the plan finds best/ }));
     expect(onLock).toHaveBeenLastCalledWith('fore-rib', undefined);
   });
 
+  it('while the cost of a lock is being worked out, says so', () => {
+    const side = makeSide();
+    const [rib] = side.choices;
+    const waiting = makeSide({ choices: rib ? [{ ...rib, lockCostPence: null }] : [] });
+    const locks = makeAllocation().locks;
+    render(<WayPanel side={waiting} primalIds={['fore-rib']} locks={locks} isExplained={false} onLock={vi.fn()} />);
+    expect(screen.getByText('What this lock costs is being worked out …')).toBeTruthy();
+  });
+
   it('when a lock is not worked out yet, says no cost', () => {
     const locks = [{ ...place, wayId: 'rib-eye' }];
-    render(<WayPanel side={makeSide()} primalIds={['fore-rib']} locks={locks} onLock={vi.fn()} />);
+    render(<WayPanel side={makeSide()} primalIds={['fore-rib']} locks={locks} isExplained onLock={vi.fn()} />);
     expect(screen.queryByText(/This lock costs/)).toBeNull();
   });
 
   it('names the buyer of what leaves whole', () => {
-    render(<WayPanel side={makeSide()} primalIds={['brisket']} locks={[]} onLock={vi.fn()} />);
+    render(<WayPanel side={makeSide()} primalIds={['brisket']} locks={[]} isExplained onLock={vi.fn()} />);
     expect(screen.getByText('Now: sold whole to Pellow & Dray')).toBeTruthy();
   });
 });
@@ -74,6 +106,13 @@ describe('the plan in words and figures', () => {
   it('says day, carcases and kilograms in one line, and names a side', () => {
     expect(describePlan(makeAllocation())).toBe('Cutting day Thu 10 Dec · 1 carcase · 640 kg cold · 448 kg of product');
     expect(nameSide(makeSide())).toBe('Angus steer 00214, left');
+  });
+
+  it('counts what goes on sale, and names a trade line without its business', () => {
+    expect(boxesOnSale(makeAllocation())).toBe(35 + 14);
+    const line = { reservationNo: 504, businessName: 'Pellow & Dray', grams: 80_000 };
+    expect(nameTradeLine({ ...line, name: 'hind, Pellow & Dray' })).toBe('Hindquarter');
+    expect(nameTradeLine({ ...line, name: 'Brisket, boned and rolled' })).toBe('Brisket, boned and rolled');
   });
 
   it('reckons the gain on deadweight per kg of cold weight', () => {
@@ -85,9 +124,11 @@ describe('the plan in words and figures', () => {
   });
 
   it('lists each box with its number, what is spoken for and what limits it', () => {
-    render(<OfferList boxes={makeAllocation().boxes} />);
+    render(<OfferList boxes={makeAllocation().boxes} isExplained />);
     const [hearth, table] = screen.getAllByRole('listitem');
-    expect(hearth?.textContent).toBe('Hearth38Limited by Steaks: 300 g short for one more4 sold, 1 held');
+    expect(hearth?.textContent).toBe(
+      'Hearth38Limited by Steaks: 300 g short for one more35 may be put on sale while weights are estimates4 sold, 1 held',
+    );
     expect(table?.textContent).toContain('Limited by what people are likely to buy');
   });
 
@@ -110,6 +151,7 @@ describe('the plan in words and figures', () => {
     expect(rows.get('Ember')).toMatchObject({ before: '38', now: '0', difference: '− 38' });
     expect(rows.get('Table')).toMatchObject({ before: '0', now: '14', difference: '+ 14' });
     expect(rows.get('Mince, loose')?.difference).toBe('none');
+    expect(compareRows(null, makeAllocation(), true).find((row) => row.name === 'Hearth')?.now).toBe('35');
     expect(compareRows(null, makeAllocation())[0]).toMatchObject({ before: '–', difference: '–' });
   });
 });

@@ -8,7 +8,7 @@ import { OfferList } from '#components/allocation/offer-list.tsx';
 import { describeOutlets, Outlets } from '#components/allocation/outlets.tsx';
 import { PlanFigures } from '#components/allocation/plan-figures.tsx';
 import { PlanNotices } from '#components/allocation/plan-notices.tsx';
-import { boxCount, describePlan } from '#components/allocation/plan-words.ts';
+import { boxesOnSale, describePlan } from '#components/allocation/plan-words.ts';
 import { PublishSheet } from '#components/allocation/publish-sheet.tsx';
 import { SideRails } from '#components/allocation/side-rails.tsx';
 import { goToWays, WayPanel } from '#components/allocation/way-panel.tsx';
@@ -97,7 +97,7 @@ function Workbench({ dayId, day, carcases, latest, published, members }: Workben
             {latest ? workOut : null}
             {latest && mayPublish ? (
               <Button
-                label={`Publish ${formatCount(boxCount(latest), 'box', 'boxes')}`}
+                label={`Publish ${formatCount(boxesOnSale(latest), 'box', 'boxes')}`}
                 onPress={() => setPublishing(true)}
               />
             ) : null}
@@ -150,6 +150,7 @@ function Plan({ plan, bench, members }: PlanProps) {
       side={side}
       primalIds={members[chosen.primalId] ?? [chosen.primalId]}
       locks={bench.locks}
+      isExplained={plan.isExplained}
       onLock={(choiceId, wayId) => bench.setLocks(setLock(bench.locks, { ...chosen, choiceId }, wayId))}
     />
   );
@@ -168,7 +169,7 @@ function Plan({ plan, bench, members }: PlanProps) {
         <View style={css('w-stack-l')}>
           <View>
             <Heading level={2}>On offer</Heading>
-            <OfferList boxes={plan.boxes} />
+            <OfferList boxes={plan.boxes} isExplained={plan.isExplained} />
           </View>
           {isBeside ? panel : null}
           <PlanFigures plan={plan} />
@@ -180,8 +181,11 @@ function Plan({ plan, bench, members }: PlanProps) {
       {bench.before ? (
         <CompareTable beforeTitle="The answer before" nowTitle="This answer" before={bench.before} now={plan} />
       ) : null}
-      <Heading level={2}>Cuts</Heading>
-      <CutTable cuts={plan.cuts} />
+      <Heading level={2}>Cuts and where they go</Heading>
+      <details open={isBeside} className="w-ruled">
+        <summary className="w-nav-link">Kilograms of each cut</summary>
+        <CutTable cuts={plan.cuts} />
+      </details>
       <Outlets loose={plan.loose} trade={plan.trade} />
       <WaysSection
         sides={plan.sides}

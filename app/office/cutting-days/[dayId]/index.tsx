@@ -4,9 +4,9 @@ import { View } from 'react-native';
 import { BookingForm, type Booking } from '#components/carcases/booking-form.tsx';
 import { CarcaseTable } from '#components/carcases/carcase-table.tsx';
 import { CloseDay } from '#components/carcases/close-day.tsx';
+import { runningWithdrawal } from '#components/herd/animal-state.ts';
 import { DayPlaces } from '#components/office/day-places.tsx';
 import { css } from '#components/theme/css.ts';
-import { ButtonLink } from '#components/ui/button-link.tsx';
 import { Heading } from '#components/ui/heading.tsx';
 import { Notice } from '#components/ui/notice.tsx';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
@@ -16,6 +16,7 @@ import { Text } from '#components/ui/text.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useBookCarcases, useCloseCuttingDay, useCuttingDay } from '#hooks/carcases.ts';
 import { useAnimals } from '#hooks/herd.ts';
+import { useToday } from '#hooks/office.ts';
 import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { CuttingDay } from '#shared/contracts/carcases.ts';
@@ -23,7 +24,7 @@ import type { Animal } from '#shared/contracts/herd.ts';
 import { formatEarTag } from '#shared/domain/ear-tag.ts';
 import { formatCount, formatDay, formatDayTime, formatKilograms } from '#shared/domain/words.ts';
 
-const loadSchema = async () => (await import('#shared/contracts/carcases-schema.ts')).bookCarcasesSchema.body;
+const loadSchema = async () => (await import('#hooks/form-schemas.ts')).carcases.bookCarcasesSchema.body;
 
 export default function CuttingDayScreen() {
   const { dayId } = useLocalSearchParams<{ dayId: string }>();
@@ -52,7 +53,6 @@ function Ready({ day }: { day: CuttingDay }) {
       <TitleBar
         title={formatDay(day.day)}
         above={`Cutting day · ${day.state} · ${formatCount(day.carcases.length, 'carcase')} · ${formatKilograms(day.coldGrams)} cold · ${formatCount(day.orders, 'order')}`}
-        actions={<ButtonLink href={`/office/cutting-days/${day.id}/allocation`} label="Allocation" />}
       />
       <DayPlaces dayId={day.id} role="owner" path={`/office/cutting-days/${day.id}`} />
       <Text tone="quiet">{`Orders until ${formatDayTime(day.cutOffAt)}. Cut by “${day.specificationName}”.`}</Text>
@@ -74,6 +74,7 @@ function Ready({ day }: { day: CuttingDay }) {
 
 function Book({ day, onBooked }: { day: CuttingDay; onBooked: () => void }) {
   const animals = useAnimals();
+  const today = useToday();
   const book = useBookCarcases();
   const form = useContractForm<Booking>(loadSchema, { animalIds: [], killDay: '', cuttingDayId: day.id });
   const submit = sendForm(form, async (body) => {
@@ -86,7 +87,7 @@ function Book({ day, onBooked }: { day: CuttingDay; onBooked: () => void }) {
         <View style={css('w-stack')}>
           <BookingForm
             control={form.control}
-            animals={choicesOf(data.animals)}
+            animals={choicesOf(data.animals, today.data?.today)}
             latestKillDay={day.day}
             onSubmit={submit}
             busy={book.isPending}
@@ -98,19 +99,22 @@ function Book({ day, onBooked }: { day: CuttingDay; onBooked: () => void }) {
   );
 }
 
-/** Animals in the field, the oldest first: they are the nearest to being ready. */
-function choicesOf(animals: readonly Animal[]) {
+/** Animals in the field that could be ready: prime cattle before cows, the oldest first. */
+function choicesOf(animals: readonly Animal[], today: string | undefined) {
   return animals
     .filter((animal) => !animal.carcase)
-    .toSorted((a, b) => a.born.localeCompare(b.born))
-    .map((animal) => ({
-      id: animal.id,
-      label: formatEarTag(animal.earTag),
-      note: [
-        `${animal.breed} ${animal.sex}`,
-        formatCount(animal.ageMonths, 'month'),
-        animal.liveGrams === null ? 'not weighed' : `${formatKilograms(animal.liveGrams)} live`,
-        ...(animal.withdrawalClearDay ? [`withdrawal to ${formatDay(animal.withdrawalClearDay)}`] : []),
-      ].join(', '),
-    }));
+    .toSorted((a, b) => Number(a.sex === 'cow') - Number(b.sex === 'cow') || a.born.localeCompare(b.born))
+    .map((animal) => {
+      const clearDay = runningWithdrawal(animal, today);
+      return {
+        id: animal.id,
+        label: formatEarTag(animal.earTag),
+        note: [
+          `${animal.breed} ${animal.sex}`,
+          formatCount(animal.ageMonths, 'month'),
+          animal.liveGrams === null ? 'not weighed' : `${formatKilograms(animal.liveGrams)} live`,
+          ...(clearDay ? [`withdrawal to ${formatDay(clearDay)}`] : []),
+        ].join(', '),
+      };
+    });
 }
