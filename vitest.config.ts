@@ -37,8 +37,9 @@ export default defineConfig({
           include: ['tests/browser/**/*.test.ts'],
           globalSetup: ['tests/support/global-setup.ts'],
           fileParallelism: false,
-          testTimeout: 180_000,
-          hookTimeout: 120_000,
+          // A journey is many pages long; on a busy machine each takes seconds.
+          testTimeout: 600_000,
+          hookTimeout: 300_000,
         },
       },
     ],

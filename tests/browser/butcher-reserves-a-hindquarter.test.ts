@@ -43,7 +43,7 @@ test('a butcher, while the farm confirms by hand, reserves a hindquarter and bri
   await page.getByLabel(/^Note to the cutter/).fill('Aitchbone out, shin left whole.');
   await expectAccessible(page);
   await page.getByRole('button', { name: 'Reserve', exact: true }).click();
-  await page.getByText(/^Reservation \d+ is asked\.$/).waitFor({ timeout: 120_000 });
+  await page.getByText(/^Reservation \d+ is asked\.$/).waitFor({ timeout: 150_000 });
   await expectAccessible(page);
 
   const [kept] = await world.db.select().from(reservation);

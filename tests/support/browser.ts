@@ -64,7 +64,7 @@ async function openPage(browser: Browser, { width, height, scheme }: Window, bas
     locale: 'en-GB',
     timezoneId: 'Europe/London',
   });
-  context.setDefaultTimeout(20_000);
+  context.setDefaultTimeout(60_000);
   const page = await context.newPage();
   const complaints = listenFor(page, baseURL);
   onTestFinished(async ({ task }) => {
