@@ -3,6 +3,8 @@ export type LetterPart =
   | { kind: 'heading'; text: string }
   | { kind: 'text'; text: string }
   | { kind: 'rows'; rows: [label: string, value: string][] }
+  /** Amounts stand under each other at the right; the last one is their total. */
+  | { kind: 'sums'; rows: [label: string, amount: string][] }
   | { kind: 'button'; text: string; url: string };
 
 export function escapeHtml(text: string): string {
@@ -16,7 +18,7 @@ export function letterHtml(farmName: string, parts: LetterPart[]): string {
 <html lang="en-GB"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1">
 <title>${escapeHtml(farmName)}</title></head>
 <body style="margin:0;background:#FBF6F1;color:#1E1A18;font:16px/1.5 'Public Sans',Arial,sans-serif">
-<div style="max-width:560px;margin:0 auto;padding:24px 20px">
+<div style="max-width:560px;margin:0 auto;padding:24px 20px;overflow-wrap:anywhere">
 <p style="margin:0 0 20px;padding-bottom:10px;border-bottom:3px solid #1E1A18;font:700 20px Besley,Georgia,serif">${escapeHtml(farmName)}</p>
 ${body}
 </div></body></html>`;
@@ -31,16 +33,27 @@ function partHtml(part: LetterPart): string {
       'display:inline-block;padding:12px 18px;border-radius:3px;background:#A8341F;color:#FFFFFF;font-weight:700;text-decoration:none';
     return `<p style="margin:18px 0"><a href="${escapeHtml(part.url)}" style="${style}">${escapeHtml(part.text)}</a></p>`;
   }
-  const rows = part.rows.map(
-    ([label, value]) =>
-      `<tr><th scope="row" style="padding:7px 12px 7px 0;border-top:1px solid #D9CDBF;text-align:left;vertical-align:top;font-weight:400;color:#5A514B">${escapeHtml(label)}</th><td style="padding:7px 0;border-top:1px solid #D9CDBF">${escapeHtml(value).replace(/\n/g, '<br>')}</td></tr>`,
-  );
+  const rows = part.kind === 'sums' ? sumRows(part.rows) : part.rows.map(wordRow);
   return `<table style="width:100%;margin:0 0 16px;border-collapse:collapse">${rows.join('')}</table>`;
+}
+
+const CELL = 'border-top:1px solid #D9CDBF;vertical-align:top';
+
+function wordRow([label, value]: [string, string]): string {
+  const words = escapeHtml(value).replace(/\n/g, '<br>');
+  return `<tr><th scope="row" style="${CELL};width:27%;text-align:left;padding:7px 12px 7px 0;font-weight:400;color:#5A514B">${escapeHtml(label)}</th><td style="${CELL};padding:7px 0">${words}</td></tr>`;
+}
+
+function sumRows(rows: [string, string][]): string[] {
+  return rows.map(([label, amount], at) => {
+    const weight = at === rows.length - 1 ? 'font-weight:700' : 'font-weight:400';
+    return `<tr><th scope="row" style="${CELL};text-align:left;padding:7px 12px 7px 0;${weight}">${escapeHtml(label)}</th><td style="${CELL};padding:7px 0;text-align:right;white-space:nowrap;font-variant-numeric:tabular-nums;${weight}">${escapeHtml(amount)}</td></tr>`;
+  });
 }
 
 export function letterText(farmName: string, parts: LetterPart[]): string {
   const lines = parts.map((part) => {
-    if (part.kind === 'rows')
+    if (part.kind === 'rows' || part.kind === 'sums')
       return part.rows.map(([label, value]) => `${label}: ${value.replace(/\n/g, ', ')}`).join('\n');
     return part.kind === 'button' ? `${part.text}:\n${part.url}` : part.text;
   });

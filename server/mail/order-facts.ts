@@ -34,11 +34,8 @@ export type WrittenMail = { subject: string; text: string; html: string };
 
 export function writeMail(facts: OrderFacts, subject: string, parts: LetterPart[]): WrittenMail {
   const { name, businessName, email, phone } = facts.farm;
-  const all: LetterPart[] = [
-    ...parts,
-    { kind: 'text', text: `Anything wrong? Write to ${email} or ring ${phone}.\n${businessName}` },
-  ];
-  return { subject: `${subject} · ${name}`, text: letterText(name, all), html: letterHtml(name, all) };
+  const all: LetterPart[] = [...parts, { kind: 'text', text: `Anything wrong? Write to ${email} or ring ${phone}.` }];
+  return { subject: `${subject} · ${name}`, text: letterText(businessName, all), html: letterHtml(name, all) };
 }
 
 /** `Fri 12 Dec, 10:00 to 10:30`. */
@@ -51,7 +48,7 @@ export function lineRows(facts: OrderFacts): LetterPart {
     `${line.quantity} × ${line.name}, ${line.kind === 'box' ? 'at least' : 'up to'} ${formatWeight(line.unitGrams)}`,
     formatMoney(line.linePence),
   ]);
-  return { kind: 'rows', rows: [...rows, ['Total', formatMoney(facts.totalPence)]] };
+  return { kind: 'sums', rows: [...rows, ['Total', formatMoney(facts.totalPence)]] };
 }
 
 export function placeRows({ collection }: OrderFacts): LetterPart {

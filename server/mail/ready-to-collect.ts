@@ -5,15 +5,12 @@ export function readyToCollectMail(facts: OrderFacts): WrittenMail {
   const items = facts.lines.map((line) => `${line.quantity} × ${line.name}`).join('\n');
   return writeMail(facts, `Order ${facts.orderNo} is ready: ${collectionTime(facts.collection)}`, [
     { kind: 'heading', text: 'Your beef is ready to collect' },
-    { kind: 'text', text: `${facts.name}, order ${facts.orderNo} is packed and waits for you.` },
-    placeRows(facts),
     {
-      kind: 'rows',
-      rows: [
-        ['Order', String(facts.orderNo)],
-        ['Packed for you', items],
-      ],
+      kind: 'text',
+      text: `${facts.name}, order ${facts.orderNo} is packed and waits for you. Say its number when you come.`,
     },
+    placeRows(facts),
+    { kind: 'rows', rows: [['Packed', items]] },
     { kind: 'button', text: 'See your order', url: facts.url },
     {
       kind: 'text',
