@@ -6,6 +6,7 @@ import { customerOrder, orderLine } from '#db/schema/orders.ts';
 import { pack, packAssignment, stockMovement } from '#db/schema/packs.ts';
 import { cut } from '#db/schema/products.ts';
 import { reservation, reservationLine, tradeAccount } from '#db/schema/trade.ts';
+import type { Place } from '#server/carcases/ledger-queries.ts';
 import type { Db, Tx } from '#server/deps.ts';
 import type { OrderState } from '#shared/domain/order-state.ts';
 
@@ -41,18 +42,32 @@ export async function setPackGrams(tx: Tx, packId: string, grams: number): Promi
   await tx.update(pack).set({ grams }).where(eq(pack.id, packId));
 }
 
-/** Where each pack lies: the place that its latest movement names. */
-export async function readPlaces(db: Db | Tx, packIds: readonly string[]) {
+type Whereabouts = { id: string; packId: string; place: Place };
+
+/**
+ * Where each pack lies: the place that has got more of its grams than it gave away, and the movement that brought it
+ * there. By sums, since movements of one transaction bear one time; a pack that was undone is back in the carcase.
+ */
+export async function readPlaces(db: Db | Tx, packIds: readonly string[]): Promise<Map<string, Whereabouts>> {
   const rows = await db
-    .selectDistinctOn([stockMovement.packId], {
-      id: stockMovement.id,
-      packId: stockMovement.packId,
-      place: stockMovement.toPlace,
-    })
+    .select()
     .from(stockMovement)
     .where(inArray(stockMovement.packId, [...packIds]))
-    .orderBy(stockMovement.packId, desc(stockMovement.createdAt), desc(stockMovement.id));
-  return new Map(rows.map((row) => [row.packId, row]));
+    .orderBy(desc(stockMovement.createdAt), desc(stockMovement.id));
+  const undone = new Set(rows.map((row) => row.reversalOf));
+  const sums = new Map<string, number>();
+  for (const { packId, fromPlace, toPlace, grams } of rows) {
+    sums.set(`${packId} ${toPlace}`, (sums.get(`${packId} ${toPlace}`) ?? 0) + grams);
+    if (fromPlace) sums.set(`${packId} ${fromPlace}`, (sums.get(`${packId} ${fromPlace}`) ?? 0) - grams);
+  }
+  const places = new Map<string, Whereabouts>();
+  for (const packId of packIds) {
+    const own = rows.filter((row) => row.packId === packId);
+    const place = own.find((row) => (sums.get(`${packId} ${row.toPlace}`) ?? 0) > 0)?.toPlace ?? 'carcase';
+    const last = own.find((row) => row.toPlace === place && !undone.has(row.id));
+    if (last) places.set(packId, { id: last.id, packId, place });
+  }
+  return places;
 }
 
 export function listAssignments(db: Db | Tx, packIds: readonly string[]): Promise<AssignmentRow[]> {

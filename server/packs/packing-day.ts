@@ -64,7 +64,7 @@ export function describePack(pack: PackRow & { place: string }, jobs: readonly J
   return { id, code, cutId, cut, carcaseId, earTag: formatEarTag(earTag), grams, packedOn, useBy, place, ...inOrder };
 }
 
-type ListFacts = { figures: DayCutouts; published: AllocationRow | null; packs: readonly PackRow[] };
+type ListFacts = { figures: DayCutouts; published: AllocationRow | null; packs: PackingWork['packs'] };
 
 /** What the plan foresees of each cut of a carcase, less what leaves whole, beside what lies packed. */
 function listCuts(carcase: CarcaseFigures, { figures, published, packs }: ListFacts): PackingDay['cuttingList'] {
@@ -79,7 +79,8 @@ function listCuts(carcase: CarcaseFigures, { figures, published, packs }: ListFa
     foreseen.set(node.cutId, entry);
   }
   const minced = figures.specification.cuts.find((cut) => cut.kind === 'mince');
-  const packedHere = packs.filter((pack) => pack.carcaseId === carcase.row.id);
+  // What was weighed twice never was a pack.
+  const packedHere = packs.filter((pack) => pack.carcaseId === carcase.row.id && pack.place !== 'carcase');
   if (minced && !foreseen.has(minced.id)) foreseen.set(minced.id, { grams: 0, ways: new Set(['from trim']) });
   return [...foreseen].flatMap(([cutId, { grams, ways }]) => {
     const cut = figures.specification.cuts.find((candidate) => candidate.id === cutId);
