@@ -49,7 +49,7 @@ async function fillCheckout(page: Page): Promise<void> {
   await page.getByLabel('Phone').fill('07700 900123');
   await pay.click();
   const email = page.getByLabel('E-mail');
-  await expect.poll(() => email.getAttribute('aria-invalid')).toBe('true');
+  await expect.poll(() => email.getAttribute('aria-invalid'), { timeout: 30_000 }).toBe('true');
   await email.fill('ada@example.com');
   await pay.click();
 }
