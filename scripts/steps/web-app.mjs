@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto';
-import { existsSync, readFileSync, readdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, readdirSync, renameSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { promisify } from 'node:util';
 import { brotliCompress, constants, gzip } from 'node:zlib';
@@ -12,6 +12,7 @@ const sources = ['app', 'components', 'hooks', 'shared', 'fonts', 'assets'];
 const settings = ['app.json', 'package.json', 'package-lock.json', 'metro.config.js', 'tsconfig.json'];
 const dist = path.join(root, 'dist');
 const stamp = path.join(dist, 'sources.sha256');
+const day = 24 * 3_600_000;
 
 function filesUnder(folder) {
   if (!existsSync(folder)) return [];
@@ -61,6 +62,20 @@ export const exportSettings = () => ({
   CI: '1',
 });
 
+/**
+ * Scripts of the build before go on being there for a day: a page that is open in a browser, or a server that was started
+ * before, still asks for them by their old names.
+ */
+function keepRecentScripts(fresh) {
+  const folder = 'client/_expo/static';
+  for (const file of filesUnder(path.join(dist, folder))) {
+    const kept = path.join(fresh, path.relative(dist, file));
+    if (existsSync(kept) || Date.now() - statSync(file).mtimeMs > day) continue;
+    mkdirSync(path.dirname(kept), { recursive: true });
+    renameSync(file, kept);
+  }
+}
+
 async function build(hash) {
   const fresh = path.join(root, `dist-${process.pid}`);
   const expo = path.join(root, 'node_modules/expo/bin/cli');
@@ -73,6 +88,7 @@ async function build(hash) {
     // The renderer is CommonJS, while the project's own package.json says that a .js file is a module.
     writeFileSync(path.join(fresh, 'server/package.json'), '{ "type": "commonjs" }\n');
     writeFileSync(path.join(fresh, path.basename(stamp)), hash);
+    keepRecentScripts(fresh);
     rmSync(dist, { recursive: true, force: true });
     renameSync(fresh, dist);
   } finally {
