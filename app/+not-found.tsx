@@ -1,9 +1,14 @@
 import { Link } from 'expo-router';
+import type { GenerateMetadataFunction } from 'expo-server';
 import { View } from 'react-native';
 import { FARM_MARK } from '#components/shop/places.ts';
 import { css } from '#components/theme/css.ts';
 import { ButtonLink } from '#components/ui/button-link.tsx';
 import { EmptyState } from '#components/ui/empty-state.tsx';
+import { pageMetadata } from '#hooks/page-metadata.ts';
+
+export const generateMetadata: GenerateMetadataFunction = (request) =>
+  pageMetadata(request, { title: 'There is no such page · Skelderwick Farm', hidden: true });
 
 /** Any address that leads nowhere. */
 export default function NotFoundScreen() {

@@ -4,6 +4,8 @@ const page = `
 :root .w-page-full{max-width:none}
 :root .w-main{padding-block:16px 56px;display:flex;flex-direction:column;flex:1 0 auto;min-width:0;outline:none}
 :root .w-shell>.w-main{min-height:calc(100dvh - 80px);box-sizing:border-box}
+:root .w-shell>.w-page-narrow{max-width:1120px}
+:root .w-shell>.w-page-narrow>*{width:100%;max-width:42rem}
 :root .w-stack{display:flex;flex-direction:column;gap:16px;min-width:0}
 :root .w-stack-s{display:flex;flex-direction:column;gap:6px;min-width:0}
 :root .w-stack-l{display:flex;flex-direction:column;gap:32px;min-width:0}

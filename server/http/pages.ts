@@ -5,6 +5,7 @@ import path from 'node:path';
 import type * as expoServer from 'expo-server/adapter/express';
 import express, { type ErrorRequestHandler, type RequestHandler, Router } from 'express';
 import { log } from './log.ts';
+import { sitemap } from './sitemap.ts';
 import { warmFirst } from './warm-pages.ts';
 
 // Its module form calls `require`, which modules do not have: the CommonJS form is asked for.
@@ -20,6 +21,7 @@ export function pages(root: string): Router {
   router.use('/_expo/static', express.static(path.join(client, '_expo/static'), { immutable: true, maxAge: YEAR_MS }));
   router.use('/assets', express.static(path.join(client, 'assets'), { immutable: true, maxAge: YEAR_MS }));
   router.use('/fonts', express.static(path.join(root, 'fonts'), { immutable: true, maxAge: YEAR_MS }));
+  router.use(sitemap(client));
   router.use(express.static(client, { index: false, maxAge: 3_600_000 }));
   const build = path.join(root, 'dist', 'server');
   router.use(warmFirst(build));
