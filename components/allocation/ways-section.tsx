@@ -1,6 +1,6 @@
 import { View } from 'react-native';
 import { css } from '#components/theme/css.ts';
-import { Text } from '#components/ui/text.tsx';
+import { Disclosure } from '#components/ui/disclosure.tsx';
 import type { PlannedSide } from '#shared/contracts/allocation.ts';
 import { nameSide } from './plan-words.ts';
 import { WaysTable } from './ways-table.tsx';
@@ -15,12 +15,9 @@ export function WaysSection({ sides, onChoose }: WaysSectionProps) {
   return (
     <View style={css('w-stack')}>
       {sides.map((side) => (
-        <details key={`${side.carcaseId} ${side.side}`} className="w-ruled">
-          <summary className="w-nav-link">
-            <Text weight="strong">{`Ways of ${nameSide(side)}`}</Text>
-          </summary>
+        <Disclosure key={`${side.carcaseId} ${side.side}`} ruled words={`Ways of ${nameSide(side)}`}>
           <WaysTable side={side} onChoose={(primalId) => onChoose(side, primalId)} />
-        </details>
+        </Disclosure>
       ))}
     </View>
   );

@@ -1,7 +1,7 @@
 import { View } from 'react-native';
 import { css } from '#components/theme/css.ts';
 import { DefinitionList } from '#components/ui/definition-list.tsx';
-import { Text } from '#components/ui/text.tsx';
+import { Disclosure } from '#components/ui/disclosure.tsx';
 import type { CollectionMail } from '#shared/contracts/packs.ts';
 
 /** The mail as it will arrive: as letters, and as the bare text that some programs show. */
@@ -21,14 +21,11 @@ export function MailPreview({ mail }: { mail: CollectionMail }) {
         srcDoc={mail.html}
         style={{ width: '100%', height: 420, border: '1px solid var(--line)', background: 'white' }}
       />
-      <details>
-        <summary className="w-nav-link">
-          <Text weight="strong">As plain text</Text>
-        </summary>
+      <Disclosure words="As plain text">
         <pre className="t-text t-small" style={{ whiteSpace: 'pre-wrap' }}>
           {mail.text}
         </pre>
-      </details>
+      </Disclosure>
     </View>
   );
 }

@@ -3,10 +3,10 @@ import { useController, type Control } from 'react-hook-form';
 import { css } from '#components/theme/css.ts';
 import { Button } from '#components/ui/button.tsx';
 import { Checkbox } from '#components/ui/checkbox.tsx';
+import { Disclosure } from '#components/ui/disclosure.tsx';
 import { FieldError } from '#components/ui/field-frame.tsx';
 import { FormNumber } from '#components/ui/form-number.tsx';
 import { FormText } from '#components/ui/form-text.tsx';
-import { Text } from '#components/ui/text.tsx';
 import type { BoxKindEdit, Cut } from '#shared/contracts/office.ts';
 
 type BoxLineFieldsProps = {
@@ -32,10 +32,7 @@ export function BoxLineFields({ control, at, cuts, onRemove }: BoxLineFieldsProp
         <FormNumber control={control} name={`lines.${at}.minPacks`} unit="count" label="Packs, at least" />
         <FormNumber control={control} name={`lines.${at}.maxPacks`} unit="count" label="Packs, at most" optional />
       </View>
-      <details>
-        <summary className="w-nav-link">
-          <Text>{`From: ${chosen.join(', ') || 'no cut chosen yet'}`}</Text>
-        </summary>
+      <Disclosure words={`From: ${chosen.join(', ') || 'no cut chosen yet'}`}>
         <View role="group" aria-label={`Cuts of line ${at + 1}`} style={css('w-fields')}>
           {cuts.map((cut) => (
             <Checkbox
@@ -46,7 +43,7 @@ export function BoxLineFields({ control, at, cuts, onRemove }: BoxLineFieldsProp
             />
           ))}
         </View>
-      </details>
+      </Disclosure>
       <FieldError id={`line-${at}-cuts-error`} error={fieldState.error?.message} />
       {onRemove ? (
         <View style={css('w-row')}>

@@ -16,8 +16,7 @@ export function CuttingList({ title, lines, onWeigh }: CuttingListProps) {
   const sum = (key: 'foreseenGrams' | 'packedGrams') => lines.reduce((total, line) => total + line[key], 0);
   return (
     <Table
-      caption={title}
-      captionShown
+      caption={`Cutting list of ${title}`}
       rows={lines}
       rowKey={(line) => `${line.cutId} ${line.way}`}
       empty="Nothing is planned from this carcase yet."

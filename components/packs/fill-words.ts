@@ -1,4 +1,5 @@
 import type { Fill } from '#shared/contracts/packs.ts';
+import { shortEarTag } from '#shared/domain/ear-tag.ts';
 import { formatCount, formatWeight } from '#shared/domain/words.ts';
 
 /** `Steaks: 0.4 kg and 1 pack missing`. */
@@ -13,6 +14,11 @@ export function missingWords({ line, shortGrams, shortPacks }: Fill['missing'][n
 /** `Hearth, 2nd of this order` when an order holds several of one kind. */
 export function nameItem({ item, copy }: Pick<Fill, 'item' | 'copy'>): string {
   return copy > 1 ? `${item}, no. ${copy}` : item;
+}
+
+/** `Angus steer 00214`: two of one breed may hang side by side. */
+export function nameCarcase({ title, earTag }: { title: string; earTag: string }): string {
+  return `${title} ${shortEarTag(earTag)}`;
 }
 
 /** What cannot be filled stands first: it is what somebody has to do something about. */

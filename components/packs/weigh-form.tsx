@@ -10,6 +10,7 @@ import { FormSelect } from '#components/ui/form-select.tsx';
 import { Text } from '#components/ui/text.tsx';
 import type { PackingDay } from '#shared/contracts/packs.ts';
 import { formatWeight } from '#shared/domain/words.ts';
+import { nameCarcase } from './fill-words.ts';
 
 export type NewPacks = { carcaseId: string; cutId: string; grams: number[] };
 
@@ -41,7 +42,7 @@ export function WeighForm({ control, day, onSubmit, busy, saved }: WeighFormProp
           name="carcaseId"
           label="From carcase"
           placeholder="Choose one"
-          options={day.carcases.map(({ id, title }) => ({ value: id, label: title }))}
+          options={day.carcases.map((carcase) => ({ value: carcase.id, label: nameCarcase(carcase) }))}
         />
         <FormSelect
           control={control}

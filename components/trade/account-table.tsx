@@ -54,6 +54,7 @@ function priceWords(account: TradeAccount): string {
 type DecideProps = Pick<AccountTableProps, 'onDecide'> & { account: TradeAccount; busy: boolean };
 
 function Decide({ account, onDecide, busy }: DecideProps) {
+  const refusal = account.state === 'approved' ? 'Withdraw' : 'Refuse';
   return (
     <View style={css('w-row')}>
       {account.state === 'approved' ? null : (
@@ -68,10 +69,10 @@ function Decide({ account, onDecide, busy }: DecideProps) {
       )}
       {account.state === 'refused' ? null : (
         <Button
-          kind="danger"
+          kind="quiet"
           small
-          label="Refuse"
-          name={`Refuse ${account.businessName}`}
+          label={refusal}
+          name={`${refusal} ${account.businessName}`}
           busy={busy}
           onPress={() => onDecide(account, 'refused')}
         />

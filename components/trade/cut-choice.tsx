@@ -26,7 +26,7 @@ export function CutChoice({ cuts, lines, onChange }: CutChoiceProps) {
             unit="kilograms"
             label={cut.name}
             hint={`${formatRate(cut.tenthPencePerKg)}, of about ${formatWeight(cut.madeGrams)}`}
-            optional
+            required={false}
             value={grams}
             error={grams !== null && (Number.isNaN(grams) || grams <= 0) ? 'The weight must be above zero.' : undefined}
             onChange={(next) => onChange(setCutGrams(lines, cut.cutId, next))}

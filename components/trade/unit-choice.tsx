@@ -1,6 +1,7 @@
 import { View } from 'react-native';
 import { css } from '#components/theme/css.ts';
 import { Checkbox } from '#components/ui/checkbox.tsx';
+import { Disclosure } from '#components/ui/disclosure.tsx';
 import { Text } from '#components/ui/text.tsx';
 import type { ReservationLineRequest, TradeCarcase } from '#shared/contracts/trade.ts';
 import { priceForWeight } from '#shared/domain/money.ts';
@@ -36,14 +37,7 @@ export function UnitChoice({ carcase, lines, onChange }: UnitChoiceProps) {
             <Text weight="strong">{`${side.side === 'left' ? 'Left' : 'Right'} side`}</Text>
             {priced.length === 0 ? <Text tone="quiet">No price is agreed for sides, quarters or primals.</Text> : null}
             {priced.filter((unit) => !primals.includes(unit)).map(row)}
-            {primals.length > 0 ? (
-              <details>
-                <summary className="w-nav-link">
-                  <Text>Primals</Text>
-                </summary>
-                {primals.map(row)}
-              </details>
-            ) : null}
+            {primals.length > 0 ? <Disclosure words="Primals">{primals.map(row)}</Disclosure> : null}
           </View>
         );
       })}

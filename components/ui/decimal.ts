@@ -2,7 +2,7 @@
 export const UNITS = {
   kilograms: { scale: 1000, decimals: 3, atLeast: 0, before: '', after: 'kg' },
   pounds: { scale: 100, decimals: 2, atLeast: 2, before: '£', after: '' },
-  poundsPerKg: { scale: 1000, decimals: 3, atLeast: 2, before: '£', after: 'per kg' },
+  poundsPerKg: { scale: 1000, decimals: 3, atLeast: 2, before: '£', after: '/kg' },
   count: { scale: 1, decimals: 0, atLeast: 0, before: '', after: '' },
 } as const;
 

@@ -17,6 +17,7 @@ import { DayPlaces } from '#components/office/day-places.tsx';
 import { css } from '#components/theme/css.ts';
 import { useBreakpoint } from '#components/theme/use-breakpoint.ts';
 import { Button } from '#components/ui/button.tsx';
+import { Disclosure } from '#components/ui/disclosure.tsx';
 import { EmptyState } from '#components/ui/empty-state.tsx';
 import { Heading } from '#components/ui/heading.tsx';
 import { Notice } from '#components/ui/notice.tsx';
@@ -182,10 +183,9 @@ function Plan({ plan, bench, members }: PlanProps) {
         <CompareTable beforeTitle="The answer before" nowTitle="This answer" before={bench.before} now={plan} />
       ) : null}
       <Heading level={2}>Cuts and where they go</Heading>
-      <details open={isBeside} className="w-ruled">
-        <summary className="w-nav-link">Kilograms of each cut</summary>
+      <Disclosure words="Kilograms of each cut" ruled open={isBeside}>
         <CutTable cuts={plan.cuts} />
-      </details>
+      </Disclosure>
       <Outlets loose={plan.loose} trade={plan.trade} />
       <WaysSection
         sides={plan.sides}

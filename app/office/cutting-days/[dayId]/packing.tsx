@@ -5,11 +5,14 @@ import { DayPlaces } from '#components/office/day-places.tsx';
 import { CuttingList } from '#components/packs/cutting-list.tsx';
 import { DarkRoom } from '#components/packs/dark-room.tsx';
 import { FillList } from '#components/packs/fill-list.tsx';
+import { nameCarcase } from '#components/packs/fill-words.ts';
 import { PackChange } from '#components/packs/pack-change.tsx';
 import { PackList } from '#components/packs/pack-list.tsx';
 import { WeighForm, type NewPacks } from '#components/packs/weigh-form.tsx';
 import { css } from '#components/theme/css.ts';
+import { useBreakpoint } from '#components/theme/use-breakpoint.ts';
 import { Button } from '#components/ui/button.tsx';
+import { Disclosure } from '#components/ui/disclosure.tsx';
 import { Heading } from '#components/ui/heading.tsx';
 import { Notice } from '#components/ui/notice.tsx';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
@@ -96,6 +99,7 @@ function Packing({ day }: { day: PackingDay }) {
 function Weighing({ day }: { day: PackingDay }) {
   const add = useAddPacks();
   const [saved, setSaved] = useState({ count: 0, words: '' });
+  const isWide = useBreakpoint() !== 'narrow';
   const only = day.carcases.length === 1 ? day.carcases[0]?.id : undefined;
   const form = useContractForm<NewPacks>(loadPacks, { carcaseId: only ?? '', cutId: '', grams: [undefined] });
   const submit = sendForm(form, async (body) => {
@@ -105,6 +109,10 @@ function Weighing({ day }: { day: PackingDay }) {
     setSaved({ count: saved.count + 1, words: pack ? `${pack.code}: ${pack.cut}, ${formatGrams(pack.grams)}` : '' });
     form.reset({ carcaseId: body.carcaseId, cutId: body.cutId, grams: [undefined] });
   });
+  const weigh = ({ carcaseId, cutId }: { carcaseId: string; cutId: string }) => {
+    form.reset({ carcaseId, cutId, grams: [undefined] });
+    setSaved({ count: saved.count + 1, words: '' });
+  };
   return (
     <View style={css('w-columns')}>
       <View style={css('w-stack')}>
@@ -116,15 +124,13 @@ function Weighing({ day }: { day: PackingDay }) {
       <View style={css('w-stack')}>
         <Heading level={2}>Cutting list</Heading>
         {day.carcases.map((carcase) => (
-          <CuttingList
-            key={carcase.id}
-            title={carcase.title}
-            lines={day.cuttingList.filter((line) => line.carcaseId === carcase.id)}
-            onWeigh={({ carcaseId, cutId }) => {
-              form.reset({ carcaseId, cutId, grams: [undefined] });
-              setSaved({ count: saved.count + 1, words: '' });
-            }}
-          />
+          <Disclosure key={carcase.id} words={nameCarcase(carcase)} open={isWide}>
+            <CuttingList
+              title={nameCarcase(carcase)}
+              lines={day.cuttingList.filter((line) => line.carcaseId === carcase.id)}
+              onWeigh={weigh}
+            />
+          </Disclosure>
         ))}
       </View>
     </View>
