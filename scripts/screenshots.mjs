@@ -28,21 +28,45 @@ const pictures = [
     name: 'carcase-wide',
     window: wide,
     role: 'owner',
-    find: async (ask) => `/office/carcases/${(await openDay(ask)).carcases[0].id}`,
+    find: async (ask) => `/office/carcases/${(await nextDay(ask)).carcases[0].id}`,
   },
-  { name: 'allocation-wide', window: wide, role: 'owner', find: async (ask) => `${await pathOfDay(ask)}/allocation` },
-  { name: 'collections-wide', window: wide, role: 'owner', find: async (ask) => `${await pathOfDay(ask)}/collections` },
-  { name: 'run-sheet-phone', window: phone, role: 'owner', find: async (ask) => `${await pathOfDay(ask)}/run-sheet` },
+  {
+    name: 'allocation-wide',
+    window: wide,
+    role: 'owner',
+    find: async (ask) => `${pathOf(await nextDay(ask))}/allocation`,
+  },
+  {
+    name: 'collections-wide',
+    window: wide,
+    role: 'owner',
+    find: async (ask) => `${pathOf(await pastDay(ask))}/collections`,
+  },
+  {
+    name: 'run-sheet-phone',
+    window: phone,
+    role: 'owner',
+    find: async (ask) => `${pathOf(await pastDay(ask))}/run-sheet`,
+  },
 ];
 
-async function openDay(ask) {
+async function listDays(ask) {
   const { days } = await ask('/api/cutting-days');
-  const next = days.filter((day) => day.state === 'open').sort((a, b) => a.day.localeCompare(b.day))[0];
-  if (!next) throw new Refusal('No cutting day is open: npm run reset makes the demo farm afresh.');
-  return ask(`/api/cutting-days/${next.id}`);
+  return days.sort((a, b) => a.day.localeCompare(b.day));
 }
 
-const pathOfDay = async (ask) => `/office/cutting-days/${(await openDay(ask)).id}`;
+/** The next cutting day, which is on sale. */
+async function nextDay(ask) {
+  const today = new Date().toISOString().slice(0, 10);
+  const day = (await listDays(ask)).find((each) => each.day >= today);
+  if (!day) throw new Refusal('No cutting day is ahead: npm run reset makes the demo farm afresh.');
+  return ask(`/api/cutting-days/${day.id}`);
+}
+
+/** The first cutting day of the demo, which is over. */
+const pastDay = async (ask) => (await listDays(ask))[0];
+
+const pathOf = (day) => `/office/cutting-days/${day.id}`;
 
 function accountOf(role) {
   const people = JSON.parse(readFileSync(path.join(root, 'db/seed/demo-sign-ins.json'), 'utf8'));

@@ -40,10 +40,12 @@ export function TradeShell(props: TradeShellProps) {
       </View>
       {links.length > 0 ? (
         <View role="navigation" aria-label="Trade" style={css('w-strip')}>
-          <View style={css('w-page', 'w-nav')}>
-            {links.map((link) => (
-              <NavLink key={link.label} {...link} current={isAt(path, link)} />
-            ))}
+          <View style={css('w-page')}>
+            <View style={css('w-nav')}>
+              {links.map((link) => (
+                <NavLink key={link.label} {...link} current={isAt(path, link)} />
+              ))}
+            </View>
           </View>
         </View>
       ) : null}

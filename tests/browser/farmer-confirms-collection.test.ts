@@ -99,7 +99,7 @@ test('the farmer, on the cutting day, weighs, fills the order, confirms its mail
   await page.getByRole('button', { name: 'Confirm 1 mail' }).click();
   await page.getByText('Confirmed.', { exact: true }).waitFor();
   await page.getByText('queued', { exact: true }).first().waitFor();
-  await world.runJobs();
+  await world.runJobs(['send-mail']);
   await page.reload();
   await page.getByText('sent', { exact: true }).first().waitFor();
   await expectAccessible(page);
