@@ -6,6 +6,7 @@ import { insertPeople, type DemoPeople, type SignIn } from '#db/seed/demo-people
 import signIns from '#db/seed/demo-sign-ins.json' with { type: 'json' };
 import { insertStartingProducts } from '#db/seed/starting-products.ts';
 import type { Deps } from '#server/deps.ts';
+import { enqueue } from '#server/queue.ts';
 import { addDays } from '#shared/domain/day.ts';
 import { demoDays } from './demo-days.ts';
 import { onDay } from './demo-deps.ts';
@@ -46,20 +47,31 @@ type Sellers = { seeded: SeededDays; people: DemoPeople };
 async function sellDays(deps: Deps, chance: Chance, { seeded, people }: Sellers): Promise<void> {
   const today = deps.clock.today();
   const { past, next, second } = seeded;
-  const { customers, ownerId } = people;
+  const { customers } = people;
   const early = customers.slice(0, 1);
-  await openSale(onDay(deps, addDays(past.day, -12)), past, ownerId);
+  await openSales(deps, seeded, people.ownerId);
   const before = onDay(deps, addDays(past.cutOffDay, -1));
   await seedOrders(before, chance, { day: past, people: [...early, ...customers.slice(12, 36)], from: 9 });
   await seedPastDay(deps, chance, { day: past, people });
-  await forgetJobs(deps.db, ['replan-day', 'explain-allocation', 'send-mail']);
-  await openSale(onDay(deps, addDays(today, -9)), next, ownerId);
-  const orders = await seedOrders(onDay(deps, addDays(today, -1)), chance, {
+  await forgetJobs(deps.db, ['send-mail']);
+  const yesterday = onDay(deps, addDays(today, -1));
+  const [first] = await seedOrders(yesterday, chance, {
     day: next,
     people: [...early, ...customers.slice(4, 30)],
     from: 7,
   });
-  await openSale(onDay(deps, addDays(today, -2)), second, ownerId);
-  await seedOrders(onDay(deps, addDays(today, -1)), chance, { day: second, people: customers.slice(30, 38), from: 1 });
-  if (orders[0]) await sendConfirmation(deps, orders[0].id);
+  await seedOrders(yesterday, chance, { day: second, people: customers.slice(30, 38), from: 1 });
+  if (first) await sendConfirmation(deps, first.id);
+}
+
+/** All at once: each waits for the solver most of the time. Only what is still on sale is explained. */
+async function openSales(deps: Deps, { past, next, second }: SeededDays, ownerId: string): Promise<void> {
+  const today = deps.clock.today();
+  const [, ...open] = await Promise.all([
+    openSale(onDay(deps, addDays(past.day, -12)), past, ownerId),
+    openSale(onDay(deps, addDays(today, -9)), next, ownerId),
+    openSale(onDay(deps, addDays(today, -2)), second, ownerId),
+  ]);
+  await forgetJobs(deps.db, ['replan-day', 'explain-allocation']);
+  for (const allocationId of open) await enqueue(deps.db, 'explain-allocation', { allocationId });
 }

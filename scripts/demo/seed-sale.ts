@@ -3,7 +3,8 @@ import type { Deps } from '#server/deps.ts';
 import type { SeededDay } from './seed-days.ts';
 
 /** Works a day out and puts the answer on sale, as the owner does in the workbench. */
-export async function openSale(deps: Deps, day: SeededDay, ownerId: string): Promise<void> {
+export async function openSale(deps: Deps, day: SeededDay, ownerId: string): Promise<string> {
   const row = await allocateDay(deps, day.id, []);
   await publishAllocation(deps, { allocationId: row.id, figuresVersion: row.figuresVersion, byUserId: ownerId });
+  return row.id;
 }

@@ -12,13 +12,6 @@ export function listAnimalRows(db: Db | Tx): Promise<AnimalRow[]> {
   return db.select().from(animal).orderBy(asc(animal.born), asc(animal.earTag));
 }
 
-export function listAnimalsByIds(db: Db | Tx, animalIds: readonly string[]): Promise<AnimalRow[]> {
-  return db
-    .select()
-    .from(animal)
-    .where(inArray(animal.id, [...animalIds]));
-}
-
 export async function findAnimal(db: Db | Tx, animalId: string): Promise<AnimalRow | null> {
   const rows = await db.select().from(animal).where(eq(animal.id, animalId));
   return rows[0] ?? null;
