@@ -10,6 +10,7 @@ import { recordAudit } from '#server/farm/audit-queries.ts';
 import { choosePacks } from './choose-packs.ts';
 import { describeFill, type Job } from './fill-work.ts';
 import { endAssignments, insertAssignments, listOrderWork, moveOrder } from './pack-queries.ts';
+import { mendBoxes } from './mend-boxes.ts';
 import { loadWork, readPackingDay, type PackingWork } from './packing-day.ts';
 import { settleWeights } from './settle-weights.ts';
 
@@ -20,14 +21,15 @@ export type Placement = { pack: WeighedPack; job: Job; boxLine: string };
 
 /**
  * Puts the packs in the chiller into the day's orders: butchers' cuts and loose packs by weight, boxes by the engine's
- * fill. What is filled stays as it is, and so does every packed order; an open box that fails its recipe is taken apart
- * and filled again.
+ * fill. What is filled stays as it is, and so does every packed order but where a
+ * broken box can only be mended by changing a pack with it; what cannot be mended is taken apart and filled again.
  */
 export async function fillOrders(deps: Deps, byUserId: string, dayId: string): Promise<PackingDay> {
   return deps.db.transaction(async (tx) => {
     const day = await lockCuttingDay(tx, dayId);
     if (!day) throw new AppError('NOT_FOUND', 'There is no such cutting day.');
     if (day.state === 'closed') throw new AppError('STATE_CHANGED', 'This cutting day is closed. Nothing was changed.');
+    await mendBoxes(tx, byUserId, await loadWork(tx, dayId));
     await takeApart(tx, byUserId, await loadWork(tx, dayId));
     const work = await loadWork(tx, dayId);
     const placements = planPlacements(work);
@@ -121,6 +123,8 @@ async function markPacked(deps: Deps, tx: Tx, dayId: string): Promise<void> {
   for (const [orderId, state] of orders) {
     const ofOrder = jobs.filter((job) => job.orderId === orderId);
     const isPacked = ofOrder.every((job) => describeFill(job).isFilled);
+    // A mended box may have changed a pack with an order that was packed before.
+    if (isPacked && state === 'packed') await settleWeights(deps, tx, { orderId, jobs });
     if (!isPacked || !canMoveOrder(state, 'packed')) continue;
     if (await moveOrder(tx, orderId, { from: state, to: 'packed' })) await settleWeights(deps, tx, { orderId, jobs });
   }

@@ -1,6 +1,6 @@
 import { and, asc, desc, eq, inArray, sql } from 'drizzle-orm';
 import { offer } from '#db/schema/allocations.ts';
-import { carcase, cuttingDay } from '#db/schema/carcases.ts';
+import { carcase } from '#db/schema/carcases.ts';
 import { animal } from '#db/schema/herd.ts';
 import { customerOrder, orderLine } from '#db/schema/orders.ts';
 import { pack, packAssignment, stockMovement } from '#db/schema/packs.ts';
@@ -162,10 +162,5 @@ export async function markCut(tx: Tx, carcaseId: string): Promise<void> {
 
 export async function readCut(db: Db | Tx, cutId: string) {
   const rows = await db.select().from(cut).where(eq(cut.id, cutId));
-  return rows[0] ?? null;
-}
-
-export async function readDayOf(db: Db | Tx, dayId: string) {
-  const rows = await db.select().from(cuttingDay).where(eq(cuttingDay.id, dayId));
   return rows[0] ?? null;
 }

@@ -188,6 +188,28 @@ describe('filling the orders of a day', () => {
     await expectBalanced();
   });
 
+  test('a box that only another box can mend changes a pack with it, and everything else stays shut', async () => {
+    const before = await bench.read();
+    for (const spare of before.packs.filter((each) => each.place === 'chiller' && each.orderNo === null)) {
+      await bench.lose(spare.id, 'own use');
+    }
+    const stews = before.packs
+      .filter((each) => each.cutId === 'diced-beef' && each.orderNo !== null)
+      .sort((a, b) => a.grams - b.grams);
+    const lightest = stews[0];
+    const [lost, beside] = stews.filter((each) => each.orderNo !== lightest?.orderNo);
+    expect(lightest?.grams).toBeLessThan(beside?.grams ?? 0);
+    // The stew takes 2.2 kg at most: this pack goes in beside the lightest one, in the other box, and nowhere else.
+    await bench.weigh('diced-beef', [2_200 - (lightest?.grams ?? 0)]);
+    await bench.lose(lost?.id ?? '', 'torn');
+    const mended = await bench.fill();
+    expect(mended.fills.every((fill) => fill.isFilled)).toBe(true);
+    const isOther = (fill: Fill) => fill.orderNo !== lost?.orderNo && fill.orderNo !== lightest?.orderNo;
+    expect(mended.fills.filter(isOther)).toEqual(before.fills.filter(isOther));
+    expect(mended.packs.every((each) => each.place !== 'chiller' || each.orderNo !== null)).toBe(true);
+    await expectBalanced();
+  });
+
   test('two fills at once put no pack into two orders', async () => {
     await makeConfirmedOrder(world, bench, { lines: [boxes(2)] });
     await weighEverydayBox(bench);
