@@ -30,9 +30,3 @@ export function hungWords(days: number): string {
   if (days > 0 && Number.isInteger(weeks)) return `${numberWord(weeks)} ${weeks === 1 ? 'week' : 'weeks'}`;
   return `${days} ${days === 1 ? 'day' : 'days'}`;
 }
-
-/** `Fri 11 or Sat 12 Dec`: joins what is joined in speech. */
-export function joinOr(parts: readonly string[]): string {
-  if (parts.length < 2) return parts.join('');
-  return `${parts.slice(0, -1).join(', ')} or ${parts[parts.length - 1]}`;
-}

@@ -37,13 +37,5 @@ export const darkPalette = {
   strawText: '#E9C46C',
 } as const;
 
-/** Pixels. */
-export const space = { hair: 2, xs: 4, s: 8, m: 12, l: 16, xl: 24, xxl: 32, huge: 48 } as const;
-
-export const radius = 3;
-
-/** The least height and width of anything that is pressed, in pixels. */
-export const targetSize = 44;
-
 /** Widths in pixels at which the layout changes; container queries of the table and the rail have their own. */
 export const breakpoints = { wide: 760, office: 1000 } as const;

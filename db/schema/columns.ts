@@ -1,4 +1,4 @@
-import { customType, date, integer, timestamp, uuid } from 'drizzle-orm/pg-core';
+import { date, integer, timestamp, uuid } from 'drizzle-orm/pg-core';
 
 export const id = () => uuid().primaryKey().defaultRandom();
 export const createdAt = () => timestamp({ withTimezone: true }).notNull().defaultNow();
@@ -9,5 +9,3 @@ export const day = () => date({ mode: 'string' });
 
 /** Raised by each edit; an edit names the version it read, so that the second of two editors is told. */
 export const version = () => integer().notNull().default(1);
-
-export const bytes = customType<{ data: Buffer }>({ dataType: () => 'bytea' });

@@ -28,11 +28,6 @@ export const Line = z
   .min(1, 'This is needed.')
   .max(120, 'At most 120 characters.')
   .regex(noControls, 'Use one line, without line breaks.');
-export const OptionalLine = z
-  .string()
-  .trim()
-  .max(120, 'At most 120 characters.')
-  .regex(noControls, 'Use one line, without line breaks.');
 export const Note = z.string().trim().max(500, 'At most 500 characters.');
 export const Email = z
   .string()
@@ -75,5 +70,3 @@ export type Rail = z.infer<typeof Rail>;
 
 export const Side = z.enum(['left', 'right']);
 export type Side = z.infer<typeof Side>;
-
-export const Done = z.strictObject({ done: z.literal(true) });
