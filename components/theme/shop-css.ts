@@ -75,7 +75,7 @@ const basket = `
 :root .w-rows-plain{display:flex;flex-direction:column;margin:0;padding:0;border:0 solid var(--line);border-top-width:1px}
 :root .w-item{display:grid;grid-template-columns:minmax(0,1fr) auto;gap:8px 16px;align-items:center;padding-block:16px;border:0 solid var(--line);border-bottom-width:1px}
 :root .w-item-words{display:flex;flex-direction:column;gap:2px;min-width:0;align-self:start}
-:root .w-item-price{align-self:start;text-align:end}
+:root .w-item-price{align-self:start;align-items:flex-end;text-align:end}
 :root .w-item-news{grid-column:1/-1}
 :root .w-item-do{display:flex;flex-direction:row;align-items:center;gap:4px 8px;flex-wrap:wrap}
 :root .w-item-end{justify-self:end}

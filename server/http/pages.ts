@@ -24,8 +24,7 @@ export function pages(root: string): Router {
   router.use(sitemap(client));
   router.use(express.static(client, { index: false, maxAge: 3_600_000 }));
   const build = path.join(root, 'dist', 'server');
-  router.use(warmFirst(build));
-  router.use(finishPage);
+  router.use(finishPage, noEscapes, canonicalQuery, warmFirst(build));
   router.use(createRequestHandler({ build }));
   router.use(brokenPage);
   return router;
@@ -52,6 +51,23 @@ function precompressed(client: string): RequestHandler {
     next();
   };
 }
+
+/** None of our addresses needs escaping, and the router loses a page's data under one that has it. */
+const noEscapes: RequestHandler = (request, response, next) => {
+  if (!request.path.includes('%')) return next();
+  response.status(404).type('html').send(NO_SUCH_PAGE);
+};
+
+/** The router finds a page's data again by its whole address, written its own way: `a+b`, where a mail has `a%20b`. */
+const canonicalQuery: RequestHandler = (request, _response, next) => {
+  const at = request.url.indexOf('?');
+  if (at >= 0) {
+    const query = new URLSearchParams(request.url.slice(at)).toString();
+    request.url = request.url.slice(0, at) + (query ? `?${query}` : '');
+    request.originalUrl = request.url;
+  }
+  next();
+};
 
 /**
  * Holds a rendered page back until it is whole. Its status is what the page itself says it shows: a screen for a missing
@@ -95,9 +111,18 @@ const brokenPage: ErrorRequestHandler = (error, request, response, next) => {
   response.status(500).type('html').send(BROKEN);
 };
 
-const BROKEN = `<!doctype html><html lang="en-GB"><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1"><title>This page did not open</title>
+/** A page that needs nothing of the app: no script, no data. */
+function plainPage(title: string, words: string): string {
+  return `<!doctype html><html lang="en-GB"><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1"><meta name="robots" content="noindex"><title>${title}</title>
 <style>body{margin:0 auto;max-width:38rem;padding:64px 20px;font:1.0625rem/1.5 system-ui,sans-serif;background:#FBF6F1;color:#1E1A18}a{color:#A8341F}@media (prefers-color-scheme:dark){body{background:#171311;color:#F4EAE0}a{color:#F0917A}}</style>
-<h1>This page did not open</h1><p>The fault is ours, and nothing of yours was changed. Please try again in a minute.</p><p><a href="/">To the shop</a></p></html>`;
+<main><h1>${title}</h1><p>${words}</p><p><a href="/">To the shop</a></p></main></html>`;
+}
+
+const BROKEN = plainPage(
+  'This page did not open',
+  'The fault is ours, and nothing of yours was changed. Please try again in a minute.',
+);
+const NO_SUCH_PAGE = plainPage('There is no such page', 'The address may have been typed wrongly.');
 
 function contentSecurityPolicy(html: string): string {
   const inline = [...html.matchAll(/<script(?![^>]*\ssrc=)[^>]*>([\s\S]*?)<\/script>/g)].map((match) => match[1] ?? '');
