@@ -1,9 +1,12 @@
+import { desc } from 'drizzle-orm';
 import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { type BrowserWorld, expectAccessible, fillSignIn, startBrowserWorld, WIDE } from '#tests/support/browser.ts';
 import { makeCollectionPoint } from '#tests/support/make-collection-point.ts';
 import { makeAnimal } from '#tests/support/make-farm.ts';
 import { makeShelves } from '#tests/support/make-selling-day.ts';
+import { allocation } from '#db/schema/allocations.ts';
+import { explainAllocation } from '#server/allocation/allocation-service.ts';
 import { addDays } from '#shared/domain/day.ts';
 import { earTagCheckDigit, formatEarTag } from '#shared/domain/ear-tag.ts';
 import { formatDay } from '#shared/domain/words.ts';
@@ -82,6 +85,13 @@ async function enterKillSheets(page: Page, killDay: string): Promise<void> {
   await page.goto(overview);
 }
 
+/** What the worker does a moment after each plan; here for the newest alone. */
+async function explainLatest(): Promise<void> {
+  const { db, deps } = farm.world;
+  const [latest] = await db.select({ id: allocation.id }).from(allocation).orderBy(desc(allocation.createdAt)).limit(1);
+  await explainAllocation(deps, latest?.id ?? '');
+}
+
 /** Forces the ribs to be cut in the other way, and returns the words that say what that costs. */
 async function lockAnotherWay(page: Page): Promise<string> {
   await page
@@ -104,7 +114,10 @@ async function lockAnotherWay(page: Page): Promise<string> {
     break;
   }
   await page.getByText('The locks have changed.').waitFor();
+  const drafts = await farm.world.db.$count(allocation);
   await page.getByRole('button', { name: 'Work it out again' }).click();
+  await expect.poll(() => farm.world.db.$count(allocation), PLAN).toBe(drafts + 1);
+  await explainLatest();
   const cost = panel.getByText(/^This lock costs/);
   await cost.waitFor(PLAN);
   return cost.innerText();
