@@ -46,11 +46,19 @@ const CUT_RATES: Readonly<Record<string, number>> = {
   'primal:topside': 11_200,
 };
 
+/** The last of the customers has a shop and waits for the farm's answer. */
+const APPLICATION = {
+  businessName: "Oxlade's Larder",
+  addressLines: ['9 Tan Row', 'Saltmere', 'ZZ2 4TR'],
+  phone: '01632 960214',
+  state: 'applied',
+} satisfies Partial<typeof tradeAccount.$inferInsert>;
+
 export type Person = { id: string; name: string; email: string; phone: string };
 export type DemoPeople = { ownerId: string; packerId: string; customers: Person[]; butchers: { accountId: string }[] };
 export type SignIn = { role: Role; name: string; email: string; password: string };
 
-/** Forty customers, three butchers, an owner and a packer. Only those with a password can sign in. */
+/** Forty customers, one of whom would like to buy for a shop, three butchers, an owner and a packer. Only those with a password can sign in. */
 export async function insertPeople(
   tx: Tx,
   chance: Chance,
@@ -84,6 +92,8 @@ export async function insertPeople(
     const userId = await addUser('butcher', butcher.name, butcher.email);
     butchers.push({ accountId: await insertTradeAccount(tx, userId, butcher) });
   }
+  const applicant = customers.at(-1);
+  if (applicant) await tx.insert(tradeAccount).values({ ...APPLICATION, userId: applicant.id });
   return { ownerId, packerId, customers, butchers };
 }
 

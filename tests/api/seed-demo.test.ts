@@ -46,7 +46,7 @@ describe('the demo farm', () => {
   });
 
   test('has three butchers, forty customers and twelve loose cuts', async () => {
-    expect(await world.db.$count(tradeAccount)).toBe(3);
+    expect(await world.db.$count(tradeAccount, eq(tradeAccount.state, 'approved'))).toBe(3);
     const customers = await world.db.query.user.findMany({ where: (user) => eq(user.role, 'customer') });
     expect(customers).toHaveLength(40);
     expect(customers.every((customer) => customer.email.endsWith('example.com'))).toBe(true);
