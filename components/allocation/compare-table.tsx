@@ -70,5 +70,6 @@ export function compareRows(before: Allocation | null, now: Allocation, onSale =
     now: formatWeight(leftOverGrams(now)),
     difference: before ? formatWeight(leftOverGrams(now) - leftOverGrams(before)) : '–',
   };
-  return [money, ...rows.filter((row) => row.difference !== 'none' || is.has(row.id)), left];
+  // Against nothing on sale, every row is news; against something, only what changes is.
+  return [money, ...rows.filter((row) => row.difference !== 'none' || before === null), left];
 }

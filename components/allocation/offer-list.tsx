@@ -38,5 +38,7 @@ export function OfferList({ boxes, isExplained }: OfferListProps) {
 }
 
 function limitWords(limitedBy: readonly string[]): string {
-  return limitedBy.length > 0 ? `Limited by ${limitedBy.join('; ')}` : 'Limited by what people are likely to buy';
+  if (limitedBy.length === 0) return 'Limited by what people are likely to buy';
+  const lines = limitedBy.map((line) => line.replace(' short for one more', ''));
+  return `Limited by its cuts. One more lacks ${lines.join(', ')}`;
 }

@@ -10,6 +10,9 @@ import { formatDay, formatGrams } from '#shared/domain/words.ts';
 /** The last packs are the ones in hand; the others are shown when asked for. */
 const LAST = 12;
 
+/** What has left the farm, or was booked out, stays as it is. */
+const CHANGEABLE = new Set(['chiller', 'order']);
+
 export function PackList({ packs, onOpen }: { packs: readonly Pack[]; onOpen: (pack: Pack) => void }) {
   const [isAll, setAll] = useState(false);
   const newestFirst = packs.toReversed();
@@ -31,15 +34,18 @@ export function PackList({ packs, onOpen }: { packs: readonly Pack[]; onOpen: (p
           {
             id: 'change',
             title: 'Change',
-            cell: (pack) => (
-              <Button
-                kind="quiet"
-                small
-                label="Change"
-                name={`Change pack ${pack.code}`}
-                onPress={() => onOpen(pack)}
-              />
-            ),
+            cell: (pack) =>
+              CHANGEABLE.has(pack.place) ? (
+                <Button
+                  kind="quiet"
+                  small
+                  label="Change"
+                  name={`Change pack ${pack.code}`}
+                  onPress={() => onOpen(pack)}
+                />
+              ) : (
+                'gone out'
+              ),
           },
         ]}
       />

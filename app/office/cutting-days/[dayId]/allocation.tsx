@@ -168,11 +168,11 @@ function Plan({ plan, bench, members }: PlanProps) {
           isNaming={!isBeside}
         />
         <View style={css('w-stack-l')}>
+          {isBeside && panel ? <div style={{ position: 'sticky', top: 16, zIndex: 1 }}>{panel}</div> : null}
           <View>
             <Heading level={2}>On offer</Heading>
             <OfferList boxes={plan.boxes} isExplained={plan.isExplained} />
           </View>
-          {isBeside ? panel : null}
           <PlanFigures plan={plan} />
           <TextLink href={allocationModelHref(plan.id)} outside place="alone">
             Save the model as a file
