@@ -12,6 +12,7 @@ import { identify, stopProcess } from './steps/processes.mjs';
 import { onStop, program } from './steps/program.mjs';
 import { Refusal, say, step } from './steps/say.mjs';
 import { demoEnvironment, readPorts, requireNode, root } from './steps/settings.mjs';
+import { ensureSolvers } from './steps/solvers.mjs';
 import { startTestCluster } from './steps/test-cluster.mjs';
 import { ensureWebApp } from './steps/web-app.mjs';
 
@@ -49,7 +50,10 @@ async function bench() {
   const wanted = process.argv.slice(2);
   const wants = (name) => wanted.length === 0 || wanted.includes(name);
   await ensureDependencies();
-  if (wants('allocation')) await benchAllocation();
+  if (wants('allocation')) {
+    await ensureSolvers();
+    await benchAllocation();
+  }
   if (!wants('list') && !wants('load')) return;
   await ensureWebApp();
   if (wants('load')) await ensureChromium();

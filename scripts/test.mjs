@@ -11,6 +11,7 @@ import { identify, stopProcess } from './steps/processes.mjs';
 import { isStopping, onStop, program, sentenceFor } from './steps/program.mjs';
 import { say, step } from './steps/say.mjs';
 import { dataDir, requireNode, root } from './steps/settings.mjs';
+import { missingSolvers } from './steps/solvers.mjs';
 import { startTestCluster } from './steps/test-cluster.mjs';
 import { ensureWebApp } from './steps/web-app.mjs';
 
@@ -27,10 +28,7 @@ function chooseProjects(words) {
 }
 
 async function ensurePrograms(projects, needsDatabase) {
-  const missing = [];
-  // Two solvers of other hands, which the tests of the allocation check ours against.
-  if (projects.includes('unit') && !existsSync('/usr/bin/cbc')) missing.push('coinor-cbc');
-  if (projects.includes('unit') && !existsSync('/usr/bin/glpsol')) missing.push('glpk-utils');
+  const missing = projects.includes('unit') ? missingSolvers() : [];
   if (projects.includes('browser') && !isChromiumInstalled()) missing.push('chromium');
   const lacksPostgres = needsDatabase && !isPostgresInstalled();
   const all = lacksPostgres ? [...missing, 'postgresql'] : missing;
