@@ -2,7 +2,7 @@ const header = `
 :root .w-shell{display:flex;flex-direction:column;min-height:100dvh;background:var(--page)}
 :root .w-skip{position:absolute;left:8px;top:-100px;z-index:10;background:var(--page);padding:12px 16px;color:var(--text);font-weight:600}
 :root .w-skip:focus{top:8px}
-:root .w-head{display:flex;flex-direction:row;align-items:center;justify-content:space-between;gap:4px 24px;min-height:64px;padding-block:8px}
+:root .w-head{display:flex;flex-direction:row;flex-wrap:wrap;align-items:center;justify-content:space-between;gap:4px 24px;min-height:64px;padding-block:8px}
 :root .w-mark{display:inline-flex;align-items:center;min-height:44px;text-decoration-line:none}
 :root .w-mark-more{font-family:'Public Sans','Public Sans stand-in',system-ui,sans-serif;font-weight:400;font-size:.875rem;color:var(--quiet);margin-inline-start:10px}
 :root .w-nav{display:flex;flex-direction:row;flex-wrap:wrap;gap:4px 28px;align-items:center;margin:0;padding:0;list-style:none}
@@ -16,7 +16,7 @@ const header = `
 :root .w-strip .w-nav-link{white-space:nowrap}
 :root .w-foot{border-top:1px solid var(--line);margin-top:auto;padding-block:24px 40px}
 :root .w-foot-columns{display:flex;flex-direction:column;gap:24px}
-:root .w-foot-links{display:grid;grid-template-columns:repeat(2,minmax(0,auto));gap:0 32px;justify-content:start}
+:root .w-foot-links{display:grid;grid-template-columns:repeat(auto-fill,minmax(min(100%,8.5rem),1fr));gap:0 32px;width:100%;max-width:20rem}
 @media (min-width:760px){:root .w-foot-columns{flex-direction:row;justify-content:space-between;align-items:flex-start;gap:40px}}
 @media print{:root .w-head,:root .w-foot,:root .w-strip,:root .w-skip{display:none}}
 `;

@@ -97,5 +97,17 @@ const orders = `
 :root .w-code{font-variant-numeric:tabular-nums;letter-spacing:.04em}
 `;
 
+// Letters at twice their size leave room for one column: measured in letters, not in pixels.
+const large = `
+:root .w-shell>.w-main>*{container-type:inline-size;container-name:page}
+@container page (max-width:16rem){
+:root .w-good,:root .w-inside-line,:root .w-cut,:root .w-item,:root .w-step,:root .w-definitions-facts>.w-definition{grid-template-columns:minmax(0,1fr)}
+:root .w-good>:nth-child(even),:root .w-item-price,:root .w-item-end{justify-self:start;text-align:start;align-items:flex-start}
+:root .w-cut-words,:root .w-cut-buy{grid-column:auto}
+:root .w-cut>.w-drawing{grid-row:auto}
+:root .w-cut-price{align-items:flex-start;text-align:start}
+}
+`;
+
 /** How the parts of the shop's pages look: goods on the counter, what is inside a box, slots, the way of an order. */
-export const shopCss = drawings + goods + hero + box + choices + cuts + basket + orders;
+export const shopCss = drawings + goods + hero + box + choices + cuts + basket + orders + large;

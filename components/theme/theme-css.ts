@@ -50,7 +50,7 @@ html:root :where([class^='w-'],[class*=' w-']){${sans}}
 `;
 
 const links = `
-:root .w-link{color:var(--actionText);font-weight:600;text-decoration-line:underline;text-decoration-thickness:1px;text-underline-offset:.2em;text-decoration-color:color-mix(in srgb,currentColor 45%,transparent)}
+:root .w-link{max-width:100%;overflow-wrap:anywhere;color:var(--actionText);font-weight:600;text-decoration-line:underline;text-decoration-thickness:1px;text-underline-offset:.2em;text-decoration-color:color-mix(in srgb,currentColor 45%,transparent)}
 :root .w-link:hover{text-decoration-color:currentColor;text-decoration-thickness:2px}
 :root .w-link-ink{color:var(--text);font-weight:400}
 :root .w-link-alone{${sans};font-size:1rem;line-height:1.3;display:inline-flex;align-items:center;min-height:44px;text-decoration-line:none;gap:.35em}
