@@ -6,7 +6,7 @@ import type { WeighingDepth } from './weights-form.tsx';
 const depths = [
   { value: 'quarters', label: 'side and quarters' },
   { value: 'primals', label: 'primals' },
-  { value: 'cuts', label: 'cuts, trim, bone and fat' },
+  { value: 'cuts', label: 'primals and what is cut from them' },
 ] as const satisfies readonly { value: WeighingDepth; label: string }[];
 
 const sides = [

@@ -26,19 +26,21 @@ type WeightsFormProps = {
 
 /** Weights read off the scale. What is left empty stays an estimate; an emptied field takes its weight back. */
 export function WeightsForm({ control, nodes, depth, onSubmit, busy }: WeightsFormProps) {
-  const groups = groupsOf(nodes, depth);
+  const isFlat = depth === 'primals';
   return (
     <FormFrame name="Weights" onSubmit={onSubmit}>
-      {groups.map((group) => (
-        <View key={group.name} role="group" aria-label={group.name} style={css('w-stack-s', 'w-ruled')}>
-          <SmallCaps>{group.name}</SmallCaps>
-          <View style={css('w-fields')}>
-            {group.rows.map(({ node, at }) => (
-              <WeightRow key={node.path} control={control} node={node} at={at} />
-            ))}
+      <View style={css(isFlat ? 'w-fields' : 'w-stack')}>
+        {groupsOf(nodes, depth).map(({ name, rows }) => (
+          <View key={name} role="group" aria-label={name} style={css(!isFlat && 'w-stack-s', !isFlat && 'w-ruled')}>
+            {isFlat ? null : <SmallCaps>{name}</SmallCaps>}
+            <View style={css('w-fields')}>
+              {rows.map(({ node, at }) => (
+                <WeightRow key={node.path} control={control} node={node} at={at} />
+              ))}
+            </View>
           </View>
-        </View>
-      ))}
+        ))}
+      </View>
       <View style={css('w-buttons')}>
         <Button label="Save the weights" busy={busy} onPress={onSubmit} />
       </View>
@@ -67,15 +69,19 @@ function WeightRow({ control, node, at }: { control: Control<Weights>; node: Cut
 
 type Row = { node: CutoutNode; at: number };
 
-/** Sides and quarters, then the primals, each with its lines when the cuts are weighed. */
+/** Side and quarters; or the primals, alone or each with what is cut from it. */
 function groupsOf(nodes: readonly CutoutNode[], depth: WeighingDepth): { name: string; rows: Row[] }[] {
   const rows = nodes.map((node, at) => ({ node, at }));
-  const whole = rows.filter(({ node }) => node.level === 'side' || node.level === 'quarter');
-  const primals = rows.filter(({ node }) => node.level === 'primal');
-  if (depth === 'quarters') return [{ name: 'Side and quarters', rows: whole }];
-  if (depth === 'primals') return [{ name: 'Primals', rows: primals }];
-  return primals.map((primal) => ({
-    name: primal.node.name,
-    rows: rows.filter(({ node }) => node.level === 'line' && node.parentPath === primal.node.path),
-  }));
+  if (depth === 'quarters') {
+    const whole = rows.filter(({ node }) => node.level === 'side' || node.level === 'quarter');
+    return [{ name: 'Side and quarters', rows: whole }];
+  }
+  const linesOf = ({ path }: CutoutNode) =>
+    rows.filter(({ node }) => node.level === 'line' && node.parentPath === path);
+  return rows
+    .filter(({ node }) => node.level === 'primal')
+    .map((primal) => ({
+      name: primal.node.name,
+      rows: depth === 'primals' ? [primal] : [primal, ...linesOf(primal.node)],
+    }));
 }

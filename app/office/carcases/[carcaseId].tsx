@@ -49,7 +49,7 @@ type ReadyProps = { carcase: Carcase; round: number; afresh: () => void };
 
 function Ready({ carcase, round, afresh }: ReadyProps) {
   const [side, setSide] = useState<'left' | 'right'>('left');
-  const [depth, setDepth] = useState<WeighingDepth>('quarters');
+  const [depth, setDepth] = useState<WeighingDepth>('primals');
   const isKilled = carcase.state !== 'booked';
   useTitle(nameCarcase(carcase));
   return (
