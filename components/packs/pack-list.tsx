@@ -10,6 +10,15 @@ import { formatDay, formatGrams } from '#shared/domain/words.ts';
 /** The last packs are the ones in hand; the others are shown when asked for. */
 const LAST = 12;
 
+/** Where a pack is when no order has it. */
+const PLACES: Record<string, string> = {
+  chiller: 'in the chiller',
+  freezer: 'in the freezer',
+  carcase: 'never was',
+  waste: 'thrown away',
+  'own use': 'kept for own use',
+};
+
 /** What has left the farm, or was booked out, stays as it is. */
 const CHANGEABLE = new Set(['chiller', 'order']);
 
@@ -44,7 +53,7 @@ export function PackList({ packs, onOpen }: { packs: readonly Pack[]; onOpen: (p
                   onPress={() => onOpen(pack)}
                 />
               ) : (
-                'gone out'
+                '–'
               ),
           },
         ]}
@@ -59,5 +68,5 @@ export function PackList({ packs, onOpen }: { packs: readonly Pack[]; onOpen: (p
 }
 
 function placeOf(pack: Pack): string {
-  return pack.orderNo === null ? pack.place : `order ${pack.orderNo}, ${pack.orderName ?? ''}`;
+  return pack.orderNo === null ? (PLACES[pack.place] ?? pack.place) : `order ${pack.orderNo}, ${pack.orderName ?? ''}`;
 }

@@ -37,6 +37,7 @@ export function NumberField({ unit, value, onChange, error, ...field }: NumberFi
 /** The contract speaks of grams and pence; whoever typed kilograms or pounds is told about those. */
 function sayOf(value: number | null, { unit, error }: { unit: Unit; error: string }): string {
   if (value === null) return 'This is needed.';
+  if (value < 0) return 'This cannot be below zero.';
   if (!Number.isNaN(value)) return error;
   if (unit === 'count') return 'Give a whole number, such as 4.';
   return unit === 'kilograms' ? 'Give kilograms, such as 4.25.' : 'Give pounds, such as 18.50.';
