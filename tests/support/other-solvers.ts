@@ -1,4 +1,5 @@
 import { execFile } from 'node:child_process';
+import { existsSync } from 'node:fs';
 import { mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
 import os from 'node:os';
 import path from 'node:path';
@@ -25,9 +26,11 @@ async function withModel<Result>(
 
 async function start(command: string, args: string[], seconds: number): Promise<string> {
   try {
-    const { stdout } = await run(command, args, { timeout: (seconds + 30) * 1000, maxBuffer: 64 * 1024 * 1024 });
+    const { stdout } = await run(command, args, { timeout: (seconds + 15) * 1000, maxBuffer: 64 * 1024 * 1024 });
     return stdout;
   } catch (error) {
+    // Stopped from outside after its time: what it wrote until then proves nothing.
+    if ((error as { killed?: boolean }).killed) return '';
     if ((error as NodeJS.ErrnoException).code !== 'ENOENT') throw error;
     throw new Error(`${command} is not installed: apt-get install glpk-utils coinor-cbc`, { cause: error });
   }
@@ -40,7 +43,7 @@ export const solveWithGlpk: OtherSolver = (lpText, { gap, seconds }) =>
     const output = path.join(folder, 'answer.txt');
     const args = ['--lp', file, '--mipgap', String(gap), '--tmlim', String(seconds), '--cuts', '-o', output];
     await start('glpsol', args, seconds);
-    const text = await readFile(output, 'utf8');
+    const text = existsSync(output) ? await readFile(output, 'utf8') : '';
     return {
       objective: Number(/Objective:\s+\S+ = (\S+)/.exec(text)?.[1]),
       seconds: (performance.now() - startedAt) / 1000,
@@ -52,7 +55,7 @@ export const solveWithGlpk: OtherSolver = (lpText, { gap, seconds }) =>
 export const solveWithCbc: OtherSolver = (lpText, { gap, seconds }) =>
   withModel(lpText, async (file) => {
     const startedAt = performance.now();
-    const args = [file, 'ratio', String(gap), 'sec', String(seconds), 'solve'];
+    const args = [file, 'timeMode', 'elapsed', 'ratio', String(gap), 'sec', String(seconds), 'solve'];
     const text = await start('cbc', args, seconds);
     return {
       objective: Math.abs(Number(/Objective value:\s+(\S+)/.exec(text)?.[1])),
