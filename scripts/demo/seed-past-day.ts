@@ -14,6 +14,8 @@ import type { Deps, Tx } from '#server/deps.ts';
 import { fillOrders } from '#server/packs/fill-service.ts';
 import { markCut } from '#server/packs/pack-queries.ts';
 import { readPackingDay } from '#server/packs/packing-day.ts';
+import { dispatchReservation } from '#server/trade/dispatch-service.ts';
+import { listReservations } from '#server/trade/reservation-service.ts';
 import { addDays, londonInstant } from '#shared/domain/day.ts';
 import { weighPacks } from './weigh-packs.ts';
 import { onDay } from './demo-deps.ts';
@@ -28,6 +30,7 @@ export async function seedPastDay(deps: Deps, chance: Chance, { day, people }: P
   await packEverything(onTheDay, chance, { dayId: day.id, packerId });
   await fillOrders(onTheDay, packerId, day.id);
   await handOver(onDay(deps, addDays(day.day, 1), '09:00'), { day, ownerId, packerId });
+  await sendTrade(onDay(deps, addDays(day.day, 1), '07:30'), { day, ownerId });
   const after = onDay(deps, addDays(day.day, 4));
   await closeCuttingDay(after, ownerId, { dayId: day.id, version: 1 });
 }
@@ -104,5 +107,16 @@ async function handOver(
   for (const [index, order] of orders.entries()) {
     const state = index === orders.length - 1 ? 'missed' : 'collected';
     await markOrder(deps, { orderId: order.id, version: order.version + 1, state, byUserId: packerId });
+  }
+}
+
+/** The butchers' pieces at their scale weight, and the packs that were filled for them. */
+async function sendTrade(deps: Deps, { day, ownerId }: { day: SeededDay; ownerId: string }): Promise<void> {
+  const reservations = await listReservations(deps, null);
+  for (const { id, version, dayId, lines } of reservations) {
+    if (dayId !== day.id) continue;
+    const pieces = lines.filter((line) => line.kind === 'unit');
+    const weights = pieces.map((line) => ({ lineId: line.id, grams: line.grams }));
+    await dispatchReservation(deps, ownerId, { reservationId: id, version, weights, isShortAccepted: true });
   }
 }

@@ -3,14 +3,14 @@ import { formatEarTag } from '#shared/domain/ear-tag.ts';
 import { formatCount, formatGrams } from '#shared/domain/words.ts';
 import { AppError } from '#shared/errors.ts';
 import { scale } from '#shared/engine/rounding.ts';
+import { listConfirmedLines, type ReservedLine } from '#server/allocation/allocation-queries.ts';
 import type { Deps, Tx } from '#server/deps.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
 import { listBalances, listLedgerCarcases, recordMovements, type Movement } from './ledger-queries.ts';
 import { markSoldThrough } from './carcase-queries.ts';
-import { closeDay, listUnsettledOrders, listAskedReservations, lockCuttingDay } from './cutting-day-queries.ts';
+import { closeDay, listUnsettledOrders, listUnsettledReservations, lockCuttingDay } from './cutting-day-queries.ts';
 import { getCuttingDay } from './cutting-day-service.ts';
 import { loadDayCutouts, type CarcaseFigures } from './day-figures.ts';
-import { dispatchTrade } from './dispatch-trade.ts';
 import { readPublishedWays } from './published-plan.ts';
 
 /** Bone, fat and loss that lie unweighed may differ from the estimate by this much of the carcase: common practice. */
@@ -26,7 +26,7 @@ export async function closeCuttingDay(
     const day = await lockCuttingDay(tx, dayId);
     if (!day) throw new AppError('NOT_FOUND', 'There is no such cutting day.');
     refuseWaiting('order', await listUnsettledOrders(tx, dayId));
-    refuseWaiting('reservation', await listAskedReservations(tx, dayId));
+    refuseWaiting('reservation', await listUnsettledReservations(tx, dayId));
     await settleGrams(tx, byUserId, dayId);
     if (!(await closeDay(tx, dayId, version))) {
       throw new AppError(
@@ -53,21 +53,21 @@ function refuseWaiting(what: 'order' | 'reservation', numbers: readonly number[]
 }
 
 /**
- * What the butchers reserved has left with them; what still lies in a carcase is bone, fat and loss and goes to waste;
- * packs that nobody bought go to the freezer. More than bone, fat and loss explain means that product lies unweighed.
+ * What still lies in a carcase is bone, fat and loss and goes to waste; packs that nobody bought go to the freezer. More
+ * than bone, fat and loss explain means that product lies unweighed.
  */
 async function settleGrams(tx: Tx, byUserId: string, dayId: string): Promise<void> {
   const { carcases } = await loadDayCutouts(tx, dayId, await readPublishedWays(tx, dayId));
   const ids = carcases.map(({ row }) => row.id);
   if (ids.length === 0) return;
   await enterLedger(tx, byUserId, carcases);
-  const leftWhole = await dispatchTrade(tx, { dayId, byUserId, carcases });
+  const whole = (await listConfirmedLines(tx, dayId)).filter((line) => line.kind === 'unit');
   const balances = await listBalances(tx, ids);
   const movements: Movement[] = [];
   for (const carcase of carcases) {
     const left = balances.find(({ carcaseId, place }) => carcaseId === carcase.row.id && place === 'carcase');
     if (!left || left.grams <= 0) continue;
-    if (left.grams > mostWaste(carcase, leftWhole.get(carcase.row.id) ?? [])) throw unweighed(carcase, left.grams);
+    if (left.grams > mostWaste(carcase, whole)) throw unweighed(carcase, left.grams);
     const reason = 'bone, fat and loss';
     movements.push({ ...moved(left, byUserId), fromPlace: 'carcase', toPlace: 'waste', reason });
   }
@@ -102,13 +102,20 @@ function moved({ carcaseId, packId, grams }: { carcaseId: string; packId: string
   return { carcaseId, packId, grams, byUserId: by };
 }
 
-function mostWaste({ cutout }: CarcaseFigures, leftWhole: readonly string[]): number {
-  const isGone = (path: string) => leftWhole.some((whole) => path.startsWith(`${whole}/`));
+/** Bone, fat and loss of what was cut here: a piece that left whole took its own along. */
+function mostWaste({ row, cutout }: CarcaseFigures, whole: readonly ReservedLine[]): number {
+  const gone = whole.filter((line) => line.carcaseId === row.id);
   const waste = cutout.nodes
-    .filter((node) => node.level === 'line' && node.kind !== 'cut' && node.kind !== 'trim' && !isGone(node.path))
+    .filter((node) => node.level === 'line' && node.kind !== 'cut' && node.kind !== 'trim')
+    .filter((node) => !gone.some((line) => isWithin(node.path, line)))
     .reduce((sum, node) => sum + node.grams, 0);
   const hangingLoss = cutout.cold.grams - cutout.hung.grams;
   return waste + hangingLoss + scale(cutout.cold.grams, UNWEIGHED_PERCENT, 100);
+}
+
+function isWithin(path: string, { side, unitKind }: ReservedLine): boolean {
+  const [ofSide, ...below] = path.split('/');
+  return ofSide === side && (unitKind === 'side' || below.includes((unitKind ?? '').replace('primal:', '')));
 }
 
 function unweighed({ row, cutout }: CarcaseFigures, grams: number): AppError {

@@ -94,12 +94,12 @@ export async function listUnsettledOrders(db: Db | Tx, dayId: string): Promise<n
   return rows.map((row) => row.orderNo);
 }
 
-/** Numbers of the reservations that wait for the owner's answer. */
-export async function listAskedReservations(db: Db | Tx, dayId: string): Promise<number[]> {
+/** Numbers of the reservations that wait for an answer or for their beef. */
+export async function listUnsettledReservations(db: Db | Tx, dayId: string): Promise<number[]> {
   const rows = await db
     .select({ reservationNo: reservation.reservationNo })
     .from(reservation)
-    .where(and(eq(reservation.cuttingDayId, dayId), eq(reservation.state, 'asked')))
+    .where(and(eq(reservation.cuttingDayId, dayId), inArray(reservation.state, ['asked', 'confirmed'])))
     .orderBy(asc(reservation.reservationNo));
   return rows.map((row) => row.reservationNo);
 }

@@ -140,7 +140,7 @@ describe('closing a cutting day', () => {
     expect(await stateOf(day.id)).toBe('open');
   });
 
-  test('writes down the quarter that a butcher took, and calls the reservation dispatched', async () => {
+  test('is refused while a butcher waits for a quarter, and knows that a quarter that left took its bone along', async () => {
     const day = await aDay({ productShare: 0.75 });
     const userId = (await world.signIn('butcher')).userId;
     const [account] = await world.db
@@ -156,20 +156,29 @@ describe('closing a cutting day', () => {
         state: 'confirmed',
       })
       .returning();
-    await world.db.insert(reservationLine).values({
-      reservationId: row?.id ?? '',
-      kind: 'unit',
-      unitKind: 'hind',
-      carcaseId: day.carcaseId,
-      side: 'left',
-      tenthPencePerKg: 8_900,
-    });
+    const [line] = await world.db
+      .insert(reservationLine)
+      .values({
+        reservationId: row?.id ?? '',
+        kind: 'unit',
+        unitKind: 'hind',
+        carcaseId: day.carcaseId,
+        side: 'left',
+        tenthPencePerKg: 8_900,
+      })
+      .returning();
+    const waiting = await close(day.id).expect(409);
+    expect((waiting.body as Problem).detail).toContain(String(row?.reservationNo));
+
+    const grams = day.nodes.find((node) => node.path === 'left/hind')?.grams ?? 0;
+    await owner
+      .post(`/api/office/reservations/${row?.id}/dispatch`)
+      .send({ version: 1, weights: [{ lineId: line?.id, grams }], isShortAccepted: false })
+      .expect(200);
     await close(day.id).expect(200);
-    const hind = day.nodes.find((node) => node.path === 'left/hind')?.grams;
     const balances = await listBalances(world.db, [day.carcaseId]);
-    expect(balances.find(({ place }) => place === 'trade')?.grams).toBe(hind);
-    const [after] = await world.db.select().from(reservation);
-    expect(after?.state).toBe('dispatched');
+    expect(balances.find(({ place }) => place === 'trade')?.grams).toBe(grams);
+    expect(balances.some(({ place }) => place === 'carcase')).toBe(false);
   });
 
   test('by two owners at once is done once', async () => {

@@ -72,16 +72,14 @@ describe('today', () => {
       })
       .returning();
     const orderId = order?.id ?? '';
-    await world.db
-      .insert(payment)
-      .values({
-        orderId,
-        kind: 'refund',
-        reason: 'light pack',
-        amountPence: 84,
-        state: 'failed',
-        error: 'Card closed.',
-      });
+    await world.db.insert(payment).values({
+      orderId,
+      kind: 'refund',
+      reason: 'light pack',
+      amountPence: 84,
+      state: 'failed',
+      error: 'Card closed.',
+    });
     await world.db.insert(mailMessage).values({
       eventKey: 'collection 1',
       kind: 'collection',
