@@ -32,6 +32,7 @@ export function createApp(deps: Deps, webRoot: string | null): App {
   app.use(helmet({ contentSecurityPolicy: false, strictTransportSecurity: deps.origin.startsWith('https:') }));
   app.use(compression());
 
+  app.use('/api', neverStored);
   app.post('/api/payments/webhook', express.raw({ type: '*/*', limit: '512kb' }), paymentWebhook(deps));
   app.post('/api/mail/inbound', express.raw({ type: '*/*', limit: '1mb' }), inboundMail(deps));
   app.all('/api/auth/{*any}', clientAddress, limitAuthBody, toNodeHandler(deps.auth));
@@ -59,6 +60,12 @@ export function createApp(deps: Deps, webRoot: string | null): App {
   app.use(answerErrors);
   return { express: app, api };
 }
+
+/** Stock moves by the second and orders are private: no answer of the API is kept by anybody on the way. */
+const neverStored: express.RequestHandler = (_request, response, next) => {
+  response.setHeader('Cache-Control', 'no-store');
+  next();
+};
 
 /** better-auth reads bodies without a bound of its own. */
 const limitAuthBody: express.RequestHandler = (request, _response, next) => {

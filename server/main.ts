@@ -46,7 +46,11 @@ const deps: Deps = {
 tellPagesTheApi(env.PORT);
 const worker = await startWorker(deps, env.DATABASE_URL);
 const app = createApp(deps, path.join(import.meta.dirname, '..'));
-const server = app.express.listen(env.PORT, '127.0.0.1', () => log.info({ port: env.PORT }, 'listening'));
+const server = app.express.listen(env.PORT, '127.0.0.1', () => {
+  log.info({ port: env.PORT }, 'listening');
+  // The first visitor should not wait for the pages to be loaded and drawn once.
+  void fetch(`http://127.0.0.1:${env.PORT}/`).catch((error: unknown) => log.warn({ err: error }, 'pages not warmed'));
+});
 server.on('error', (error) => {
   log.fatal({ err: error }, 'cannot listen');
   process.exit(1);

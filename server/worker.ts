@@ -2,6 +2,7 @@ import { Logger, run, type Runner, type TaskList } from 'graphile-worker';
 import { explainAllocation, replanDay } from './allocation/allocation-service.ts';
 import type { Deps } from './deps.ts';
 import { log } from './http/log.ts';
+import { proveCounters } from './orders/prove-counters.ts';
 import { sendMail } from './mail/outbox.ts';
 import { settleRefund, sweepHolds } from './payments/payment-service.ts';
 import type { Jobs } from './queue.ts';
@@ -14,6 +15,7 @@ export function taskList(deps: Deps): TaskList {
     'replan-day': (payload) => replanDay(deps, (payload as Jobs['replan-day']).dayId),
     'explain-allocation': (payload) => explainAllocation(deps, (payload as Jobs['explain-allocation']).allocationId),
     'sweep-holds': () => sweepHolds(deps),
+    'prove-counters': async () => void (await proveCounters(deps)),
   };
 }
 
@@ -21,14 +23,17 @@ const logger = new Logger(() => (level, message) => {
   if (String(level) === 'error') log.error({ message }, 'worker');
 });
 
-/** Starts the worker. Each minute the sweep asks the payment company about every hold whose page has run out. */
+/**
+ * Starts the worker. Each minute the sweep asks the payment company about every hold whose page has run out; each night
+ * what is held and sold of every offer is counted again.
+ */
 export function startWorker(deps: Deps, databaseUrl: string): Promise<Runner> {
   return run({
     connectionString: databaseUrl,
     concurrency: 4,
     noHandleSignals: true,
     logger,
-    crontab: '* * * * * sweep-holds ?fill=2m',
+    crontab: '* * * * * sweep-holds ?fill=2m\n30 3 * * * prove-counters',
     taskList: taskList(deps),
   });
 }

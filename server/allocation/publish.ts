@@ -79,6 +79,13 @@ function refuseUnlessFit(row: AllocationRow, day: CuttingDayRow): void {
   if (!row.plan.promise) {
     throw new AppError('NOT_FILLABLE', 'It is not known yet how much of this is safe to promise. Publish it again.');
   }
+  const { unfillable } = row.plan.plan;
+  if (unfillable) {
+    throw new AppError(
+      'NOT_FILLABLE',
+      `Whole packs do not come out for the line '${unfillable.name}' of a box. Nothing was published; widen that line.`,
+    );
+  }
   const short = row.plan.plan.shortfalls[0];
   if (short) {
     throw new AppError(
