@@ -2,7 +2,7 @@ import { eq } from 'drizzle-orm';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { reservation, reservationLine } from '#db/schema/trade.ts';
 import { type BrowserWorld, expectAccessible, fillSignIn, startBrowserWorld, WIDE } from '#tests/support/browser.ts';
-import { makePublishedDay } from '#tests/support/make-published-day.ts';
+import { makePackingDay } from '#tests/support/make-packing-day.ts';
 import { makeTradeAccount } from '#tests/support/make-selling-day.ts';
 
 let counter: BrowserWorld;
@@ -12,7 +12,7 @@ let ownerEmail: string;
 beforeAll(async () => {
   counter = await startBrowserWorld();
   const { world } = counter;
-  await makePublishedDay(world);
+  await makePackingDay(world);
   const butcher = await world.signIn('butcher');
   butcherEmail = butcher.email;
   ownerEmail = (await world.signIn('owner')).email;
