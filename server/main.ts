@@ -44,6 +44,7 @@ const deps: Deps = {
 };
 
 tellPagesTheApi(env.PORT);
+void deps.solver.warm();
 const worker = await startWorker(deps, env.DATABASE_URL);
 const app = createApp(deps, path.join(import.meta.dirname, '..'));
 const server = app.express.listen(env.PORT, '127.0.0.1', () => {
