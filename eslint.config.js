@@ -1,5 +1,5 @@
 import { createRequire } from 'node:module';
-import tseslint from 'typescript-eslint';
+import { configs as tsConfigs } from 'typescript-eslint';
 
 const expo = createRequire(import.meta.url)('eslint-config-expo/flat');
 
@@ -21,7 +21,7 @@ const auth = ['^better-auth$', 'The browser uses better-auth/react and better-au
 export default [
   { ignores: ['node_modules', 'dist*', '.data', '.expo', 'coverage', 'db/migrations', 'expo-env.d.ts'] },
   ...expo,
-  ...tseslint.configs.recommendedTypeChecked.map((block) => ({ ...block, files: ['**/*.ts', '**/*.tsx'] })),
+  ...tsConfigs.recommendedTypeChecked.map((block) => ({ ...block, files: ['**/*.ts', '**/*.tsx'] })),
   {
     files: ['**/*.ts', '**/*.tsx'],
     languageOptions: { parserOptions: { projectService: true, tsconfigRootDir: import.meta.dirname } },
