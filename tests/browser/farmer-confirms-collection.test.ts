@@ -108,6 +108,10 @@ test('the farmer, on the cutting day, weighs, fills the order, confirms its mail
   expect(mail.text).toContain('The farm gate');
   expect(mail.text).toContain('A cool bag');
   expect(mail.attachments.map(({ contentType }) => contentType)).toContain('text/calendar');
+  const letter = await farm.openPage(PHONE);
+  expect(mail.html).toContain('A cool bag');
+  await letter.setContent(mail.html ?? '');
+  await expectAccessible(letter);
 
   world.clock.advance({ days: 1 });
   const phone = await farm.openPage(PHONE);
