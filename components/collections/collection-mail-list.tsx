@@ -25,7 +25,7 @@ export function CollectionMailList(props: CollectionMailListProps) {
       {props.mails.map((mail) => (
         <View key={mail.orderId} role="listitem" style={css('w-stack-s')}>
           <View style={css('w-row-between')}>
-            <View style={css('w-grow')}>
+            <View style={css('w-grow-wide')}>
               <Choice mail={mail} {...props} />
             </View>
             <View style={css('w-row')}>

@@ -13,6 +13,7 @@ const page = `
 :root .w-row-between{display:flex;flex-direction:row;flex-wrap:wrap;gap:4px 16px;align-items:baseline;justify-content:space-between;min-width:0}
 :root .w-row-fixed{flex-wrap:nowrap}
 :root .w-grow{flex:1 1 0;min-width:0}
+:root .w-grow-wide{flex:1 1 16rem;min-width:0}
 :root .w-panel{background:var(--panel);padding:16px;border-radius:3px}
 :root .w-ruled{border:0 solid var(--line);border-top-width:1px;padding-top:16px}
 :root .w-rule-below{border:0 solid var(--line);border-bottom-width:1px;padding-bottom:8px}
