@@ -79,6 +79,8 @@ type Row = {
   prices: Prices;
   is: string;
   leanPpht?: number;
+  /** Where a cut is cooked unlike the rest of its group. */
+  cooking?: Cut['cooking'];
 };
 
 const TENTH_PENCE_PER_POUND = 1_000;
@@ -99,6 +101,7 @@ function toCut(row: Row): Cut {
     clearanceTenthPencePerKg: Math.round(clearance * TENTH_PENCE_PER_POUND),
     leanPpht: row.leanPpht ?? leanPpht,
     ...group,
+    cooking: row.cooking ?? group.cooking,
   };
 }
 
@@ -110,7 +113,7 @@ function toCut(row: Row): Cut {
 const ROWS: readonly Row[] = [
   { id: 'fillet-steak', name: 'Fillet steak', primal: 'loin', group: 'steak', packs: [300, 420, 420], prices: [54, 22], is: 'Two thick steaks from the tenderest muscle.', leanPpht: 96_000 },
   { id: 'sirloin-steak', name: 'Sirloin steak', primal: 'loin', group: 'steak', packs: [400, 560, 560], prices: [35, 14], is: 'Two steaks with their rim of fat.' },
-  { id: 't-bone-steak', name: 'T-bone steak', primal: 'loin', group: 'onBone', packs: [550, 850, 850], prices: [34, 13], is: 'Sirloin and fillet on either side of one bone.' },
+  { id: 't-bone-steak', name: 'T-bone steak', primal: 'loin', group: 'onBone', packs: [550, 850, 850], prices: [34, 13], is: 'Sirloin and fillet on either side of one bone.', cooking: 'grill' },
   { id: 'sirloin-on-the-bone', name: 'Sirloin on the bone', primal: 'loin', group: 'onBone', packs: [1_500, 3_000, 2_600], prices: [27, 11], is: 'A carving joint for a full table.' },
   { id: 'sirloin-joint', name: 'Sirloin joint, rolled', primal: 'loin', group: 'roast', packs: [1_000, 2_000, 2_000], prices: [33, 13], is: 'Boned, rolled and tied.' },
   { id: 'rump-steak', name: 'Rump steak', primal: 'rump', group: 'steak', packs: [400, 600, 600], prices: [25, 10], is: 'Two steaks with a firmer bite and more taste.' },
@@ -121,7 +124,7 @@ const ROWS: readonly Row[] = [
   { id: 'fore-rib-chined', name: 'Fore rib, chined', primal: 'fore-rib', group: 'onBone', packs: [1_400, 2_800, 2_400], prices: [26, 10], is: 'On its ribs, with the backbone taken off.' },
   { id: 'rib-rolled', name: 'Rib, boned and rolled', primal: 'fore-rib', group: 'roast', packs: [1_000, 2_200, 2_200], prices: [28, 10], is: 'All the taste of the rib, easy to carve.', leanPpht: 80_000 },
   { id: 'rib-eye-steak', name: 'Rib-eye steak', primal: 'fore-rib', group: 'steak', packs: [400, 560, 560], prices: [37, 14], is: 'Two marbled steaks from the middle of the rib.', leanPpht: 85_000 },
-  { id: 'cote-de-boeuf', name: 'Côte de boeuf', primal: 'fore-rib', group: 'onBone', packs: [800, 1_300, 1_300], prices: [31, 12], is: 'One thick rib for two.' },
+  { id: 'cote-de-boeuf', name: 'Côte de boeuf', primal: 'fore-rib', group: 'onBone', packs: [800, 1_300, 1_300], prices: [31, 12], is: 'One thick rib for two.', cooking: 'grill' },
   { id: 'topside-joint', name: 'Topside joint', primal: 'topside', group: 'roast', packs: [1_000, 2_000, 2_000], prices: [16.8, 8], is: 'The lean Sunday roast, rolled and tied.', leanPpht: 95_000 },
   { id: 'minute-steak', name: 'Minute steak', primal: 'topside', group: 'steak', packs: [300, 450, 450], prices: [18.5, 8], is: 'Thin slices of topside for a very hot pan.', leanPpht: 97_000 },
   { id: 'top-rump-joint', name: 'Top rump joint', primal: 'thick-flank', group: 'roast', packs: [900, 1_800, 1_800], prices: [15.8, 7.5], is: 'A small lean roast from the thick flank.', leanPpht: 95_000 },
