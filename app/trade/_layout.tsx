@@ -3,6 +3,7 @@ import { View } from 'react-native';
 import { css } from '#components/theme/css.ts';
 import { ButtonLink } from '#components/ui/button-link.tsx';
 import { EmptyState } from '#components/ui/empty-state.tsx';
+import type { NavItem } from '#components/ui/nav-link.tsx';
 import { Skeleton } from '#components/ui/skeleton.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
 import { TradeShell } from '#components/ui/trade-shell.tsx';
@@ -12,11 +13,11 @@ import { useTradeAccount } from '#hooks/trade.ts';
 import { usePageStart } from '#hooks/use-page-start.ts';
 import { useSignOut } from '#hooks/use-sign-out.ts';
 
-const butcherPlaces = [
+const butcherPlaces: readonly NavItem[] = [
   { label: 'Coming carcases', href: '/trade/carcases' },
   { label: 'Reservations', href: '/trade/reservations' },
 ];
-const applicantPlaces = [{ label: 'Trade account', href: '/trade/apply' }];
+const applicantPlaces: readonly NavItem[] = [{ label: 'Trade account', href: '/trade/apply' }];
 
 /** The trade area opens to anyone signed in; without an approved account there is the application alone. */
 export default function TradeLayout() {

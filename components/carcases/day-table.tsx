@@ -1,3 +1,4 @@
+import type { Href } from 'expo-router';
 import { Badge } from '#components/ui/badge.tsx';
 import { Table } from '#components/ui/table.tsx';
 import { TextLink } from '#components/ui/text-link.tsx';
@@ -9,7 +10,7 @@ const kinds = { planned: 'quiet', open: 'free', closed: 'sold' } as const;
 type DayTableProps = {
   days: readonly CuttingDay[];
   /** Where a day leads: to its carcases, or for a packer to its packing. */
-  hrefOf: (dayId: string) => string;
+  hrefOf: (dayId: string) => Href;
 };
 
 export function DayTable({ days, hrefOf }: DayTableProps) {

@@ -1,8 +1,7 @@
+import type { NavItem } from '#components/ui/nav-link.tsx';
 import type { Role } from '#shared/domain/roles.ts';
 
-type Place = { label: string; href: string };
-
-const ownerPlaces: readonly Place[] = [
+const ownerPlaces: readonly NavItem[] = [
   { label: 'Today', href: '/office/today' },
   { label: 'Cutting days', href: '/office/cutting-days' },
   { label: 'Orders', href: '/office/orders' },
@@ -13,13 +12,13 @@ const ownerPlaces: readonly Place[] = [
   { label: 'Settings', href: '/office/settings' },
 ];
 
-const packerPlaces: readonly Place[] = [{ label: 'Cutting days', href: '/office/cutting-days' }];
+const packerPlaces: readonly NavItem[] = [{ label: 'Cutting days', href: '/office/cutting-days' }];
 
 /** Packing and handing over is a packer's; whatever shows prices, margins or customers' histories is not. */
 const PACKER_PATH = /^\/office(\/cutting-days(\/[^/]+\/(packing|run-sheet))?)?\/?$/;
 
 /** The places of the office in the order of the farm's week, for those who work there. */
-export function placesFor(role: Role): readonly Place[] {
+export function placesFor(role: Role): readonly NavItem[] {
   return role === 'owner' ? ownerPlaces : role === 'packer' ? packerPlaces : [];
 }
 
@@ -28,10 +27,10 @@ export function mayOpen(role: Role, path: string): boolean {
 }
 
 /** The pages of one cutting day, in the order in which the day is worked through. */
-export function dayPlaces(dayId: string, role: Role): readonly Place[] {
-  const at = `/office/cutting-days/${dayId}`;
-  const packing = { label: 'Packing', href: `${at}/packing` };
-  const runSheet = { label: 'Run sheet', href: `${at}/run-sheet` };
+export function dayPlaces(dayId: string, role: Role): readonly NavItem[] {
+  const at = `/office/cutting-days/${dayId}` as const;
+  const packing: NavItem = { label: 'Packing', href: `${at}/packing` };
+  const runSheet: NavItem = { label: 'Run sheet', href: `${at}/run-sheet` };
   if (role !== 'owner') return [packing, runSheet];
   return [
     { label: 'Carcases', href: at },

@@ -1,3 +1,4 @@
+import type { Href } from 'expo-router';
 import { View } from 'react-native';
 import { css } from '#components/theme/css.ts';
 import { Badge } from '#components/ui/badge.tsx';
@@ -24,7 +25,7 @@ export function TodayList({ items }: { items: readonly TodayItem[] }) {
       {items.map((item) => (
         <View role="listitem" key={`${item.kind} ${item.href} ${item.title}`} style={css('w-row-between')}>
           <View style={css('w-grow', 'w-stack-s')}>
-            <TextLink href={item.href} place="alone" icon="forward">
+            <TextLink href={item.href as Href} place="alone" icon="forward">
               {item.title}
             </TextLink>
             <Text tone="quiet">{item.detail}</Text>

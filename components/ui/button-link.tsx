@@ -1,17 +1,15 @@
 import { Link, type Href } from 'expo-router';
 import type { ButtonKind } from './button.tsx';
 import { Icon, type IconName } from './icon.tsx';
+import type { Destination } from './text-link.tsx';
 import { css } from '#components/theme/css.ts';
 
-type ButtonLinkProps = {
-  href: Href;
+type ButtonLinkProps = Destination & {
   label: string;
   kind?: ButtonKind;
   wide?: boolean;
   small?: boolean;
   icon?: IconName;
-  /** Leaves the app: a file, another site. */
-  outside?: boolean;
   name?: string | undefined;
 };
 
@@ -19,7 +17,7 @@ type ButtonLinkProps = {
 export function ButtonLink({ href, label, kind = 'primary', ...how }: ButtonLinkProps) {
   return (
     <Link
-      href={href}
+      href={href as Href}
       {...(how.outside ? { target: '_self' as const } : {})}
       {...(how.name === undefined ? {} : { 'aria-label': how.name })}
       style={css('w-button', `w-button-${kind}`, how.wide && 'w-button-full', how.small && 'w-button-small')}

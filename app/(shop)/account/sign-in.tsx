@@ -1,4 +1,4 @@
-import { useLoaderData, useLocalSearchParams, useRouter } from 'expo-router';
+import { useLoaderData, useLocalSearchParams, useRouter, type Href } from 'expo-router';
 import type { GenerateMetadataFunction } from 'expo-server';
 import { View } from 'react-native';
 import { AccountForm } from '#components/account/account-form.tsx';
@@ -36,7 +36,10 @@ export default function SignInScreen() {
           isSending={signIn.isPending || signIn.isSuccess}
           refusal={accountRefusalOf(signIn.error)}
           onSubmit={({ email, password }) =>
-            signIn.mutate({ email, password }, { onSuccess: (role) => router.replace(placeAfterSignIn(next, role)) })
+            signIn.mutate(
+              { email, password },
+              { onSuccess: (role) => router.replace(placeAfterSignIn(next, role) as Href) },
+            )
           }
         >
           <TextLink href="/account/reset" place="alone">
