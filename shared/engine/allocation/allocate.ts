@@ -1,25 +1,26 @@
-import type { SolveOptions, Solver } from '#shared/engine/linear/solve.ts';
+import type { Solver } from '#shared/engine/linear/solve.ts';
 import type { AllocationInput } from './allocation-input.ts';
 import type { AllocationPlan } from './allocation-plan.ts';
 import { buildModel } from './build-model.ts';
 import { checkInput } from './check-input.ts';
 import { orderInput } from './order-input.ts';
 import { failed, isProof, solvePhases, type Session } from './phases.ts';
+import type { AllocateOptions } from './plan-progress.ts';
 import { makeWhole } from './whole-packs.ts';
-
-export type AllocateOptions = SolveOptions;
 
 /** A question put in order and checked, not yet solved. */
 export function openSession(input: AllocationInput, solver: Solver, options: AllocateOptions = {}): Session {
   const ordered = orderInput(input);
   checkInput(ordered);
   const clock = { spentMilliseconds: 0 };
-  return { solver, options, clock, isProven: true, model: buildModel(ordered), fixed: [], caps: new Map() };
+  const model = buildModel(ordered);
+  return { solver, options, phase: 'contribution', clock, isProven: true, model, fixed: [], caps: new Map() };
 }
 
 /**
  * Plans one cutting day: the fate of every primal, boxes, loose packs, trade and mince of greatest contribution after
- * the least shortfall of what is promised. The same input gives the same plan, in whatever order it comes.
+ * the least shortfall of what is promised. The same input gives the same plan, in whatever order it comes. It can be
+ * listened to, cancelled and limited in time: see `AllocateOptions`.
  */
 export async function allocate(
   input: AllocationInput,

@@ -1,5 +1,5 @@
 import type { Row, Term } from '#shared/engine/linear/lp-model.ts';
-import type { RowChange, SolveOptions, Solver } from '#shared/engine/linear/solve.ts';
+import type { RowChange, Solver } from '#shared/engine/linear/solve.ts';
 import { openSession } from './allocate.ts';
 import type { AllocationInput, WayLock } from './allocation-input.ts';
 import type { AllocationModel, BoxColumns } from './allocation-model.ts';
@@ -7,8 +7,12 @@ import type { AllocationPlan, BoxLimit, CutWorth, LockCost } from './allocation-
 import { buildModel } from './build-model.ts';
 import { orderInput } from './order-input.ts';
 import { failed, solvePhases } from './phases.ts';
+import type { AllocateOptions } from './plan-progress.ts';
 
 export type Explanation = { limits: BoxLimit[]; worths: CutWorth[]; locks: LockCost[] };
+
+/** As for the plan itself: `signal` cancels, the time limit is for each question of the explanation. */
+export type ExplainOptions = Omit<AllocateOptions, 'onProgress'>;
 
 /** Kilograms by which a line must fall short before it counts: a gram, above a solver's tolerance. */
 const LEAST_LACK = 0.001;
@@ -50,7 +54,7 @@ function keepShorts(model: AllocationModel, plan: AllocationPlan): Row[] {
 export async function worthOfCuts(
   input: AllocationInput,
   plan: AllocationPlan,
-  about: { solver: Solver; options?: SolveOptions },
+  about: { solver: Solver; options?: ExplainOptions },
 ): Promise<CutWorth[]> {
   const model = buildModel(orderInput(input));
   const fresh = model.left.filter(({ state }) => state === 'fresh');
@@ -105,7 +109,7 @@ function forceOneMore(model: AllocationModel, plan: AllocationPlan, chosen: BoxC
 export async function limitsOfBoxes(
   input: AllocationInput,
   plan: AllocationPlan,
-  about: { solver: Solver; options?: SolveOptions },
+  about: { solver: Solver; options?: ExplainOptions },
 ): Promise<BoxLimit[]> {
   const ordered = orderInput(input);
   const room = { ...ordered, boxes: ordered.boxes.map((box) => ({ ...box, steps: [...box.steps, ONE_MORE] })) };
@@ -129,7 +133,7 @@ export async function limitsOfBoxes(
 
 const ONE_MORE = { boxes: 1, valuePence: 0 };
 
-async function optimum(input: AllocationInput, about: { solver: Solver; options?: SolveOptions }) {
+async function optimum(input: AllocationInput, about: { solver: Solver; options?: ExplainOptions }) {
   const session = openSession(input, about.solver, about.options ?? {});
   const { solution } = await solvePhases(session, new Map());
   if (!solution.hasAnswer) throw failed('The cost of a lock could not be computed in time.');
@@ -146,7 +150,7 @@ function isSameLock(a: WayLock, b: WayLock): boolean {
  */
 export async function costsOfLocks(
   input: AllocationInput,
-  about: { solver: Solver; options?: SolveOptions },
+  about: { solver: Solver; options?: ExplainOptions },
 ): Promise<LockCost[]> {
   const { locks } = orderInput(input);
   if (locks.length === 0) return [];
@@ -175,7 +179,7 @@ export async function costsOfLocks(
 export async function explain(
   input: AllocationInput,
   plan: AllocationPlan,
-  about: { solver: Solver; options?: SolveOptions },
+  about: { solver: Solver; options?: ExplainOptions },
 ): Promise<Explanation> {
   return {
     limits: await limitsOfBoxes(input, plan, about),

@@ -1,10 +1,11 @@
 import { EngineError } from '#shared/engine/engine-error.ts';
 import type { Row, Term, WriteOptions } from '#shared/engine/linear/lp-model.ts';
-import type { Solution, SolveOptions, Solver } from '#shared/engine/linear/solve.ts';
+import type { Solution, SolveOptions, SolveProgress, Solver } from '#shared/engine/linear/solve.ts';
 import type { Priority } from './allocation-input.ts';
 import type { AllocationModel } from './allocation-model.ts';
 import { PRIORITIES, shortTerms } from './build-model.ts';
 import { gapBelow, isLarge, nearRows } from './near-optimum.ts';
+import { relativeGap, type AllocateOptions, type PlanPhase } from './plan-progress.ts';
 
 /** Pence by which an earlier optimum may be missed later: below any price, above a solver's tolerance. */
 export const SHORT_TOLERANCE = 0.01;
@@ -16,22 +17,32 @@ export type Solved = { solution: Solution; lpText: string };
 export type Session = {
   model: AllocationModel;
   solver: Solver;
-  options: SolveOptions;
+  options: AllocateOptions;
+  phase: PlanPhase;
   fixed: Row[];
   caps: Map<string, Row>;
   clock: { spentMilliseconds: number };
   isProven: boolean;
 };
 
+function report(session: Session, solve: Partial<SolveProgress>): void {
+  const { phase, clock, options } = session;
+  const { milliseconds = 0, nodes = 0, best = null, bound = null } = solve;
+  const spent = clock.spentMilliseconds + milliseconds;
+  options.onProgress?.({ phase, milliseconds: spent, nodes, best, bound, gap: relativeGap(best, bound) });
+}
+
 /** The time limit is for the whole question, not for each of its solves. */
 function remaining(session: Session): SolveOptions {
-  const { timeLimitSeconds } = session.options;
-  if (timeLimitSeconds === undefined) return session.options;
+  const { timeLimitSeconds, onProgress, ...plain } = session.options;
+  const heard = onProgress ? { onProgress: (progress: SolveProgress) => report(session, progress) } : {};
+  if (timeLimitSeconds === undefined) return { ...plain, ...heard };
   const left = timeLimitSeconds - session.clock.spentMilliseconds / 1000;
-  return { ...session.options, timeLimitSeconds: Math.max(LEAST_SECONDS, left) };
+  return { ...plain, ...heard, timeLimitSeconds: Math.max(LEAST_SECONDS, left) };
 }
 
 async function ask(session: Session, lpText: string, options: SolveOptions = {}): Promise<Solution> {
+  report(session, {});
   const solution = await session.solver.solve(lpText, { ...remaining(session), ...options });
   session.clock.spentMilliseconds += solution.milliseconds;
   return solution;
@@ -85,6 +96,8 @@ export function failed(sentence: string): EngineError {
 
 /** Finds the least shortfall of each priority in turn, each held while the next is sought. */
 async function fixShortfalls(session: Session): Promise<void> {
+  const { phase } = session;
+  session.phase = 'shortfall';
   for (const priority of PRIORITIES) {
     const terms = shortTerms(session.model, priority);
     if (terms.length === 0) continue;
@@ -94,6 +107,7 @@ async function fixShortfalls(session: Session): Promise<void> {
     session.isProven &&= isProof(session, solution);
     session.fixed.push(shortRow(priority, terms, Math.max(0, solution.objective) + SHORT_TOLERANCE));
   }
+  session.phase = phase;
 }
 
 export const TITLE = 'Contribution of one cutting day in pence; weights in kilograms';

@@ -32,7 +32,8 @@ function packSession(session: Session, { solution }: Solved, patterns?: Patterns
     return { name: `keep_${column}`, terms: [[1, column]], sense: '=', right };
   });
   const gap = Math.max(PACK_GAP, session.options.gap ?? 0);
-  return { ...session, model, options: { ...session.options, gap }, fixed, caps: new Map(), isProven: true };
+  const options = { ...session.options, gap };
+  return { ...session, phase: 'packs', model, options, fixed, caps: new Map(), isProven: true };
 }
 
 /** Contribution of the last box of a variant per gram of these cuts in it; the least is given up first. */
