@@ -91,6 +91,8 @@ export const orderLine = pgTable(
       .references(() => offer.id),
     quantity: integer().notNull(),
     unitPricePence: integer().notNull(),
+    /** What one of it was sold as: a box's guaranteed weight, a loose pack's upper weight. */
+    unitGrams: integer().notNull(),
     name: text().notNull(),
   },
   (table) => [
@@ -98,6 +100,7 @@ export const orderLine = pgTable(
     index().on(table.offerId),
     check('order_line_quantity', sql`${table.quantity} > 0`),
     check('order_line_price', sql`${table.unitPricePence} > 0`),
+    check('order_line_grams', sql`${table.unitGrams} > 0`),
   ],
 );
 

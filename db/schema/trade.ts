@@ -78,6 +78,12 @@ export const reservationLine = pgTable(
     cutId: text().references(() => cut.id),
     grams: integer(),
     tenthPencePerKg: integer().notNull(),
+    /** Agreed when it was reserved: a later price list does not change it. Cuts are always charged by the scale. */
+    basis: text({ enum: ['scale weight', 'cold weight'] })
+      .notNull()
+      .default('scale weight'),
+    /** What left for the butcher, by the scale; null while it is here. */
+    dispatchedGrams: integer(),
   },
   (table) => [
     index().on(table.reservationId),
@@ -88,5 +94,7 @@ export const reservationLine = pgTable(
         else ${table.cutId} is not null and ${table.grams} > 0 and ${table.unitKind} is null end`,
     ),
     check('reservation_line_rate', sql`${table.tenthPencePerKg} > 0`),
+    check('reservation_line_basis', sql`${table.kind} = 'unit' or ${table.basis} = 'scale weight'`),
+    check('reservation_line_dispatched', sql`${table.dispatchedGrams} >= 0`),
   ],
 );

@@ -3,7 +3,7 @@ import { offer } from '#db/schema/allocations.ts';
 import { cuttingDay } from '#db/schema/carcases.ts';
 import { collectionPoint, collectionSlot, customerOrder, orderLine } from '#db/schema/orders.ts';
 import { pack, packAssignment } from '#db/schema/packs.ts';
-import { boxKind, cut } from '#db/schema/products.ts';
+import { cut } from '#db/schema/products.ts';
 import type { Db, Tx } from '#server/deps.ts';
 import type { HeldLine } from './hold.ts';
 
@@ -68,11 +68,12 @@ export async function storeSession(
 export async function replaceLines(tx: Tx, orderId: string, lines: readonly HeldLine[]): Promise<void> {
   await tx.delete(orderLine).where(eq(orderLine.orderId, orderId));
   await tx.insert(orderLine).values(
-    lines.map(({ offerId, quantity, unitPricePence, name }) => ({
+    lines.map(({ offerId, quantity, unitPricePence, unitGrams, name }) => ({
       orderId,
       offerId,
       quantity,
       unitPricePence,
+      unitGrams,
       name,
     })),
   );
@@ -85,14 +86,12 @@ export function listLines(db: Db | Tx, orderId: string) {
       offerId: orderLine.offerId,
       quantity: orderLine.quantity,
       unitPricePence: orderLine.unitPricePence,
+      unitGrams: orderLine.unitGrams,
       name: orderLine.name,
       kind: offer.kind,
-      boxGrams: boxKind.guaranteedGrams,
-      upperGrams: offer.upperGrams,
     })
     .from(orderLine)
     .innerJoin(offer, eq(offer.id, orderLine.offerId))
-    .leftJoin(boxKind, eq(boxKind.id, offer.boxKindId))
     .where(eq(orderLine.orderId, orderId))
     .orderBy(asc(offer.kind), asc(orderLine.name), asc(orderLine.id));
 }

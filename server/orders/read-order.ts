@@ -63,14 +63,13 @@ export async function readOrder(deps: Deps, token: string): Promise<Order> {
 }
 
 function viewLine(line: LineRow): Order['lines'][number] {
-  const isBox = line.kind === 'box';
   return {
     name: line.name,
-    kind: isBox ? 'box' : 'loose',
+    kind: line.kind === 'box' ? 'box' : 'loose',
     quantity: line.quantity,
     unitPricePence: line.unitPricePence,
     linePence: line.quantity * line.unitPricePence,
-    unitGrams: (isBox ? line.boxGrams : line.upperGrams) ?? 0,
+    unitGrams: line.unitGrams,
   };
 }
 

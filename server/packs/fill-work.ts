@@ -58,7 +58,7 @@ function orderJob(rows: WorkRows, work: OrderWork, copy: number): Job {
   const pricePence = work.unitPricePence;
   const recipe = work.boxKindId ? rows.recipes.get(work.boxKindId) : undefined;
   if (recipe) return { ...job, kind: 'box', recipe, pricePence };
-  return { ...job, kind: 'loose', cutId: work.cutId ?? '', upperGrams: work.upperGrams ?? 0, pricePence };
+  return { ...job, kind: 'loose', cutId: work.cutId ?? '', upperGrams: work.unitGrams, pricePence };
 }
 
 function packsIn({ packs, assignments }: WorkRows, isHere: (row: AssignmentRow) => boolean): Job['packs'] {

@@ -101,10 +101,10 @@ export function listOrderWork(db: Db | Tx, dayId: string) {
       item: orderLine.name,
       quantity: orderLine.quantity,
       unitPricePence: orderLine.unitPricePence,
+      unitGrams: orderLine.unitGrams,
       kind: offer.kind,
       boxKindId: offer.boxKindId,
       cutId: offer.cutId,
-      upperGrams: offer.upperGrams,
     })
     .from(orderLine)
     .innerJoin(customerOrder, eq(customerOrder.id, orderLine.orderId))

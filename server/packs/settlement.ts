@@ -20,7 +20,7 @@ export function settleJob(job: Job): SettledItem {
       missingGrams > 0 ? refundForMissingGrams({ missingGrams, pricePence: paidPence, guaranteedGrams }) : 0;
     return { name: item, grams, paidPence, pricePence: paidPence - Math.min(paidPence, refund) };
   }
-  const isFull = job.upperGrams <= 0 || grams >= job.upperGrams;
+  const isFull = grams >= job.upperGrams;
   return { name: item, grams, paidPence, pricePence: isFull ? paidPence : scale(paidPence, grams, job.upperGrams) };
 }
 

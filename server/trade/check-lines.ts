@@ -15,7 +15,8 @@ export function priceLines(account: AccountRow, wanted: NewReservation, figures:
     if (refusal) fields[`lines.${index}`] = refusal;
     const tenthPencePerKg = price?.tenthPencePerKg ?? 0;
     if (line.kind === 'cut') return { kind: 'cut', cutId: line.cutId, grams: line.grams, tenthPencePerKg };
-    return { kind: 'unit', unitKind: line.unitKind, carcaseId: line.carcaseId, side: line.side, tenthPencePerKg };
+    const { unitKind, carcaseId, side } = line;
+    return { kind: 'unit', unitKind, carcaseId, side, tenthPencePerKg, basis: price?.basis ?? 'scale weight' };
   });
   if (Object.keys(fields).length > 0) throw new AppError('INVALID_INPUT', 'Nothing was reserved.', { fields });
   return lines;

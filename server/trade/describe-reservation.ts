@@ -8,16 +8,13 @@ import { findPublishedAllocation, type AllocationRow } from '#server/allocation/
 import { loadDayCutouts, type DayCutouts } from '#server/carcases/day-figures.ts';
 import type { Db, Tx } from '#server/deps.ts';
 import { readProductNames, type ProductNames } from './product-names.ts';
-import { readDispatched } from './dispatched-queries.ts';
-import { listColdWeightPrices, type FullReservation, type LineRow } from './trade-queries.ts';
+import type { FullReservation, LineRow } from './trade-queries.ts';
 
 export type DayContext = { figures: DayCutouts; published: AllocationRow | null };
 
 /** Reservations with the grams that their units weigh by the newest figures of their day. */
 export async function describeReservations(db: Db | Tx, rows: readonly FullReservation[]): Promise<Reservation[]> {
   const names = await readProductNames(db);
-  const gone = await readDispatched(db, rows);
-  const bases = await listColdWeightPrices(db);
   const days = new Map<string, DayContext>();
   for (const dayId of new Set(rows.map((row) => row.cuttingDayId))) {
     const published = await findPublishedAllocation(db, dayId);
@@ -25,20 +22,14 @@ export async function describeReservations(db: Db | Tx, rows: readonly FullReser
   }
   return rows.flatMap((row) => {
     const day = days.get(row.cuttingDayId);
-    return day ? [describeReservation(row, { day, names, gone, bases })] : [];
+    return day ? [describeReservation(row, { day, names })] : [];
   });
 }
 
-type Context = {
-  day: DayContext;
-  names: ProductNames;
-  gone: ReadonlyMap<string, number>;
-  /** `<account id> <product>` of what is charged by cold weight. */
-  bases: ReadonlySet<string>;
-};
+type Context = { day: DayContext; names: ProductNames };
 
 function describeReservation(row: FullReservation, context: Context): Reservation {
-  const lines = row.lines.map((line) => describeLine(line, row.accountId, context));
+  const lines = row.lines.map((line) => describeLine(line, context));
   return {
     id: row.id,
     reservationNo: row.reservationNo,
@@ -55,15 +46,14 @@ function describeReservation(row: FullReservation, context: Context): Reservatio
   };
 }
 
-function describeLine(line: LineRow, accountId: string, context: Context): Reservation['lines'][number] {
-  const { day, names, gone, bases } = context;
+function describeLine(line: LineRow, { day, names }: Context): Reservation['lines'][number] {
   const side = line.unitKind ? sideOf(line, day) : null;
   const grams = line.grams ?? unitGrams(line.unitKind ?? 'side', side ? [side] : day.figures.sides);
   const carcase = day.figures.carcases.find((candidate) => candidate.row.id === side?.carcaseId);
   const product = line.cutId ? `cut:${line.cutId}` : (line.unitKind ?? '');
-  const isByColdWeight = line.unitKind !== null && bases.has(`${accountId} ${product}`);
-  const dispatchedGrams = gone.get(line.id) ?? null;
-  const chargedGrams = isByColdWeight && carcase ? coldGrams(grams, carcase.cutout) : (dispatchedGrams ?? grams);
+  const { dispatchedGrams, basis } = line;
+  const chargedGrams =
+    basis === 'cold weight' && carcase ? coldGrams(grams, carcase.cutout) : (dispatchedGrams ?? grams);
   return {
     id: line.id,
     kind: line.kind,
@@ -73,7 +63,7 @@ function describeLine(line: LineRow, accountId: string, context: Context): Reser
     grams,
     dispatchedGrams,
     tenthPencePerKg: line.tenthPencePerKg,
-    basis: isByColdWeight ? 'cold weight' : 'scale weight',
+    basis,
     chargedGrams,
     linePence: priceForWeight(chargedGrams, line.tenthPencePerKg),
   };

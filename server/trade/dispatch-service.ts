@@ -12,9 +12,9 @@ import { enterLedger, refuseTooMuch } from '#server/packs/carcase-ledger.ts';
 import { describeFill } from '#server/packs/fill-work.ts';
 import { loadWork } from '#server/packs/packing-day.ts';
 import { sideOf } from './describe-reservation.ts';
-import { dispatchReason, listTradePacks } from './dispatched-queries.ts';
+import { listTradePacks, type TradePack } from './dispatched-queries.ts';
 import { describeOne, getReservation, MOVED_ON } from './reservation-service.ts';
-import { updateReservation, type FullReservation, type LineRow } from './trade-queries.ts';
+import { setDispatchedGrams, updateReservation, type FullReservation, type LineRow } from './trade-queries.ts';
 
 export type Dispatch = {
   reservationId: string;
@@ -105,7 +105,8 @@ async function sendPieces(tx: Tx, byUserId: string, sent: { row: FullReservation
     await enterLedger(tx, carcase, byUserId);
     await refuseTooMuch(tx, carcase, grams);
     await pinLine(tx, { id: line.id, carcaseId: carcase.row.id, side });
-    const reason = dispatchReason(sent.row.reservationNo, { ...line, side });
+    await setDispatchedGrams(tx, line.id, grams);
+    const reason = `reservation ${sent.row.reservationNo}: ${side} ${line.unitKind ?? ''}`;
     const movement = { carcaseId: carcase.row.id, fromPlace: 'carcase' as const, toPlace: 'trade' as const };
     await recordMovements(tx, [{ ...movement, grams, reason, byUserId }]);
     total += grams;
@@ -130,5 +131,12 @@ async function sendPacks(tx: Tx, byUserId: string, row: FullReservation): Promis
       byUserId,
     })),
   );
+  for (const line of row.lines.filter((each) => each.kind === 'cut')) {
+    await setDispatchedGrams(tx, line.id, gramsOf(packs.filter((pack) => pack.lineId === line.id)));
+  }
+  return gramsOf(packs);
+}
+
+function gramsOf(packs: readonly TradePack[]): number {
   return packs.reduce((sum, pack) => sum + pack.grams, 0);
 }

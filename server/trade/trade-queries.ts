@@ -94,12 +94,6 @@ export async function replacePrices(
   if (prices.length > 0) await tx.insert(tradePrice).values(prices.map((price) => ({ ...price, accountId })));
 }
 
-/** What butchers pay by the kill sheet's cold weight, as `<account id> <product>`. */
-export async function listColdWeightPrices(db: Db | Tx): Promise<Set<string>> {
-  const rows = await db.select().from(tradePrice).where(eq(tradePrice.basis, 'cold weight'));
-  return new Set(rows.map((row) => `${row.accountId} ${row.product}`));
-}
-
 export async function listCutNames(db: Db | Tx): Promise<Map<string, string>> {
   const rows = await db.select({ id: cut.id, name: cut.name }).from(cut);
   return new Map(rows.map((row) => [row.id, row.name]));
@@ -175,6 +169,10 @@ export async function addReservation(
   if (!added) return null;
   await tx.insert(reservationLine).values(lines.map((line) => ({ ...line, reservationId: added.id })));
   return added.id;
+}
+
+export async function setDispatchedGrams(tx: Tx, lineId: string, dispatchedGrams: number): Promise<void> {
+  await tx.update(reservationLine).set({ dispatchedGrams }).where(eq(reservationLine.id, lineId));
 }
 
 /** False when the reservation has moved on since the caller looked. */

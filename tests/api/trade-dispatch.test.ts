@@ -25,9 +25,16 @@ beforeAll(async () => {
 afterAll(() => world.stop());
 
 /** A confirmed hindquarter of the left side and some brisket. */
-async function makeConfirmed(briskets: number, side: 'left' | 'right') {
+async function makeConfirmed(briskets: number, side: 'left' | 'right', basis?: 'cold weight') {
   const head = { accountId, cuttingDayId: bench.dayId, state: 'confirmed' as const };
-  const unit = { kind: 'unit' as const, unitKind: 'hind', carcaseId: bench.carcaseId, side, tenthPencePerKg: 7_200 };
+  const unit = {
+    kind: 'unit' as const,
+    unitKind: 'hind',
+    carcaseId: bench.carcaseId,
+    side,
+    tenthPencePerKg: 7_200,
+    basis,
+  };
   const cut = { kind: 'cut' as const, cutId: 'brisket-joint', grams: briskets, tenthPencePerKg: 9_400 };
   const made = await makeReservation(world.db, head, [unit, cut]);
   await publishByHand(world, bench.dayId);
@@ -87,7 +94,7 @@ test('dispatching moves pieces and packs to the butcher and prices what the scal
 });
 
 test('more than the carcase still holds is refused and nothing leaves', async () => {
-  const { id, version, unitId } = await makeConfirmed(1_000, 'right');
+  const { id, version, unitId } = await makeConfirmed(1_000, 'right', 'cold weight');
   const before = await ledgerOf(world, bench.carcaseId);
   const wish = { version, weights: [{ lineId: unitId, grams: 400_000 }], isShortAccepted: true };
   const answer = await dispatch(id, wish);
@@ -100,8 +107,9 @@ test('more than the carcase still holds is refused and nothing leaves', async ()
   expect(stale.body).toMatchObject({ code: 'STATE_CHANGED' });
   expect((await ledgerOf(world, bench.carcaseId)).at('trade')).toBe(before.at('trade'));
 
-  // By the kill sheet's cold weight where the price list says so; the brisket never came and costs nothing.
-  await world.db.update(tradePrice).set({ basis: 'cold weight' }).where(eq(tradePrice.product, 'hind'));
+  // By the kill sheet's cold weight, as agreed when it was reserved, whatever the price list says since; the brisket
+  // never came and costs nothing.
+  await world.db.update(tradePrice).set({ basis: 'scale weight' }).where(eq(tradePrice.product, 'hind'));
   const gone = (await dispatch(id, { ...wish, weights: [{ lineId: unitId, grams: 70_000 }] })).body as Reservation;
   const unit = gone.lines.find((line) => line.kind === 'unit');
   expect(unit).toMatchObject({ basis: 'cold weight', dispatchedGrams: 70_000 });
