@@ -19,6 +19,8 @@ export const mailMessage = pgTable(
     /** [{ filename, contentType, content }] with text content. */
     attachments: jsonb().notNull().default([]),
     messageId: text().notNull().unique(),
+    /** Set on marketing mail alone: where one request ends such mail for this address. */
+    unsubscribeUrl: text(),
     state: text({ enum: ['queued', 'sent', 'failed', 'bounced'] })
       .notNull()
       .default('queued'),
