@@ -7,9 +7,7 @@ import {
   type QueryClient,
 } from '@tanstack/react-query';
 import {
-  cancelOrder,
   getOrder,
-  leavePayment,
   listMyOrders,
   placeOrder,
   priceBasket,
@@ -77,29 +75,10 @@ export function usePlaceOrder() {
   });
 }
 
-function forgetStock(client: QueryClient) {
+/** Stock and slots have moved. */
+export function forgetStock(client: QueryClient) {
   const kinds = [['basket'], ['collections'], ['shop'], ['cuts'], ['boxes']];
   return Promise.all(kinds.map((queryKey) => client.invalidateQueries({ queryKey })));
-}
-
-export function useCancelOrder(token: string) {
-  return useOrderChange(token, () => call(cancelOrder, { params: { token } }));
-}
-
-export function useLeavePayment(token: string) {
-  return useOrderChange(token, () => call(leavePayment, { params: { token } }));
-}
-
-function useOrderChange(token: string, change: () => Promise<Order>) {
-  const client = useQueryClient();
-  return useMutation({
-    mutationFn: change,
-    onSuccess: (order) => {
-      client.setQueryData(orderQuery(token).queryKey, order);
-      return forgetStock(client);
-    },
-    onError: () => client.invalidateQueries({ queryKey: ['orders', token] }),
-  });
 }
 
 export function useMyOrders(isSignedIn: boolean) {

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { View } from 'react-native';
 import type { Order } from '#shared/contracts/orders.ts';
 import { css } from '#components/theme/css.ts';
@@ -6,8 +7,15 @@ import { Heading } from '#components/ui/heading.tsx';
 import { TextLink } from '#components/ui/text-link.tsx';
 import { whenWords } from './order-words.ts';
 
+type OrderCollectionProps = {
+  order: Order;
+  calendarHref: string;
+  /** The way to another time, while the order can be changed. */
+  change?: ReactNode;
+};
+
 /** Where, when, how to find it and what to bring, with the file for a calendar. */
-export function OrderCollection({ order, calendarHref }: { order: Order; calendarHref: string }) {
+export function OrderCollection({ order, calendarHref, change }: OrderCollectionProps) {
   const { collection } = order;
   return (
     <View style={css('w-section')}>
@@ -22,6 +30,7 @@ export function OrderCollection({ order, calendarHref }: { order: Order; calenda
           { term: 'Bring', value: collection.bring },
         ]}
       />
+      {change}
       <TextLink href={calendarHref} place="alone" outside>
         Put it in your calendar
       </TextLink>

@@ -50,6 +50,16 @@ async function slotFull(tx: Tx, slotId: string): Promise<AppError> {
   });
 }
 
+/** From one time to another, in the order of their ids, so that two orders that change places never wait in a ring. */
+export async function moveSlot(
+  tx: Tx,
+  { dayId, from, to }: { dayId: string; from: string; to: string },
+): Promise<void> {
+  if (from < to) await freeSlot(tx, from);
+  if (!(await takeSlot(tx, to, dayId))) throw await slotFull(tx, to);
+  if (from > to) await freeSlot(tx, from);
+}
+
 export type Taken = { lines: readonly BasketLine[]; slotId: string };
 
 /** Gives back what an open checkout held. */

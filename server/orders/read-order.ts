@@ -45,7 +45,9 @@ export async function readOrder(deps: Deps, token: string): Promise<Order> {
     paymentExpiresAt: isOpen ? (order.sessionExpiresAt?.toISOString() ?? null) : null,
     day: day.day,
     cutOffAt: day.cutOffAt.toISOString(),
-    canCancel: order.state === 'confirmed' && now < day.cutOffAt,
+    dayId: order.cuttingDayId,
+    slotId: order.slotId,
+    canChange: order.state === 'confirmed' && now < day.cutOffAt,
     lines: lines.map(viewLine),
     refundedPence: payments
       .filter((row) => row.kind === 'refund' && row.state === 'done')

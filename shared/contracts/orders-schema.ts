@@ -69,7 +69,10 @@ export const Order = z.strictObject({
   note: z.string(),
   day: Day,
   cutOffAt: Instant,
-  canCancel: z.boolean(),
+  /** Paid, and its cut-off is still to come: time, swaps, additions, cancelling. */
+  canChange: z.boolean(),
+  dayId: Id,
+  slotId: Id,
   lines: z.array(
     z.strictObject({
       name: z.string(),
@@ -94,10 +97,11 @@ export const Order = z.strictObject({
 });
 export type Order = z.infer<typeof Order>;
 
-const Token = z.strictObject({ token: z.string().regex(/^[A-Za-z0-9_-]{20,64}$/) });
-export const getOrderSchema = { params: Token, answer: Order };
-export const leavePaymentSchema = { params: Token, answer: Order };
-export const cancelOrderSchema = { params: Token, answer: Order };
+/** The private link of an order. */
+export const OrderToken = z.strictObject({ token: z.string().regex(/^[A-Za-z0-9_-]{20,64}$/) });
+export const getOrderSchema = { params: OrderToken, answer: Order };
+export const leavePaymentSchema = { params: OrderToken, answer: Order };
+export const cancelOrderSchema = { params: OrderToken, answer: Order };
 
 export const OrderSummary = z.strictObject({
   id: Id,

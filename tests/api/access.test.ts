@@ -30,6 +30,7 @@ const MAY_CALL: Record<string, Who[]> = {
   'GET /api/orders/:token/calendar.ics': EVERYONE,
   'POST /api/orders/:token/leave-payment': EVERYONE,
   'POST /api/orders/:token/cancel': EVERYONE,
+  'POST /api/orders/:token/slot': EVERYONE,
   'GET /api/my/orders': SIGNED_IN,
   'GET /api/trade/account': SIGNED_IN,
   'POST /api/trade/account': ['customer', 'butcher'],

@@ -45,7 +45,7 @@ test('cancelling frees stock and slot at once and refunds the card once, however
     state: 'cancelled',
     paymentState: 'refunded',
     refundedPence: 9_400,
-    canCancel: false,
+    canChange: false,
   });
   const charge = (await paymentsOf(world, order.id))[0];
   expect(world.payments.refunds().filter((refund) => refund.payment_intent === charge?.providerId)).toHaveLength(1);

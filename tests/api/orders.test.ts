@@ -74,7 +74,7 @@ test('placing an order holds its stock and its slot, and paying makes it sold', 
   expect(await paymentsOf(world, order.id)).toMatchObject([{ kind: 'charge', amountPence: 9_400, state: 'done' }]);
 
   const seen = await world.request().get(`/api/orders/${placed.token}`);
-  expect(seen.body).toMatchObject({ state: 'confirmed', canCancel: true, paymentUrl: null, refundedPence: 0 });
+  expect(seen.body).toMatchObject({ state: 'confirmed', canChange: true, paymentUrl: null, refundedPence: 0 });
 });
 
 test('a declined card leaves the order waiting and its page open', async () => {

@@ -1,8 +1,10 @@
 import { useLoaderData, useLocalSearchParams, useRouter } from 'expo-router';
 import type { GenerateMetadataFunction, LoaderFunction } from 'expo-server';
-import { useEffect } from 'react';
+import { useEffect, useState } from 'react';
 import { View } from 'react-native';
+import { SlotPicker } from '#components/checkout/slot-picker.tsx';
 import { CancelOrder } from '#components/orders/cancel-order.tsx';
+import { ChangeSheet } from '#components/orders/change-sheet.tsx';
 import { OrderCollection } from '#components/orders/order-collection.tsx';
 import { OrderLines } from '#components/orders/order-lines.tsx';
 import { OrderPacks } from '#components/orders/order-packs.tsx';
@@ -15,13 +17,16 @@ import { css } from '#components/theme/css.ts';
 import { Badge } from '#components/ui/badge.tsx';
 import { Button } from '#components/ui/button.tsx';
 import { ButtonLink } from '#components/ui/button-link.tsx';
+import { StateView } from '#components/ui/state-view.tsx';
 import { Text } from '#components/ui/text.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { pathOf } from '#hooks/api.ts';
 import { loadFarm, type Farm } from '#hooks/farm.ts';
 import { load, type Loaded } from '#hooks/loaded.ts';
-import { refusalOf, useCancelOrder, useLeavePayment, useOrder } from '#hooks/orders.ts';
+import { useCancelOrder, useChangeSlot, useLeavePayment } from '#hooks/order-changes.ts';
+import { refusalOf, useOrder } from '#hooks/orders.ts';
 import { pageMetadata } from '#hooks/page-metadata.ts';
+import { useCollections } from '#hooks/shop.ts';
 import { settleOrder } from '#hooks/use-basket.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import { getOrderCalendar } from '#shared/contracts/downloads.ts';
@@ -77,10 +82,16 @@ function OrderPage({ order, hasLeft }: { order: Order; hasLeft: boolean }) {
         {state === 'awaiting payment' ? <Paying order={order} /> : null}
       </View>
       <OrderWay order={order} />
-      {isOn ? <OrderCollection order={order} calendarHref={pathOf(getOrderCalendar, { params: { token } })} /> : null}
+      {isOn ? (
+        <OrderCollection
+          order={order}
+          calendarHref={pathOf(getOrderCalendar, { params: { token } })}
+          change={order.canChange ? <ChangeTime order={order} /> : null}
+        />
+      ) : null}
       <OrderPacks packs={order.packs} />
       <OrderLines order={order} />
-      {order.canCancel ? (
+      {order.canChange ? (
         <CancelOrder
           order={order}
           onCancel={() => cancel.mutate()}
@@ -92,6 +103,55 @@ function OrderPage({ order, hasLeft }: { order: Order; hasLeft: boolean }) {
         The address of this page is private: whoever has it can see this order and cancel it.
       </Text>
     </View>
+  );
+}
+
+/** Another place or time of the same cutting day. */
+function ChangeTime({ order }: { order: Order }) {
+  const [isOpen, setIsOpen] = useState(false);
+  return (
+    <View style={css('w-buttons')}>
+      <Button kind="quiet" label="Change the place or time" onPress={() => setIsOpen(true)} />
+      {isOpen ? <TimeSheet order={order} onClose={() => setIsOpen(false)} /> : null}
+    </View>
+  );
+}
+
+function TimeSheet({ order, onClose }: { order: Order; onClose: () => void }) {
+  const collections = useCollections(order.dayId);
+  const change = useChangeSlot(order.token);
+  const [slotId, setSlotId] = useState(order.slotId);
+  const [pointId, setPointId] = useState<string>();
+  const points = collections.data?.points ?? [];
+  const present = points.find((point) => point.slots.some((slot) => slot.id === order.slotId));
+  return (
+    <ChangeSheet
+      open
+      onClose={onClose}
+      title="Another place or time"
+      doLabel="Move it there"
+      busyLabel="Moving it …"
+      isBusy={change.isPending}
+      isReady={slotId !== '' && slotId !== order.slotId}
+      onDo={() => change.mutate(slotId, { onSuccess: onClose })}
+      refusal={refusalOf(change.error)?.message}
+    >
+      <StateView query={collections} what="the places and times">
+        {() => (
+          <SlotPicker
+            points={points}
+            pointId={pointId ?? present?.id}
+            onPoint={(id) => {
+              setPointId(id);
+              setSlotId('');
+            }}
+            slotId={slotId}
+            onSlot={setSlotId}
+            error={undefined}
+          />
+        )}
+      </StateView>
+    </ChangeSheet>
   );
 }
 

@@ -1,0 +1,33 @@
+import { useMutation, useQueryClient } from '@tanstack/react-query';
+import { changeSlot } from '#shared/contracts/order-changes.ts';
+import { cancelOrder, leavePayment, type Order } from '#shared/contracts/orders.ts';
+import { call } from './api.ts';
+import { forgetStock, orderQuery } from './orders.ts';
+
+/** A change of a paid order. Its answer is the order as it is now; a refusal is news, so the order is asked for again. */
+export function useOrderChange<Input = void>(token: string, change: (input: Input) => Promise<Order>) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: change,
+    onSuccess: (order) => {
+      client.setQueryData(orderQuery(token).queryKey, order);
+      return forgetStock(client);
+    },
+    onError: async () => {
+      await client.invalidateQueries({ queryKey: ['orders', token] });
+      await forgetStock(client);
+    },
+  });
+}
+
+export function useChangeSlot(token: string) {
+  return useOrderChange(token, (slotId: string) => call(changeSlot, { params: { token }, body: { slotId } }));
+}
+
+export function useCancelOrder(token: string) {
+  return useOrderChange(token, () => call(cancelOrder, { params: { token } }));
+}
+
+export function useLeavePayment(token: string) {
+  return useOrderChange(token, () => call(leavePayment, { params: { token } }));
+}
