@@ -1,7 +1,12 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
 import type { CallInput } from '#shared/contracts/endpoint.ts';
-import type { addPacksSchema, losePackSchema, reweighPackSchema } from '#shared/contracts/packs-schema.ts';
-import { addPacks, fillOrders, getPackingDay, losePack, reweighPack } from '#shared/contracts/packs.ts';
+import type {
+  addPacksSchema,
+  losePackSchema,
+  packShortSchema,
+  reweighPackSchema,
+} from '#shared/contracts/packs-schema.ts';
+import { addPacks, fillOrders, getPackingDay, losePack, packShort, reweighPack } from '#shared/contracts/packs.ts';
 import { call } from './api.ts';
 import { STALE } from './query-client.ts';
 import { useFarmMutation } from './use-farm-mutation.ts';
@@ -32,4 +37,8 @@ export function useLosePack() {
 
 export function useFillOrders() {
   return useFarmMutation((dayId: string) => call(fillOrders, { params: { dayId } }));
+}
+
+export function usePackShort() {
+  return useFarmMutation((input: CallInput<typeof packShortSchema>) => call(packShort, input));
 }

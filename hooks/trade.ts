@@ -5,6 +5,7 @@ import type {
   cancelReservationSchema,
   confirmReservationSchema,
   decideTradeAccountSchema,
+  dispatchReservationSchema,
   NewReservation,
   refuseReservationSchema,
   setTradePricesSchema,
@@ -14,6 +15,7 @@ import {
   cancelReservation,
   confirmReservation,
   decideTradeAccount,
+  dispatchReservation,
   getTradeAccount,
   listMyReservations,
   listReservations,
@@ -105,6 +107,10 @@ export function useConfirmReservation() {
 
 export function useRefuseReservation() {
   return useFarmMutation((input: CallInput<typeof refuseReservationSchema>) => call(refuseReservation, input));
+}
+
+export function useDispatchReservation() {
+  return useFarmMutation((input: CallInput<typeof dispatchReservationSchema>) => call(dispatchReservation, input));
 }
 
 export function useDecideTradeAccount() {

@@ -11,6 +11,11 @@ export function missingWords({ line, shortGrams, shortPacks }: Fill['missing'][n
   return `${line}: ${parts.length > 0 ? `${parts.join(' and ')} missing` : 'no fit found'}`;
 }
 
+export function fillState({ isFilled, isPacked }: Pick<Fill, 'isFilled' | 'isPacked'>): string {
+  if (isFilled) return 'filled';
+  return isPacked ? 'packed short' : 'not filled';
+}
+
 /** `Hearth, 2nd of this order` when an order holds several of one kind. */
 export function nameItem({ item, copy }: Pick<Fill, 'item' | 'copy'>): string {
   return copy > 1 ? `${item}, no. ${copy}` : item;

@@ -60,7 +60,13 @@ function Lines({ reservation }: { reservation: Reservation }) {
             line.earTag ? `${shortEarTag(line.earTag)}${line.side ? `, ${line.side}` : ''}` : 'any carcase',
           foot: '',
         },
-        { id: 'grams', title: 'Weight', align: 'end', cell: (line) => formatWeight(line.grams), foot: '' },
+        {
+          id: 'grams',
+          title: 'Weight',
+          align: 'end',
+          cell: (line) => `${formatWeight(line.chargedGrams)}${line.basis === 'cold weight' ? ' cold' : ''}`,
+          foot: '',
+        },
         { id: 'rate', title: 'Rate', align: 'end', cell: (line) => formatRate(line.tenthPencePerKg), foot: '' },
         {
           id: 'pence',

@@ -80,7 +80,8 @@ export function describeFill(job: Job): Fill {
   const { orderNo, orderName, item, copy } = job;
   const packs = job.packs.map(({ code, cut, grams }) => ({ code, cut, grams }));
   const grams = packs.reduce((sum, pack) => sum + pack.grams, 0);
-  const named = { orderNo, orderName, item, copy, grams, packs };
+  const kind = job.kind === 'trade' ? ('reservation' as const) : ('order' as const);
+  const named = { kind, orderNo, orderName, item, copy, grams, packs, isPacked: job.isPacked };
   if (job.kind === 'box') {
     const check = checkBox(job.recipe, placedPacks(job));
     const missing = check.missing.map(({ name, shortGrams, shortPacks }) => ({ line: name, shortGrams, shortPacks }));

@@ -5,8 +5,8 @@ import { weightsSettledMail } from '#server/mail/weights-settled.ts';
 import { lockOrder } from '#server/orders/order-queries.ts';
 import { readOrderFacts } from '#server/orders/read-order.ts';
 import { WEIGHTS_SETTLED } from '#server/payments/refund-reasons.ts';
-import { insertRefund, listPayments } from '#server/payments/payment-queries.ts';
-import { enqueue } from '#server/queue.ts';
+import { askRefund } from '#server/payments/ask-refund.ts';
+import { listPayments } from '#server/payments/payment-queries.ts';
 import type { Job } from './fill-work.ts';
 import { owedPence, settleJob } from './settlement.ts';
 
@@ -25,9 +25,8 @@ export async function settleWeights(deps: Deps, tx: Tx, { orderId, jobs }: { ord
   const amountPence = Math.min(owedPence(items) - given, refundablePence(payments));
   if (amountPence <= 0) return;
   const reason = settled.length === 0 ? WEIGHTS_SETTLED : `${WEIGHTS_SETTLED} again, ${settled.length + 1}`;
-  const paymentId = await insertRefund(tx, { orderId, reason, amountPence });
+  const paymentId = await askRefund(tx, { orderId, reason, amountPence });
   if (!paymentId) return;
-  await enqueue(tx, 'settle-refund', { paymentId });
   const packs = ofOrder.flatMap((job) => job.packs.map(({ code, cut, grams }) => ({ code, cut, grams })));
   const facts = await readOrderFacts(deps, tx, order);
   await queueMail(tx, {

@@ -25,11 +25,15 @@ export type Pack = z.infer<typeof Pack>;
 
 /** One box, loose pack or trade line that the day must fill. */
 export const Fill = z.strictObject({
+  /** A paid order of a consumer, or what a butcher reserved. */
+  kind: z.enum(['order', 'reservation']),
   orderNo: z.int(),
   orderName: z.string(),
   item: z.string(),
   copy: z.int(),
   isFilled: z.boolean(),
+  /** Closed to further packs: filled, handed over short, or gone. */
+  isPacked: z.boolean(),
   grams: z.int(),
   guaranteedGrams: z.int(),
   packs: z.array(z.strictObject({ code: z.string(), cut: z.string(), grams: z.int() })),

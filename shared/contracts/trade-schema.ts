@@ -144,7 +144,7 @@ export const dispatchReservationSchema = {
     /** One scale weight for each line that leaves whole; cuts leave in the packs that were filled for them. */
     weights: z.array(z.strictObject({ lineId: Id, grams: Grams })).max(30),
     /** Lets cuts leave although fewer packs are there than were reserved. */
-    isShortAccepted: z.boolean().default(false),
+    isShortAccepted: z.boolean(),
   }),
   answer: Reservation,
 };

@@ -48,7 +48,10 @@ async function makeConfirmed(briskets: number, side: 'left' | 'right', basis?: '
 }
 
 function dispatch(id: string, body: object, cookie = bench.owner) {
-  return world.request(cookie).post(`/api/office/reservations/${id}/dispatch`).send(body);
+  return world
+    .request(cookie)
+    .post(`/api/office/reservations/${id}/dispatch`)
+    .send({ isShortAccepted: false, ...body });
 }
 
 test('dispatching moves pieces and packs to the butcher and prices what the scale says', async () => {

@@ -5,6 +5,7 @@ import { RefuseForm, type Refusal } from '#components/trade/refuse-form.tsx';
 import { ReservationList } from '#components/trade/reservation-list.tsx';
 import { css } from '#components/theme/css.ts';
 import { Button } from '#components/ui/button.tsx';
+import { ButtonLink } from '#components/ui/button-link.tsx';
 import { EmptyState } from '#components/ui/empty-state.tsx';
 import { Heading } from '#components/ui/heading.tsx';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
@@ -73,6 +74,15 @@ function Reservations() {
           label="Refuse"
           name={`Refuse reservation ${reservation.reservationNo}`}
           onPress={() => setRefusing(reservation)}
+        />
+      </View>
+    ) : reservation.state === 'confirmed' ? (
+      <View style={css('w-buttons')}>
+        <ButtonLink
+          kind="quiet"
+          label="Dispatch"
+          name={`Dispatch reservation ${reservation.reservationNo}`}
+          href={`/office/trade/dispatch/${reservation.id}`}
         />
       </View>
     ) : null;

@@ -76,11 +76,13 @@ describe('an animal in words', () => {
 });
 
 const fill: Fill = {
+  kind: 'order',
   orderNo: 1002,
   orderName: 'Ada Beck',
   item: 'Hearth',
   copy: 1,
   isFilled: true,
+  isPacked: false,
   grams: 5_100,
   guaranteedGrams: 5_000,
   packs: [],

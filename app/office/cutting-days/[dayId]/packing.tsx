@@ -19,12 +19,13 @@ import { ProblemNotice } from '#components/ui/problem-notice.tsx';
 import { Sheet } from '#components/ui/sheet.tsx';
 import { Skeleton } from '#components/ui/skeleton.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
+import { Text } from '#components/ui/text.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useMe } from '#hooks/me.ts';
-import { useAddPacks, useFillOrders, useLosePack, usePackingDay, useReweighPack } from '#hooks/packs.ts';
+import { useAddPacks, useFillOrders, useLosePack, usePackingDay, usePackShort, useReweighPack } from '#hooks/packs.ts';
 import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
-import type { Pack, PackingDay } from '#shared/contracts/packs.ts';
+import type { Fill, Pack, PackingDay } from '#shared/contracts/packs.ts';
 import { formatCount, formatDay, formatGrams, formatKilograms } from '#shared/domain/words.ts';
 
 const loadPacks = async () => (await import('#hooks/form-schemas.ts')).packs.addPacksSchema.body;
@@ -47,9 +48,8 @@ export default function PackingScreen() {
 
 function Packing({ day }: { day: PackingDay }) {
   const me = useMe();
-  const fill = useFillOrders();
   const [open, setOpen] = useState<Pack>();
-  const unfilled = day.fills.filter((one) => !one.isFilled).length;
+  const role = me.data?.user?.role ?? 'packer';
   const packedGrams = day.packs.reduce((sum, pack) => sum + pack.grams, 0);
   useTitle(`Packing ${formatDay(day.day)}`);
   return (
@@ -59,14 +59,36 @@ function Packing({ day }: { day: PackingDay }) {
         above={`${formatDay(day.day)} · ${formatCount(day.packs.length, 'pack')} · ${formatKilograms(packedGrams)}`}
         actions={<DarkRoom />}
       />
-      <DayPlaces
-        dayId={day.dayId}
-        role={me.data?.user?.role ?? 'packer'}
-        path={`/office/cutting-days/${day.dayId}/packing`}
-      />
+      <DayPlaces dayId={day.dayId} role={role} path={`/office/cutting-days/${day.dayId}/packing`} />
       <Weighing day={day} />
       <Heading level={2}>Packs</Heading>
       <PackList packs={day.packs} onOpen={setOpen} />
+      <Orders day={day} isOwner={role === 'owner'} />
+      <Sheet open={open !== undefined} onClose={() => setOpen(undefined)} title={`Pack ${open?.code ?? ''}`}>
+        {open ? <Change key={open.id} pack={open} onDone={() => setOpen(undefined)} /> : null}
+      </Sheet>
+    </View>
+  );
+}
+
+function Orders({ day, isOwner }: { day: PackingDay; isOwner: boolean }) {
+  const fill = useFillOrders();
+  const [short, setShort] = useState<Fill>();
+  const unfilled = day.fills.filter((one) => !one.isFilled).length;
+  const actionsOf = (one: Fill) =>
+    isOwner && one.kind === 'order' ? (
+      <View style={css('w-buttons')}>
+        <Button
+          kind="quiet"
+          small
+          label="Pack it short"
+          name={`Pack order ${one.orderNo} short`}
+          onPress={() => setShort(one)}
+        />
+      </View>
+    ) : null;
+  return (
+    <>
       <Heading level={2}>Orders</Heading>
       {fill.isSuccess ? (
         <Notice
@@ -88,10 +110,28 @@ function Packing({ day }: { day: PackingDay }) {
         />
       </View>
       <ProblemNotice error={fill.error} title="The orders were not filled." />
-      <FillList fills={day.fills} />
-      <Sheet open={open !== undefined} onClose={() => setOpen(undefined)} title={`Pack ${open?.code ?? ''}`}>
-        {open ? <Change key={open.id} pack={open} onDone={() => setOpen(undefined)} /> : null}
+      <FillList fills={day.fills} actionsOf={actionsOf} />
+      <Sheet
+        open={short !== undefined}
+        onClose={() => setShort(undefined)}
+        title={`Pack order ${short?.orderNo ?? ''} short?`}
+      >
+        {short ? <PackShort dayId={day.dayId} fill={short} onDone={() => setShort(undefined)} /> : null}
       </Sheet>
+    </>
+  );
+}
+
+function PackShort({ dayId, fill, onDone }: { dayId: string; fill: Fill; onDone: () => void }) {
+  const packShort = usePackShort();
+  const send = () => packShort.mutate({ params: { dayId, orderNo: String(fill.orderNo) } }, { onSuccess: onDone });
+  return (
+    <View style={css('w-stack')}>
+      <Text>
+        {`${fill.orderName} gets what is there. What is missing is paid back at once and told by e-mail; nothing can be added afterwards.`}
+      </Text>
+      <ProblemNotice error={packShort.error} title="The order was not packed short." />
+      <Button kind="danger" wide label="Pack it short and refund" busy={packShort.isPending} onPress={send} />
     </View>
   );
 }
