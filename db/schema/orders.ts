@@ -1,5 +1,17 @@
 import { sql } from 'drizzle-orm';
-import { boolean, check, index, integer, jsonb, pgTable, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import {
+  type AnyPgColumn,
+  boolean,
+  check,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  text,
+  unique,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import { ORDER_STATES, PAYMENT_STATES } from '#shared/domain/order-state.ts';
 import { offer } from './allocations.ts';
 import { user } from './auth.ts';
@@ -13,6 +25,10 @@ export const collectionPoint = pgTable('collection_point', {
   directions: text().notNull(),
   bring: text().notNull(),
   isActive: boolean().notNull().default(true),
+  /** A van's rounds are times of a point too, with room for so many stops. */
+  kind: text({ enum: ['collection', 'van'] })
+    .notNull()
+    .default('collection'),
 });
 
 export const collectionSlot = pgTable(
@@ -61,7 +77,20 @@ export const customerOrder = pgTable(
     note: text().notNull().default(''),
     state: text({ enum: ORDER_STATES }).notNull().default('awaiting payment'),
     paymentState: text({ enum: PAYMENT_STATES }).notNull().default('unpaid'),
+    /** What is to be paid: the lines, less the discount, and the delivery. */
     totalPence: integer().notNull(),
+    discountPence: integer().notNull().default(0),
+    deliveryPence: integer().notNull().default(0),
+    /** Where the van brings it; both empty where it is collected. */
+    deliveryAddress: text().array(),
+    deliveryPostcode: text(),
+    /** Paid now, where the rest is taken from the saved card once the order is packed. */
+    depositPence: integer(),
+    /** What was left to pay of a deposit order once it was weighed; empty until then. */
+    balancePence: integer(),
+    /** The card kept with the payment company for the rest. */
+    providerCustomerId: text(),
+    providerMethodId: text(),
     reachedPaymentAt: instant().notNull(),
     /** True while this order's lines and slot are counted as held. */
     isHeld: boolean().notNull().default(true),
@@ -75,6 +104,13 @@ export const customerOrder = pgTable(
     index().on(table.cuttingDayId, table.state),
     index().on(table.userId),
     check('order_total', sql`${table.totalPence} > 0`),
+    check('order_sums', sql`${table.discountPence} >= 0 and ${table.deliveryPence} >= 0`),
+    check('order_deposit', sql`${table.depositPence} > 0 and ${table.depositPence} < ${table.totalPence}`),
+    check(
+      'order_balance',
+      sql`${table.balancePence} is null or (${table.balancePence} >= 0 and ${table.depositPence} is not null)`,
+    ),
+    check('order_delivery_address', sql`(${table.deliveryAddress} is null) = (${table.deliveryPostcode} is null)`),
     check('order_held_only_before_payment', sql`not ${table.isHeld} or ${table.state} = 'awaiting payment'`),
   ],
 );
@@ -91,13 +127,17 @@ export const orderLine = pgTable(
       .references(() => offer.id),
     quantity: integer().notNull(),
     unitPricePence: integer().notNull(),
+    /** This line's share of a promotional code, over all of its quantity. */
+    discountPence: integer().notNull().default(0),
     /** What one of it was sold as: a box's guaranteed weight, a loose pack's upper weight. */
     unitGrams: integer().notNull(),
     name: text().notNull(),
   },
   (table) => [
-    unique().on(table.orderId, table.offerId),
+    // Added later, the same thing may cost something else.
+    unique().on(table.orderId, table.offerId, table.unitPricePence),
     index().on(table.offerId),
+    check('order_line_discount', sql`${table.discountPence} between 0 and ${table.quantity} * ${table.unitPricePence}`),
     check('order_line_quantity', sql`${table.quantity} > 0`),
     check('order_line_price', sql`${table.unitPricePence} > 0`),
     check('order_line_grams', sql`${table.unitGrams} > 0`),
@@ -119,12 +159,20 @@ export const payment = pgTable(
     amountPence: integer().notNull(),
     state: text({ enum: ['asked', 'done', 'failed'] }).notNull(),
     error: text(),
+    /** The charge that a refund is taken from. */
+    chargeId: uuid().references((): AnyPgColumn => payment.id),
+    /** Raised when a person has it tried again, under a key of its own. */
+    attempt: integer().notNull().default(1),
     createdAt: createdAt(),
   },
   (table) => [
     index().on(table.orderId),
+    uniqueIndex('payment_one_balance')
+      .on(table.orderId)
+      .where(sql`${table.kind} = 'charge' and ${table.reason} = 'balance'`),
+    check('payment_refund_has_charge', sql`(${table.kind} = 'refund') = (${table.chargeId} is not null)`),
     uniqueIndex('payment_one_refund_per_reason')
-      .on(table.orderId, table.reason)
+      .on(table.orderId, table.reason, table.chargeId)
       .where(sql`${table.kind} = 'refund'`),
     check('payment_amount', sql`${table.amountPence} > 0`),
   ],

@@ -1,5 +1,15 @@
 import { sql } from 'drizzle-orm';
-import { boolean, check, integer, pgTable, primaryKey, text, uuid, unique } from 'drizzle-orm/pg-core';
+import {
+  type AnyPgColumn,
+  boolean,
+  check,
+  integer,
+  pgTable,
+  primaryKey,
+  text,
+  uuid,
+  unique,
+} from 'drizzle-orm/pg-core';
 import { createdAt, id, version } from './columns.ts';
 
 /** A cut that a specification can give. The id is the specification's own. */
@@ -40,12 +50,15 @@ export const boxKind = pgTable(
     demandBoxes: integer().notNull(),
     isActive: boolean().notNull().default(true),
     position: integer().notNull(),
+    /** A swap: the same box at the same price with another recipe. It has offers of its own and no page of its own. */
+    variantOfId: uuid().references((): AnyPgColumn => boxKind.id),
     createdAt: createdAt(),
     version: version(),
   },
   (table) => [
     check('box_kind_grams', sql`${table.guaranteedGrams} > 0`),
     check('box_kind_money', sql`${table.pricePence} > 0 and ${table.packagingPence} >= 0`),
+    check('box_kind_variant', sql`${table.variantOfId} <> ${table.id}`),
     check('box_kind_demand', sql`${table.demandBoxes} >= 0`),
   ],
 );

@@ -8,8 +8,8 @@ import { lockCuttingDay } from '#server/carcases/cutting-day-queries.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
 import { orderCancelledMail } from '#server/mail/order-cancelled.ts';
 import { queueMail } from '#server/mail/outbox.ts';
-import { insertRefund, listPayments } from '#server/payments/payment-queries.ts';
-import { enqueue } from '#server/queue.ts';
+import { askRefund } from '#server/payments/ask-refund.ts';
+import { listPayments } from '#server/payments/payment-queries.ts';
 import { unsell } from './hold.ts';
 import { findOrder, listLines, lockOrder, updateOrder, type OrderRow } from './order-queries.ts';
 import { returnPacks } from './return-packs.ts';
@@ -84,12 +84,11 @@ async function cancel(
   const cancelled = await updateOrder(tx, order.id, { state: 'cancelled', version: order.version + 1 });
   const refundPence = Math.max(0, refundablePence(await listPayments(tx, order.id)));
   if (refundPence > 0) {
-    const refundId = await insertRefund(tx, {
+    await askRefund(tx, {
       orderId: order.id,
       reason: reason ? 'Cancelled by the farm' : 'Cancelled',
       amountPence: refundPence,
     });
-    if (refundId) await enqueue(tx, 'settle-refund', { paymentId: refundId });
   }
   await recordAudit(tx, {
     byUserId,

@@ -23,23 +23,23 @@ export async function findPaymentByProviderId(db: Db | Tx, providerId: string): 
   return rows[0] ?? null;
 }
 
-/** False when this charge is written down already. */
+/** Its own id; null when this charge is written down already. */
 export async function insertCharge(
   tx: Tx,
-  charge: { orderId: string; providerId: string; amountPence: number },
-): Promise<boolean> {
+  charge: { orderId: string; providerId: string; amountPence: number; reason?: 'order' | 'addition' },
+): Promise<string | null> {
   const rows = await tx
     .insert(payment)
-    .values({ ...charge, kind: 'charge', reason: 'order', state: 'done' })
+    .values({ reason: 'order', ...charge, kind: 'charge', state: 'done' })
     .onConflictDoNothing({ target: payment.providerId })
     .returning({ id: payment.id });
-  return rows.length === 1;
+  return rows[0]?.id ?? null;
 }
 
-/** One refund a reason: null when it has been asked for before. */
+/** One refund a reason and charge: null when it has been asked for before. */
 export async function insertRefund(
   tx: Tx,
-  refund: { orderId: string; reason: string; amountPence: number },
+  refund: { orderId: string; reason: string; amountPence: number; chargeId: string },
 ): Promise<string | null> {
   const rows = await tx
     .insert(payment)

@@ -15,7 +15,7 @@ import { enqueue } from '#server/queue.ts';
 /** After the cut-off no page opens; the last one that could be open has ended by then, and the cutting list stands. */
 const FREEZE_MS = 35 * 60_000;
 
-type Paid = { order: OrderRow; intentId: string; amountPence: number };
+type Paid = { order: OrderRow; intentId: string; amountPence: number; chargeId: string };
 
 /**
  * Brings an order in line with the truth about one payment page, whatever came before: safe when told twice, late or in
@@ -34,9 +34,9 @@ export async function settlePage(tx: Tx, deps: Deps, page: Stripe.Checkout.Sessi
   const intentId = typeof page.payment_intent === 'string' ? page.payment_intent : page.payment_intent?.id;
   const amountPence = page.amount_total ?? 0;
   if (!intentId || amountPence === 0) return;
-  const isNew = await insertCharge(tx, { orderId: order.id, providerId: intentId, amountPence });
-  if (!isNew) return;
-  const paid = { order, intentId, amountPence };
+  const chargeId = await insertCharge(tx, { orderId: order.id, providerId: intentId, amountPence });
+  if (!chargeId) return;
+  const paid = { order, intentId, amountPence, chargeId };
   const isDue = order.state === 'awaiting payment' && isCurrent && amountPence === order.totalPence;
   if (isDue && order.isHeld) {
     await sell(tx, await listLines(tx, order.id));
@@ -93,12 +93,13 @@ async function confirm(tx: Tx, deps: Deps, { order }: Paid): Promise<void> {
   });
 }
 
-async function giveBack(tx: Tx, deps: Deps, { order, intentId, amountPence }: Paid): Promise<void> {
+async function giveBack(tx: Tx, deps: Deps, { order, intentId, amountPence, chargeId }: Paid): Promise<void> {
   const isOpen = order.state === 'awaiting payment' && !order.isHeld;
   const refundId = await insertRefund(tx, {
     orderId: order.id,
     reason: `A payment that came too late (${intentId})`,
     amountPence,
+    chargeId,
   });
   if (refundId) await enqueue(tx, 'settle-refund', { paymentId: refundId });
   const current = isOpen

@@ -1,5 +1,5 @@
 import Stripe from 'stripe';
-import { chargeForRefund, paymentStateOf } from '#shared/domain/refunds.ts';
+import { paymentStateOf } from '#shared/domain/refunds.ts';
 import type { Deps, Tx } from '#server/deps.ts';
 import { queueMail } from '#server/mail/outbox.ts';
 import { refundSentMail } from '#server/mail/refund-sent.ts';
@@ -22,7 +22,7 @@ const PATIENCE_MS = 12 * 3_600_000;
 export async function sendRefund(deps: Deps, paymentId: string): Promise<void> {
   const refund = await findPayment(deps.db, paymentId);
   if (refund?.kind !== 'refund' || refund.state !== 'asked') return;
-  const charge = chargeForRefund(await listPayments(deps.db, refund.orderId), refund.id);
+  const charge = refund.chargeId ? await findPayment(deps.db, refund.chargeId) : null;
   if (!charge?.providerId) {
     await fail(deps, refund, 'There is no payment left to give this back from.');
     return;

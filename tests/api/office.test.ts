@@ -72,8 +72,13 @@ describe('today', () => {
       })
       .returning();
     const orderId = order?.id ?? '';
+    const [charge] = await world.db
+      .insert(payment)
+      .values({ orderId, kind: 'charge', reason: 'order', amountPence: 7_600, state: 'done' })
+      .returning();
     await world.db.insert(payment).values({
       orderId,
+      chargeId: charge?.id ?? '',
       kind: 'refund',
       reason: 'light pack',
       amountPence: 84,

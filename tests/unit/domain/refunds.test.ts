@@ -1,49 +1,61 @@
 import { describe, expect, test } from 'vitest';
-import { chargeForRefund, paymentStateOf, refundablePence, type MoneyRow } from '#shared/domain/refunds.ts';
+import { paymentStateOf, refundablePence, refundParts, type MoneyRow } from '#shared/domain/refunds.ts';
 
-const charge = (id: string, amountPence: number): MoneyRow => ({ id, kind: 'charge', amountPence, state: 'done' });
-const refund = (id: string, amountPence: number, state: MoneyRow['state'] = 'done'): MoneyRow => ({
-  ...{ id, kind: 'refund', amountPence, state },
+const charge = (id: string, amountPence: number): MoneyRow => ({
+  ...{ id, kind: 'charge', amountPence, state: 'done', chargeId: null },
+});
+const refund = (id: string, amountPence: number, more: Partial<MoneyRow> = {}): MoneyRow => ({
+  ...{ id, kind: 'refund', amountPence, state: 'done', chargeId: 'a' },
+  ...more,
 });
 
 describe('the payment state of an order', () => {
   test.each([
     ['nothing yet', [], 'unpaid'],
     ['one charge', [charge('a', 900)], 'paid'],
-    ['a refund that is only asked for', [charge('a', 900), refund('r', 900, 'asked')], 'paid'],
-    ['a refund that failed', [charge('a', 900), refund('r', 900, 'failed')], 'paid'],
+    ['a refund that is only asked for', [charge('a', 900), refund('r', 900, { state: 'asked' })], 'paid'],
+    ['a refund that failed', [charge('a', 900), refund('r', 900, { state: 'failed' })], 'paid'],
     ['part of it back', [charge('a', 900), refund('r', 100)], 'refunded in part'],
     ['all of it back, in two parts', [charge('a', 900), refund('r', 100), refund('s', 800)], 'refunded'],
   ] as const)('with %s', (_name, rows, state) => {
     expect(paymentStateOf(rows)).toBe(state);
   });
+
+  test('with a deposit and the rest still to come, is part paid', () => {
+    expect(paymentStateOf([charge('a', 900)], true)).toBe('part paid');
+    expect(paymentStateOf([], true)).toBe('unpaid');
+  });
 });
 
 test('what may still go back counts refunds that are asked for, and not those that failed', () => {
-  const rows = [charge('a', 900), refund('r', 100, 'asked'), refund('s', 50), refund('t', 700, 'failed')];
-  expect(refundablePence(rows)).toBe(750);
+  const failed = refund('t', 700, { state: 'failed' });
+  expect(refundablePence([charge('a', 900), refund('r', 100, { state: 'asked' }), refund('s', 50), failed])).toBe(750);
 });
 
-describe('the charge that a refund comes from', () => {
-  test('is the newest that covers it: a late second payment goes back whole', () => {
-    const rows = [charge('first', 900), charge('late', 900), refund('r', 900, 'asked')];
-    expect(chargeForRefund(rows, 'r')?.id).toBe('late');
+describe('the charges that a refund comes from', () => {
+  test('are the newest first: what was paid last goes back whole', () => {
+    expect(refundParts([charge('a', 900), charge('b', 900)], 900)).toEqual([{ chargeId: 'b', amountPence: 900 }]);
   });
 
-  test('is the first, once the late one has gone back', () => {
-    const rows = [charge('first', 900), charge('late', 900), refund('r', 900), refund('s', 900, 'asked')];
-    expect(chargeForRefund(rows, 's')?.id).toBe('first');
+  test('are several, when no single one covers it', () => {
+    const rows = [charge('a', 9_400), charge('b', 1_300), refund('r', 300, { chargeId: 'b' })];
+    expect(refundParts(rows, 10_400)).toEqual([
+      { chargeId: 'b', amountPence: 1_000 },
+      { chargeId: 'a', amountPence: 9_400 },
+    ]);
   });
 
-  test('passes over refunds that failed, but answers for a failed one that is tried again', () => {
-    const rows = [charge('a', 900), refund('r', 900, 'failed'), refund('s', 900, 'asked')];
-    expect(chargeForRefund(rows, 's')?.id).toBe('a');
-    expect(chargeForRefund(rows, 'r')?.id).toBe('a');
+  test('leave out a charge that has gone back, and count what failed as still there', () => {
+    const rows = [charge('a', 900), charge('b', 900), refund('r', 900, { chargeId: 'b' })];
+    expect(refundParts(rows, 900)).toEqual([{ chargeId: 'a', amountPence: 900 }]);
+    expect(refundParts([charge('a', 900), refund('r', 900, { state: 'failed' })], 900)).toEqual([
+      { chargeId: 'a', amountPence: 900 },
+    ]);
   });
 
-  test('is none when no charge covers it or the refund is unknown', () => {
-    expect(chargeForRefund([charge('a', 900), refund('r', 901, 'asked')], 'r')).toBeNull();
-    expect(chargeForRefund([charge('a', 900), refund('r', 900), refund('s', 1, 'asked')], 's')).toBeNull();
-    expect(chargeForRefund([charge('a', 900)], 'x')).toBeNull();
+  test('never give more than there is', () => {
+    expect(refundParts([charge('a', 900), refund('r', 800)], 500)).toEqual([{ chargeId: 'a', amountPence: 100 }]);
+    expect(refundParts([charge('a', 900), refund('r', 900)], 1)).toEqual([]);
+    expect(refundParts([], 1)).toEqual([]);
   });
 });
