@@ -22,8 +22,7 @@ export function fieldsOf(error: ZodError): FieldErrors {
   const fields: FieldErrors = {};
   for (const issue of error.issues) {
     const path = issue.code === 'unrecognized_keys' ? [...issue.path, ...issue.keys.slice(0, 1)] : issue.path;
-    const message = issue.code === 'unrecognized_keys' ? 'This field is not known here.' : issue.message;
-    fields[path.join('.') || 'body'] ??= message;
+    fields[path.join('.') || 'body'] ??= issue.message;
   }
   return fields;
 }

@@ -1,6 +1,10 @@
 import { z } from 'zod';
 import { isDay } from '#shared/domain/day.ts';
 import { hasValidCheckDigit, normaliseEarTag } from '#shared/domain/ear-tag.ts';
+import { issueWords } from './issue-words.ts';
+
+// Every contract builds on this module, so that forms and server word a refusal alike.
+z.config({ customError: issueWords });
 
 /** The pieces that several contracts share, each with the sentence that a person will read beside the field. */
 
