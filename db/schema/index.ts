@@ -7,6 +7,7 @@ export * from './delivery.ts';
 export * from './farm.ts';
 export * from './herd.ts';
 export * from './mail.ts';
+export * from './margin.ts';
 export * from './order-additions.ts';
 export * from './orders.ts';
 export * from './packs.ts';
