@@ -9,7 +9,7 @@ import { addCollectionRoutes } from './collections/collection-routes.ts';
 import type { Deps } from './deps.ts';
 import { addHerdRoutes } from './herd/herd-routes.ts';
 import { addHealthRoutes } from './http/health-routes.ts';
-import { clientAddress, requestId, sameOrigin, sanePath } from './http/guards.ts';
+import { clientAddress, oneLoopbackName, requestId, sameOrigin, sanePath } from './http/guards.ts';
 import { pages } from './http/pages.ts';
 import { answerErrors } from './http/problem.ts';
 import type { Api } from './http/route.ts';
@@ -56,7 +56,7 @@ export function createApp(deps: Deps, webRoot: string | null): App {
   app.use('/api', () => {
     throw new AppError('NOT_FOUND', 'There is no such address in the API.');
   });
-  if (webRoot) app.use(pages(webRoot));
+  if (webRoot) app.use(oneLoopbackName(deps.origin), pages(webRoot));
   app.use(answerErrors);
   return { express: app, api };
 }

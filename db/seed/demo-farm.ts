@@ -53,7 +53,6 @@ export async function insertFarm(tx: Tx, validFrom: Day): Promise<DemoPoints> {
     { key: 'isReallocationAutomatic', validFrom, value: true },
     { key: 'vertebralColumnMonths', validFrom, value: 30 },
     { key: 'isVertebralColumnRuleActive', validFrom, value: true },
-    { key: 'deadweightTenthPencePerKg', validFrom, value: 5_200 },
     { key: 'killPence', validFrom, value: 16_500 },
     { key: 'butcheryTenthPencePerKg', validFrom, value: 1_100 },
   ]);

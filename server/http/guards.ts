@@ -31,3 +31,17 @@ export const clientAddress: RequestHandler = (request, _response, next) => {
   request.headers['x-client-address'] = request.ip ?? 'unknown';
   next();
 };
+
+const LOOPBACK = new Set(['localhost', '127.0.0.1', '[::1]']);
+
+/** This machine goes by several names, but cookies and sign-in by one: a page asked for by another is looked up there. */
+export function oneLoopbackName(origin: string): RequestHandler {
+  const ours = new URL(origin);
+  return (request, response, next) => {
+    const host = `http://${request.headers.host ?? ''}`;
+    const asked = URL.canParse(host) ? new URL(host) : ours;
+    const isOtherName = LOOPBACK.has(asked.hostname) && LOOPBACK.has(ours.hostname) && asked.port === ours.port;
+    if (!isOtherName || asked.hostname === ours.hostname) return next();
+    response.redirect(307, ours.origin + request.originalUrl);
+  };
+}
