@@ -3,6 +3,8 @@ import compression from 'compression';
 import express, { type Express, Router } from 'express';
 import helmet from 'helmet';
 import { AppError } from '#shared/errors.ts';
+import { addCustomerSettingsRoutes } from './account/customer-settings-routes.ts';
+import { addUnsubscribeRoutes } from './account/unsubscribe-routes.ts';
 import { addAllocationRoutes } from './allocation/allocation-routes.ts';
 import { addCarcaseRoutes } from './carcases/carcase-routes.ts';
 import { addCollectionRoutes } from './collections/collection-routes.ts';
@@ -13,6 +15,7 @@ import { clientAddress, oneLoopbackName, requestId, sameOrigin, sanePath } from 
 import { pages } from './http/pages.ts';
 import { answerErrors } from './http/problem.ts';
 import type { Api } from './http/route.ts';
+import { addMarginRoutes } from './margin/margin-routes.ts';
 import { inboundMail } from './mail/inbound.ts';
 import { addOfficeRoutes } from './office/office-routes.ts';
 import { addOrderRoutes } from './orders/order-routes.ts';
@@ -45,10 +48,13 @@ export function createApp(deps: Deps, webRoot: string | null): App {
     addHerdRoutes,
     addCarcaseRoutes,
     addAllocationRoutes,
+    addMarginRoutes,
     addTradeRoutes,
     addPackRoutes,
     addCollectionRoutes,
     addOfficeRoutes,
+    addUnsubscribeRoutes,
+    addCustomerSettingsRoutes,
   ]) {
     add(api, deps);
   }

@@ -4,6 +4,7 @@ import type { Deps } from './deps.ts';
 import { log } from './http/log.ts';
 import { proveCounters } from './orders/prove-counters.ts';
 import { sendMail } from './mail/outbox.ts';
+import { inviteAgain, tellCutOffs } from './mail/reminders.ts';
 import { settleRefund, sweepHolds } from './payments/payment-service.ts';
 import type { Jobs } from './queue.ts';
 
@@ -15,6 +16,8 @@ export function taskList(deps: Deps): TaskList {
     'replan-day': (payload) => replanDay(deps, (payload as Jobs['replan-day']).dayId),
     'explain-allocation': (payload) => explainAllocation(deps, (payload as Jobs['explain-allocation']).allocationId),
     'sweep-holds': () => sweepHolds(deps),
+    'tell-cut-offs': () => tellCutOffs(deps),
+    'invite-again': () => inviteAgain(deps),
     'prove-counters': async () => void (await proveCounters(deps)),
   };
 }
@@ -24,16 +27,23 @@ const logger = new Logger(() => (level, message) => {
 });
 
 /**
- * Starts the worker. Each minute the sweep asks the payment company about every hold whose page has run out; each night
- * what is held and sold of every offer is counted again.
+ * By the clock of UTC. Each minute the sweep asks the payment company about every hold whose page has run out; each
+ * night what is held and sold of every offer is counted again; each morning customers are reminded and invited.
  */
+const CRONTAB = [
+  '* * * * * sweep-holds ?fill=2m',
+  '30 3 * * * prove-counters',
+  '0 9 * * * tell-cut-offs ?fill=8h',
+  '15 9 * * * invite-again ?fill=8h',
+].join('\n');
+
 export function startWorker(deps: Deps, databaseUrl: string): Promise<Runner> {
   return run({
     connectionString: databaseUrl,
     concurrency: 4,
     noHandleSignals: true,
     logger,
-    crontab: '* * * * * sweep-holds ?fill=2m\n30 3 * * * prove-counters',
+    crontab: CRONTAB,
     taskList: taskList(deps),
   });
 }

@@ -1,9 +1,12 @@
 import type { RunSheet } from '#shared/contracts/packs.ts';
 import { canMoveOrder, type OrderState } from '#shared/domain/order-state.ts';
 import { AppError } from '#shared/errors.ts';
-import type { Deps } from '#server/deps.ts';
+import type { Deps, Tx } from '#server/deps.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
-import { lockOrder, updateOrder } from '#server/orders/order-queries.ts';
+import { missedCollectionMail } from '#server/mail/missed-collection.ts';
+import { queueMail } from '#server/mail/outbox.ts';
+import { lockOrder, updateOrder, type OrderRow } from '#server/orders/order-queries.ts';
+import { readOrderFacts } from '#server/orders/read-order.ts';
 import { findDay } from '#server/orders/stock-queries.ts';
 import { listCollected, type CollectedRow } from './collection-queries.ts';
 
@@ -52,7 +55,8 @@ export async function markOrder(
         `Order ${order.orderNo} is ${order.state} and cannot become ${mark.state}. Nothing was changed.`,
       );
     }
-    await updateOrder(tx, order.id, { state: mark.state, version: order.version + 1 });
+    const marked = await updateOrder(tx, order.id, { state: mark.state, version: order.version + 1 });
+    if (mark.state === 'missed') await tellMissed(tx, deps, marked);
     await recordAudit(tx, {
       byUserId: mark.byUserId,
       action: 'marked',
@@ -64,4 +68,15 @@ export async function markOrder(
   const [row] = await listCollected(deps.db, { orderId: mark.orderId });
   if (!row) throw new AppError('NOT_FOUND', 'There is no such order.');
   return describe(row);
+}
+
+/** In the transaction of the tick, and once an order: a second tick writes no second mail. */
+async function tellMissed(tx: Tx, deps: Deps, order: OrderRow): Promise<void> {
+  await queueMail(tx, {
+    eventKey: `missed collection ${order.id}`,
+    kind: 'missed collection',
+    orderId: order.id,
+    to: order.email,
+    ...missedCollectionMail(await readOrderFacts(deps, tx, order)),
+  });
 }

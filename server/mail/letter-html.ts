@@ -5,7 +5,9 @@ export type LetterPart =
   | { kind: 'rows'; rows: [label: string, value: string][] }
   /** Amounts stand under each other at the right; the last one is their total. */
   | { kind: 'sums'; rows: [label: string, amount: string][] }
-  | { kind: 'button'; text: string; url: string };
+  | { kind: 'button'; text: string; url: string }
+  /** A quiet way elsewhere, below the button. */
+  | { kind: 'link'; text: string; url: string };
 
 export function escapeHtml(text: string): string {
   const named: Record<string, string> = { '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;', "'": '&#39;' };
@@ -33,6 +35,9 @@ function partHtml(part: LetterPart): string {
       'display:inline-block;padding:12px 18px;border-radius:3px;background:#A8341F;color:#FFFFFF;font-weight:700;text-decoration:none';
     return `<p style="margin:18px 0"><a href="${escapeHtml(part.url)}" style="${style}">${escapeHtml(part.text)}</a></p>`;
   }
+  if (part.kind === 'link') {
+    return `<p style="margin:0 0 14px"><a href="${escapeHtml(part.url)}" style="color:#7F2415">${escapeHtml(part.text)}</a></p>`;
+  }
   const rows = part.kind === 'sums' ? sumRows(part.rows) : part.rows.map(wordRow);
   return `<table style="width:100%;margin:0 0 16px;border-collapse:collapse">${rows.join('')}</table>`;
 }
@@ -55,7 +60,7 @@ export function letterText(farmName: string, parts: LetterPart[]): string {
   const lines = parts.map((part) => {
     if (part.kind === 'rows' || part.kind === 'sums')
       return part.rows.map(([label, value]) => `${label}: ${value.replace(/\n/g, ', ')}`).join('\n');
-    return part.kind === 'button' ? `${part.text}:\n${part.url}` : part.text;
+    return 'url' in part ? `${part.text}:\n${part.url}` : part.text;
   });
   return `${[...lines, farmName].join('\n\n')}\n`;
 }

@@ -17,6 +17,8 @@ export type Letter = {
   text: string;
   html: string;
   attachments?: Attachment[];
+  /** Marketing mail alone: ends such mail for this address. */
+  unsubscribeUrl?: string;
 };
 
 /** Puts a mail in the outbox inside the caller's transaction; it leaves after the commit. Null: this event has its mail. */
@@ -30,6 +32,7 @@ export async function queueMail(db: Db | Tx, letter: Letter): Promise<string | n
     text: letter.text,
     html: letter.html,
     attachments: letter.attachments ?? [],
+    unsubscribeUrl: letter.unsubscribeUrl ?? null,
     messageId: `<${randomUUID()}@wholeside.example>`,
   });
   if (mailId) await enqueue(db, 'send-mail', { mailId });
@@ -48,6 +51,7 @@ export async function sendMail(deps: Deps, mailId: string): Promise<void> {
       text: mail.text,
       html: mail.html,
       attachments: mail.attachments as Attachment[],
+      unsubscribeUrl: mail.unsubscribeUrl,
     });
     if (result.outcome === 'sent') {
       await recordAttempt(deps.db, mailId, { state: 'sent', error: null, sentAt: deps.clock.now() });

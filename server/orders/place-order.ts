@@ -4,6 +4,7 @@ import type { Checkout } from '#shared/contracts/orders.ts';
 import type { placeOrderSchema } from '#shared/contracts/orders-schema.ts';
 import { formatDayTime } from '#shared/domain/words.ts';
 import { AppError } from '#shared/errors.ts';
+import { recordConsent } from '#server/account/consent.ts';
 import type { Deps, Tx } from '#server/deps.ts';
 import type { Caller } from '#server/http/route.ts';
 import { asPaymentsDown, createPaymentPage, endPaymentPage, isRefusedEmail } from '#server/payments/payment-page.ts';
@@ -58,6 +59,7 @@ async function start(deps: Deps, { basket, caller }: Request): Promise<Placed | 
       totalPence: 1,
       reachedPaymentAt: deps.clock.now(),
     });
+    if (order && basket.wantsNews) await recordConsent(tx, deps, { ...basket, isGiven: true, source: 'checkout' });
     return order && holdFor(tx, { order, basket, day });
   });
   return order && openPage(deps, order);
@@ -101,6 +103,7 @@ async function holdAgain(deps: Deps, known: OrderRow, { basket, caller }: Reques
       reachedPaymentAt: deps.clock.now(),
       ...{ sessionId: null, sessionUrl: null, sessionExpiresAt: null },
     });
+    if (basket.wantsNews) await recordConsent(tx, deps, { ...basket, isGiven: true, source: 'checkout' });
     return holdFor(tx, { order: again, basket, day });
   });
 }

@@ -43,6 +43,8 @@ export const Checkout = z.strictObject({
   email: Email,
   phone: Phone,
   note: Note,
+  /** Ticked: marketing mail may be sent to this address. Asked for apart from the order and never ticked beforehand. */
+  wantsNews: z.boolean().optional(),
 });
 export type Checkout = z.infer<typeof Checkout>;
 
