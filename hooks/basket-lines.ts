@@ -19,8 +19,9 @@ type Product = { offers: DayOffer[]; unitPricePence: number; unitGrams: number }
 
 function findProduct(item: BasketItem, { home, cuts }: Counter): Product | undefined {
   if (item.kind === 'box') {
-    const box = home?.boxes.find((one) => one.slug === item.productId);
-    return box && { offers: box.offers, unitPricePence: box.pricePence, unitGrams: box.guaranteedGrams };
+    const box = home?.boxes.find((one) => [one, ...one.swaps].some(({ slug }) => slug === item.productId));
+    const own = box && [box, ...box.swaps].find(({ slug }) => slug === item.productId);
+    return box && own && { offers: own.offers, unitPricePence: box.pricePence, unitGrams: box.guaranteedGrams };
   }
   const cut = cuts?.cuts.find((one) => one.id === item.productId);
   return cut && { offers: cut.offers, unitPricePence: cut.pricePence, unitGrams: cut.upperGrams };

@@ -1,5 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
-import { changeSlot } from '#shared/contracts/order-changes.ts';
+import { changeSlot, swapBox } from '#shared/contracts/order-changes.ts';
 import { cancelOrder, leavePayment, type Order } from '#shared/contracts/orders.ts';
 import { call } from './api.ts';
 import { forgetStock, orderQuery } from './orders.ts';
@@ -22,6 +22,12 @@ export function useOrderChange<Input = void>(token: string, change: (input: Inpu
 
 export function useChangeSlot(token: string) {
   return useOrderChange(token, (slotId: string) => call(changeSlot, { params: { token }, body: { slotId } }));
+}
+
+export function useSwapBox(token: string) {
+  return useOrderChange(token, (body: { lineId: string; offerId: string; quantity: number }) =>
+    call(swapBox, { params: { token }, body }),
+  );
 }
 
 export function useCancelOrder(token: string) {

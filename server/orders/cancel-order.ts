@@ -14,7 +14,8 @@ import { unsell } from './hold.ts';
 import { findOrder, listLines, lockOrder, updateOrder, type OrderRow } from './order-queries.ts';
 import { returnPacks } from './return-packs.ts';
 import { closePage } from './place-order.ts';
-import { getDay, getOrderByToken, noSuchOrder, readOrder, readOrderFacts, readSummaries } from './read-order.ts';
+import { getDay, getOrderByToken, noSuchOrder, readOrderFacts, readSummaries } from './read-order.ts';
+import { readOrder } from './view-order.ts';
 
 type Cancelling = { reason: string | null; byUserId: string | null };
 

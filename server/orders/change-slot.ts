@@ -4,7 +4,7 @@ import type { Deps } from '#server/deps.ts';
 import { finishChange, lockChangeable } from './change-order.ts';
 import { getSlotOfDay, moveSlot } from './hold.ts';
 import { getCollection } from './order-queries.ts';
-import { readOrder } from './read-order.ts';
+import { readOrder } from './view-order.ts';
 
 /** Moves a paid order to another place or time of its cutting day, if there is room: SLOT_FULL where there is none. */
 export async function changeSlot(deps: Deps, { token, slotId }: { token: string; slotId: string }): Promise<Order> {

@@ -60,6 +60,17 @@ export async function moveSlot(
   if (from > to) await freeSlot(tx, from);
 }
 
+/** Frees sold boxes of one offer and takes as many of another, in the order of their ids. False: not so many are free. */
+export async function exchange(
+  tx: Tx,
+  { dayId, quantity, from, to }: { dayId: string; quantity: number; from: string; to: string },
+): Promise<boolean> {
+  if (from < to) await freeSold(tx, { offerId: from, quantity });
+  const isTaken = await takeFree(tx, { offerId: to, quantity }, { dayId, into: 'sold' });
+  if (from > to) await freeSold(tx, { offerId: from, quantity });
+  return isTaken;
+}
+
 export type Taken = { lines: readonly BasketLine[]; slotId: string };
 
 /** Gives back what an open checkout held. */

@@ -87,6 +87,7 @@ export function listLines(db: Db | Tx, orderId: string) {
       quantity: orderLine.quantity,
       unitPricePence: orderLine.unitPricePence,
       unitGrams: orderLine.unitGrams,
+      discountPence: orderLine.discountPence,
       name: orderLine.name,
       kind: offer.kind,
     })

@@ -10,7 +10,9 @@ import { priceOf } from './basket.ts';
 import { changeSlot } from './change-slot.ts';
 import { cancelOrder, cancelOrderByOwner } from './cancel-order.ts';
 import { closePage, placeOrder } from './place-order.ts';
-import { getOrderByToken, orderCalendar, readOrder, readOrderFacts, readSummaries } from './read-order.ts';
+import { getOrderByToken, orderCalendar, readOrderFacts, readSummaries } from './read-order.ts';
+import { swapBox } from './swap-box.ts';
+import { readOrder } from './view-order.ts';
 
 export function addOrderRoutes(api: Api, deps: Deps): void {
   route(api, orders.priceBasket, { schema: schema.priceBasketSchema, handle: ({ body }) => priceOf(deps, body) });
@@ -45,6 +47,10 @@ export function addOrderRoutes(api: Api, deps: Deps): void {
   route(api, changes.changeSlot, {
     schema: changesSchema.changeSlotSchema,
     handle: ({ params, body }) => changeSlot(deps, { ...params, ...body }),
+  });
+  route(api, changes.swapBox, {
+    schema: changesSchema.swapBoxSchema,
+    handle: ({ params, body }) => swapBox(deps, { ...params, ...body }),
   });
   route(api, orders.listMyOrders, {
     schema: schema.listMyOrdersSchema,

@@ -1,15 +1,13 @@
-import type { Order, OrderSummary } from '#shared/contracts/orders.ts';
+import type { OrderSummary } from '#shared/contracts/orders.ts';
 import { calendarFile } from '#shared/domain/calendar-file.ts';
 import { AppError } from '#shared/errors.ts';
 import type { Db, Deps, Tx } from '#server/deps.ts';
 import { getFarm } from '#server/farm/farm-queries.ts';
 import type { OrderFacts } from '#server/mail/order-facts.ts';
-import { listPayments } from '#server/payments/payment-queries.ts';
 import {
   findOrder,
   getCollection,
   listLines,
-  listOrderPacks,
   listOrderRows,
   type LineRow,
   type OrderFilter,
@@ -27,44 +25,8 @@ export async function getOrderByToken(db: Db, token: string): Promise<OrderRow> 
   return order;
 }
 
-export async function readOrder(deps: Deps, token: string): Promise<Order> {
-  const order = await getOrderByToken(deps.db, token);
-  const [lines, collection, packs, payments, day] = await Promise.all([
-    listLines(deps.db, order.id),
-    getCollection(deps.db, order.slotId),
-    listOrderPacks(deps.db, order.id),
-    listPayments(deps.db, order.id),
-    getDay(deps.db, order.cuttingDayId),
-  ]);
-  const now = deps.clock.now();
-  const isOpen = order.isHeld && order.sessionExpiresAt !== null && now < order.sessionExpiresAt;
-  const { orderNo, state, paymentState, name, email, note, totalPence } = order;
-  return {
-    ...{ orderNo, token, state, paymentState, name, email, note, totalPence },
-    paymentUrl: isOpen ? order.sessionUrl : null,
-    paymentExpiresAt: isOpen ? (order.sessionExpiresAt?.toISOString() ?? null) : null,
-    day: day.day,
-    cutOffAt: day.cutOffAt.toISOString(),
-    dayId: order.cuttingDayId,
-    slotId: order.slotId,
-    canChange: order.state === 'confirmed' && now < day.cutOffAt,
-    lines: lines.map(viewLine),
-    refundedPence: payments
-      .filter((row) => row.kind === 'refund' && row.state === 'done')
-      .reduce((sum, row) => sum + row.amountPence, 0),
-    collection: {
-      ...collection,
-      startsAt: collection.startsAt.toISOString(),
-      endsAt: collection.endsAt.toISOString(),
-    },
-    packs: packs.map(({ code, cut, grams, line, quantity, copy }) => ({
-      ...{ code, cut, grams },
-      box: quantity > 1 ? `${line}, ${copy} of ${quantity}` : line,
-    })),
-  };
-}
-
-function viewLine(line: LineRow): Order['lines'][number] {
+/** A line as people read it. */
+export function viewLine(line: LineRow): OrderFacts['lines'][number] {
   return {
     name: line.name,
     kind: line.kind === 'box' ? 'box' : 'loose',

@@ -24,6 +24,8 @@ type BoxKindRow = {
   summary: string;
   guaranteedGrams: number;
   pricePence: number;
+  /** A swap is shown with the box that it is a variant of. */
+  variantOfId: string | null;
 };
 type Sale = { days: ShopDayRow[]; offers: ShopOfferRow[]; now: Date };
 
@@ -72,7 +74,7 @@ function findNext(sale: Sale, isProduct: (offer: ShopOfferRow) => boolean): Shop
 }
 
 /** The price shown is the one that the next day's offer charges. */
-function boxCard(sale: Sale, box: BoxKindRow): BoxCard {
+function boxCard(sale: Sale, box: BoxKindRow, kinds: readonly BoxKindRow[]): BoxCard {
   const isThis = (offer: ShopOfferRow) => offer.boxKindId === box.id;
   const pricePence = findNext(sale, isThis)?.pricePence ?? box.pricePence;
   return {
@@ -83,6 +85,13 @@ function boxCard(sale: Sale, box: BoxKindRow): BoxCard {
     pricePence,
     tenthPencePerKg: ratePerKg(pricePence, box.guaranteedGrams),
     offers: offersOf(sale, isThis),
+    swaps: kinds
+      .filter((kind) => kind.variantOfId === box.id)
+      .map(({ id, slug, name, summary }) => ({
+        ...{ slug, name, summary },
+        offers: offersOf(sale, (offer) => offer.boxKindId === id),
+      }))
+      .filter((swap) => swap.offers.length > 0),
   };
 }
 
@@ -99,7 +108,7 @@ export async function readShopHome(deps: Deps): Promise<ShopHome> {
   return {
     farm: { name, businessName, addressLines, email, phone, story },
     days: await summariseDays(deps, sale),
-    boxes: boxes.map((box) => boxCard(sale, box)),
+    boxes: boxes.filter((box) => box.variantOfId === null).map((box) => boxCard(sale, box, boxes)),
     butchers: butchers.map((butcher) => ({
       businessName: butcher.businessName,
       town: townOf(butcher.addressLines),
@@ -115,14 +124,14 @@ function townOf(addressLines: readonly string[]): string {
 export async function readBox(deps: Deps, slug: string): Promise<Box> {
   const queries = shopQueries(deps.db);
   const [boxes, farm, sale] = await Promise.all([queries.boxKinds.execute(), getFarm(deps.db), readSale(deps)]);
-  const box = boxes.find((each) => each.slug === slug);
+  const box = boxes.find((each) => each.slug === slug && each.variantOfId === null);
   if (!box) throw new AppError('NOT_FOUND', 'There is no such box. All boxes are on the first page of the shop.');
   const rows = await queries.boxLines.execute({ boxKindId: box.id });
   const lines = [...new Set(rows.map((row) => row.lineId))].map((lineId) =>
     rows.filter((row) => row.lineId === lineId),
   );
   return {
-    ...boxCard(sale, box),
+    ...boxCard(sale, box, boxes),
     lines: lines.flatMap((of) => {
       const first = of[0];
       if (!first) return [];

@@ -77,12 +77,16 @@ export const Order = z.strictObject({
   slotId: Id,
   lines: z.array(
     z.strictObject({
+      id: Id,
+      offerId: Id,
       name: z.string(),
       kind: z.enum(['box', 'loose']),
       quantity: z.int(),
       unitPricePence: z.int(),
       linePence: z.int(),
       unitGrams: z.int(),
+      /** Other variants of the same box that are free now, at the same price. */
+      swaps: z.array(z.strictObject({ offerId: Id, name: z.string(), summary: z.string(), free: z.int() })),
     }),
   ),
   totalPence: z.int(),

@@ -34,6 +34,10 @@ export const BoxCard = z.strictObject({
   pricePence: z.int(),
   tenthPencePerKg: z.int(),
   offers: z.array(DayOffer),
+  /** The same box at the same price with another recipe. */
+  swaps: z.array(
+    z.strictObject({ slug: z.string(), name: z.string(), summary: z.string(), offers: z.array(DayOffer) }),
+  ),
 });
 export type BoxCard = z.infer<typeof BoxCard>;
 

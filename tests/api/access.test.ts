@@ -31,6 +31,7 @@ const MAY_CALL: Record<string, Who[]> = {
   'POST /api/orders/:token/leave-payment': EVERYONE,
   'POST /api/orders/:token/cancel': EVERYONE,
   'POST /api/orders/:token/slot': EVERYONE,
+  'POST /api/orders/:token/swap': EVERYONE,
   'GET /api/my/orders': SIGNED_IN,
   'GET /api/unsubscribe/:token': EVERYONE,
   'POST /api/unsubscribe/:token': EVERYONE,
@@ -87,6 +88,9 @@ const MAY_CALL: Record<string, Who[]> = {
   'GET /api/today': OWNER,
   'GET /api/office/box-kinds': OWNER,
   'PUT /api/office/box-kinds/:boxKindId': OWNER,
+  'GET /api/price-grids': OWNER,
+  'POST /api/price-grids': OWNER,
+  'GET /api/cutting-days/:dayId/margin': OWNER,
   'GET /api/settings': OWNER,
   'PUT /api/settings': OWNER,
 };

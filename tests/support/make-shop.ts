@@ -54,6 +54,7 @@ export function makeBoxCard(over: Partial<BoxCard> = {}): BoxCard {
     pricePence: 10_240,
     tenthPencePerKg: 25_600,
     offers: offersOf('ember', [2, 5]),
+    swaps: [],
     ...over,
   };
 }
@@ -112,7 +113,13 @@ export function makeOrderView(over: Partial<Order> = {}): Order {
     canChange: true,
     dayId: THURSDAY,
     slotId: '33333333-3333-4333-8333-333333333333',
-    lines: [{ name: 'Ember', kind: 'box', quantity: 1, unitPricePence: 10_240, linePence: 10_240, unitGrams: 4_000 }],
+    lines: [
+      {
+        ...{ id: '44444444-4444-4444-8444-444444444444', offerId: '55555555-5555-4555-8555-555555555555' },
+        ...{ name: 'Ember', kind: 'box', quantity: 1, unitPricePence: 10_240, linePence: 10_240, unitGrams: 4_000 },
+        swaps: [],
+      },
+    ],
     totalPence: 10_240,
     refundedPence: 0,
     collection: {

@@ -6,6 +6,7 @@ import { BoxBuy } from '#components/boxes/box-buy.tsx';
 import { BoxContents } from '#components/boxes/box-contents.tsx';
 import { BoxHead } from '#components/boxes/box-head.tsx';
 import { BoxJsonLd } from '#components/boxes/box-json-ld.tsx';
+import { SwapChoice } from '#components/boxes/swap-choice.tsx';
 import { BoxWaiting } from '#components/boxes/box-waiting.tsx';
 import { DistanceFacts } from '#components/shop/distance-facts.tsx';
 import { KeepingAdvice } from '#components/shop/keeping-advice.tsx';
@@ -71,11 +72,14 @@ export default function BoxScreen() {
 function BoxPage({ box, farm }: { box: Box; farm: Farm | null }) {
   const basket = useBasket();
   const [chosenId, setChosenId] = useState<string>();
+  const [slug, setSlug] = useState(box.slug);
+  // A swap costs and weighs the same: only its name and what is left of it are its own.
+  const chosen = { ...box, ...box.swaps.find((swap) => swap.slug === slug) };
+  const item = { kind: 'box' as const, productId: chosen.slug, name: chosen.name };
   const open = box.days.filter((day) => day.isInTime);
-  const firstFree = open.find((day) => box.offers.some((offer) => offer.dayId === day.id && offer.free > 0));
+  const firstFree = open.find((day) => chosen.offers.some((offer) => offer.dayId === day.id && offer.free > 0));
   const basketDay = basket.items.length > 0 ? open.find((day) => day.id === basket.dayId) : undefined;
   const dayId = chosenId ?? (basketDay ?? firstFree ?? open[0])?.id;
-  const item = { kind: 'box' as const, productId: box.slug, name: box.name };
   return (
     <View style={css('w-sections')}>
       <View style={css('w-columns', 'w-columns-side')}>
@@ -84,8 +88,9 @@ function BoxPage({ box, farm }: { box: Box; farm: Farm | null }) {
           <BoxContents lines={box.lines} />
         </View>
         <View style={css('w-stay')}>
+          <SwapChoice box={box} dayId={dayId} slug={slug} onSlug={setSlug} />
           <BoxBuy
-            box={box}
+            box={chosen}
             dayId={dayId}
             onDay={setChosenId}
             quantity={basket.dayId === dayId ? quantityOf(basket, item) : 0}

@@ -9,6 +9,7 @@ import { OrderCollection } from '#components/orders/order-collection.tsx';
 import { OrderLines } from '#components/orders/order-lines.tsx';
 import { OrderPacks } from '#components/orders/order-packs.tsx';
 import { OrderWay } from '#components/orders/order-way.tsx';
+import { SwapSheet } from '#components/orders/swap-sheet.tsx';
 import { standingOf } from '#components/orders/order-words.ts';
 import { ListWaiting } from '#components/shop/list-waiting.tsx';
 import { LoadedView } from '#components/shop/loaded-view.tsx';
@@ -23,7 +24,7 @@ import { TitleBar } from '#components/ui/title-bar.tsx';
 import { pathOf } from '#hooks/api.ts';
 import { loadFarm, type Farm } from '#hooks/farm.ts';
 import { load, type Loaded } from '#hooks/loaded.ts';
-import { useCancelOrder, useChangeSlot, useLeavePayment } from '#hooks/order-changes.ts';
+import { useCancelOrder, useChangeSlot, useLeavePayment, useSwapBox } from '#hooks/order-changes.ts';
 import { refusalOf, useOrder } from '#hooks/orders.ts';
 import { pageMetadata } from '#hooks/page-metadata.ts';
 import { useCollections } from '#hooks/shop.ts';
@@ -68,6 +69,7 @@ export default function OrderScreen() {
 
 function OrderPage({ order, hasLeft }: { order: Order; hasLeft: boolean }) {
   const cancel = useCancelOrder(order.token);
+  const [swapping, setSwapping] = useState<Order['lines'][number]>();
   const standing = standingOf(order, hasLeft);
   const { state, token } = order;
   useEffect(() => {
@@ -90,7 +92,8 @@ function OrderPage({ order, hasLeft }: { order: Order; hasLeft: boolean }) {
         />
       ) : null}
       <OrderPacks packs={order.packs} />
-      <OrderLines order={order} />
+      <OrderLines order={order} onSwap={setSwapping} />
+      {swapping ? <Swap order={order} line={swapping} onClose={() => setSwapping(undefined)} /> : null}
       {order.canChange ? (
         <CancelOrder
           order={order}
@@ -152,6 +155,19 @@ function TimeSheet({ order, onClose }: { order: Order; onClose: () => void }) {
         )}
       </StateView>
     </ChangeSheet>
+  );
+}
+
+function Swap({ order, line, onClose }: { order: Order; line: Order['lines'][number]; onClose: () => void }) {
+  const swap = useSwapBox(order.token);
+  return (
+    <SwapSheet
+      line={line}
+      onClose={onClose}
+      onSwap={(chosen) => swap.mutate(chosen, { onSuccess: onClose })}
+      isSwapping={swap.isPending}
+      refusal={refusalOf(swap.error)?.message}
+    />
   );
 }
 

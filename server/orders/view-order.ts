@@ -1,0 +1,59 @@
+import type { Order } from '#shared/contracts/orders.ts';
+import type { Deps } from '#server/deps.ts';
+import { listPayments } from '#server/payments/payment-queries.ts';
+import { listSwapRows, type SwapRow } from './order-line-queries.ts';
+import { getCollection, listLines, listOrderPacks, type LineRow } from './order-queries.ts';
+import { getDay, getOrderByToken, viewLine } from './read-order.ts';
+
+/** The order as its customer sees it by the private link, and what can be done with it now. */
+export async function readOrder(deps: Deps, token: string): Promise<Order> {
+  const order = await getOrderByToken(deps.db, token);
+  const [lines, collection, packs, payments, day, swaps] = await Promise.all([
+    listLines(deps.db, order.id),
+    getCollection(deps.db, order.slotId),
+    listOrderPacks(deps.db, order.id),
+    listPayments(deps.db, order.id),
+    getDay(deps.db, order.cuttingDayId),
+    listSwapRows(deps.db, order.cuttingDayId),
+  ]);
+  const now = deps.clock.now();
+  const canChange = order.state === 'confirmed' && now < day.cutOffAt;
+  const isOpen = order.isHeld && order.sessionExpiresAt !== null && now < order.sessionExpiresAt;
+  const { orderNo, state, paymentState, name, email, note, totalPence } = order;
+  return {
+    ...{ orderNo, token, state, paymentState, name, email, note, totalPence },
+    paymentUrl: isOpen ? order.sessionUrl : null,
+    paymentExpiresAt: isOpen ? (order.sessionExpiresAt?.toISOString() ?? null) : null,
+    day: day.day,
+    cutOffAt: day.cutOffAt.toISOString(),
+    dayId: order.cuttingDayId,
+    slotId: order.slotId,
+    canChange,
+    lines: lines.map((line) => ({
+      ...viewLine(line),
+      id: line.id,
+      offerId: line.offerId,
+      swaps: canChange ? swapsOf(swaps, line) : [],
+    })),
+    refundedPence: payments
+      .filter((row) => row.kind === 'refund' && row.state === 'done')
+      .reduce((sum, row) => sum + row.amountPence, 0),
+    collection: {
+      ...collection,
+      startsAt: collection.startsAt.toISOString(),
+      endsAt: collection.endsAt.toISOString(),
+    },
+    packs: packs.map(({ code, cut, grams, line, quantity, copy }) => ({
+      ...{ code, cut, grams },
+      box: quantity > 1 ? `${line}, ${copy} of ${quantity}` : line,
+    })),
+  };
+}
+
+/** What a line could be swapped for now: the free variants of the same box. */
+function swapsOf(rows: readonly SwapRow[], { offerId }: LineRow): Order['lines'][number]['swaps'] {
+  const family = rows.find((row) => row.offerId === offerId)?.family;
+  return rows
+    .filter((row) => row.family === family && row.offerId !== offerId && row.free > 0)
+    .map(({ offerId: id, name, summary, free }) => ({ offerId: id, name, summary, free }));
+}
