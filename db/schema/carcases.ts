@@ -3,6 +3,8 @@ import { check, index, integer, jsonb, pgTable, text, unique, uuid } from 'drizz
 import { createdAt, day, id, instant, version } from './columns.ts';
 import { animal } from './herd.ts';
 
+export const EDITION_ORIGINS = ['written', 'copied', 'restored', 'learned'] as const;
+
 /** Versions are rows: a later edit makes a new row, so that what a cutting day used never changes. */
 export const cuttingSpecification = pgTable(
   'cutting_specification',
@@ -11,9 +13,16 @@ export const cuttingSpecification = pgTable(
     name: text().notNull(),
     edition: integer().notNull(),
     body: jsonb().notNull(),
+    /** How this edition came about: written in the editor, copied, brought back to the shipped figures, or learned. */
+    origin: text({ enum: EDITION_ORIGINS }).notNull().default('written'),
+    /** Set on every edition of a name that is no longer offered for new cutting days. */
+    retiredAt: instant(),
     createdAt: createdAt(),
   },
-  (table) => [unique().on(table.name, table.edition)],
+  (table) => [
+    unique().on(table.name, table.edition),
+    check('cutting_specification_edition', sql`${table.edition} > 0`),
+  ],
 );
 
 export const cuttingDay = pgTable(
@@ -54,6 +63,9 @@ export const carcase = pgTable(
     liveGrams: integer().notNull(),
     hotGrams: integer(),
     coldGrams: integer(),
+    /** Each side as the sheet has it, hot or cold like the whole; both or neither. */
+    leftGrams: integer(),
+    rightGrams: integer(),
     conformation: text(),
     fatClass: text(),
     dressingSpec: text(),
@@ -68,10 +80,14 @@ export const carcase = pgTable(
     check('carcase_live_grams', sql`${table.liveGrams} between 100000 and 1500000`),
     check('carcase_hot_grams', sql`${table.hotGrams} is null or ${table.hotGrams} between 50000 and 715000`),
     check('carcase_cold_grams', sql`${table.coldGrams} is null or ${table.coldGrams} between 50000 and 700000`),
+    check(
+      'carcase_side_grams',
+      sql`num_nonnulls(${table.leftGrams}, ${table.rightGrams}) <> 1 and coalesce(${table.leftGrams}, 20000) between 20000 and 360000 and coalesce(${table.rightGrams}, 20000) between 20000 and 360000`,
+    ),
   ],
 );
 
-/** Measured weights. `node` is the engine's path of what was weighed: a side, quarter, primal or line. */
+/** Measured weights. `node` is the engine's path of what was weighed: the hung carcase, a side, quarter, primal or line. */
 export const weighing = pgTable(
   'weighing',
   {
@@ -85,6 +101,9 @@ export const weighing = pgTable(
   },
   (table) => [
     unique().on(table.carcaseId, table.node),
-    check('weighing_grams', sql`${table.grams} between 0 and 360000`),
+    check(
+      'weighing_grams',
+      sql`${table.grams} between 0 and case when ${table.node} = 'hung' then 700000 else 360000 end`,
+    ),
   ],
 );

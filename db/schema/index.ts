@@ -2,6 +2,7 @@ export * from './allocations.ts';
 export * from './audit.ts';
 export * from './auth.ts';
 export * from './carcases.ts';
+export * from './corrections.ts';
 export * from './customers.ts';
 export * from './delivery.ts';
 export * from './farm.ts';
