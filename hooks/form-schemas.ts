@@ -5,6 +5,7 @@
 export { zodResolver } from '@hookform/resolvers/zod';
 export * as carcases from '#shared/contracts/carcases-schema.ts';
 export * as herd from '#shared/contracts/herd-schema.ts';
+export * as margin from '#shared/contracts/margin-schema.ts';
 export * as office from '#shared/contracts/office-schema.ts';
 export * as orders from '#shared/contracts/orders-schema.ts';
 export * as packs from '#shared/contracts/packs-schema.ts';

@@ -1,17 +1,25 @@
 import { DefinitionList } from '#components/ui/definition-list.tsx';
 import { Money } from '#components/ui/money.tsx';
 import type { Allocation } from '#shared/contracts/allocation.ts';
-import { formatMoney, formatRate, formatWeight } from '#shared/domain/words.ts';
-import { gainTenthPencePerKg, leftOverGrams } from './plan-words.ts';
+import { formatMoney, formatWeight } from '#shared/domain/words.ts';
+import { leftOverGrams, perColdKg } from './plan-words.ts';
 
 /** What the plan is worth, beside what the same carcases would bring sold deadweight. */
 export function PlanFigures({ plan }: { plan: Allocation }) {
   return (
     <DefinitionList
       items={[
-        { term: 'Contribution', value: <Money pence={plan.contributionPence} look="price" /> },
-        { term: 'Sold deadweight', value: formatMoney(plan.deadweightPence) },
-        { term: 'Gain on deadweight', value: formatRate(gainTenthPencePerKg(plan)), note: 'per kg of cold weight' },
+        {
+          term: 'Contribution',
+          value: <Money pence={plan.contributionPence} look="price" />,
+          note: `${perColdKg(plan.contributionPence, plan)} of cold deadweight`,
+        },
+        {
+          term: 'Deadweight value',
+          value: formatMoney(plan.deadweightPence),
+          note: perColdKg(plan.deadweightPence, plan),
+        },
+        { term: 'Gain', value: formatMoney(plan.gainPence), note: perColdKg(plan.gainPence, plan), strong: true },
         { term: 'Left over', value: formatWeight(leftOverGrams(plan)) },
         {
           term: plan.isProven ? 'Proven within' : 'Best so far, within',

@@ -17,6 +17,14 @@ export function PlanNotices({ plan }: { plan: Allocation }) {
           next="Work it out again."
         />
       ) : null}
+      {plan.unpriced.length > 0 ? (
+        <Notice
+          kind="held"
+          title="A carcase has no deadweight value."
+          kept={plan.unpriced.join(' ')}
+          next="The gain counts it as worth nothing deadweight until the price grid has its class."
+        />
+      ) : null}
       {plan.isProven ? null : (
         <Notice
           kind="held"

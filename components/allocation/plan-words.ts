@@ -1,7 +1,7 @@
 import type { Allocation, PlannedSide } from '#shared/contracts/allocation.ts';
 import { shortEarTag } from '#shared/domain/ear-tag.ts';
 import { ratePerKg } from '#shared/domain/money.ts';
-import { formatCount, formatDay, formatKilograms, formatMoney } from '#shared/domain/words.ts';
+import { formatCount, formatDay, formatKilograms, formatMoney, formatRate } from '#shared/domain/words.ts';
 
 /** `Angus steer 00214, left`. */
 export function nameSide({ title, earTag, side }: Pick<PlannedSide, 'title' | 'earTag' | 'side'>): string {
@@ -19,11 +19,9 @@ export function describePlan(plan: Pick<Allocation, 'day' | 'sides' | 'coldGrams
   ].join(' · ');
 }
 
-/** What the plan brings beyond selling the carcases deadweight, in tenths of a penny per kg of cold weight. */
-export function gainTenthPencePerKg(
-  plan: Pick<Allocation, 'contributionPence' | 'deadweightPence' | 'coldGrams'>,
-): number {
-  return plan.coldGrams === 0 ? 0 : ratePerKg(plan.contributionPence - plan.deadweightPence, plan.coldGrams);
+/** `£1.42/kg` of cold deadweight. */
+export function perColdKg(pence: number, { coldGrams }: Pick<Allocation, 'coldGrams'>): string {
+  return formatRate(coldGrams === 0 ? 0 : ratePerKg(pence, coldGrams));
 }
 
 export function leftOverGrams(plan: Pick<Allocation, 'cuts'>): number {

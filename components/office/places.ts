@@ -35,6 +35,7 @@ export function dayPlaces(dayId: string, role: Role): readonly NavItem[] {
   return [
     { label: 'Carcases', href: at },
     { label: 'Allocation', href: `${at}/allocation` },
+    { label: 'Margin', href: `${at}/margin` },
     packing,
     { label: 'Collections', href: `${at}/collections` },
     runSheet,

@@ -6,6 +6,7 @@ import { FormCheckbox } from '#components/ui/form-checkbox.tsx';
 import { FormFrame } from '#components/ui/form-frame.tsx';
 import { FormNumber } from '#components/ui/form-number.tsx';
 import { Heading } from '#components/ui/heading.tsx';
+import { TextLink } from '#components/ui/text-link.tsx';
 import type { Settings } from '#shared/contracts/office.ts';
 
 type SettingsFormProps = { control: Control<Settings>; onSubmit: () => void; busy: boolean };
@@ -18,20 +19,39 @@ export function SettingsForm({ control, onSubmit, busy }: SettingsFormProps) {
       <View style={css('w-fields')}>
         <FormNumber
           control={control}
-          name="deadweightTenthPencePerKg"
-          unit="poundsPerKg"
-          label="Deadweight price"
-          hint="What the same carcase would bring, sold by the kilogram of cold weight."
-        />
-        <FormNumber
-          control={control}
           name="butcheryTenthPencePerKg"
           unit="poundsPerKg"
           label="Butchery"
           hint="Cutting, per kilogram of cold weight."
         />
         <FormNumber control={control} name="killPence" unit="pounds" label="Kill" hint="Per animal." />
+        <FormNumber control={control} name="inspectionPence" unit="pounds" label="Inspection" hint="Per animal." />
+        <FormNumber
+          control={control}
+          name="levyPence"
+          unit="pounds"
+          label="Levy"
+          hint="Per animal, the abattoir's part with your own."
+        />
+        <FormNumber
+          control={control}
+          name="haulagePence"
+          unit="pounds"
+          label="Haulage"
+          hint="To the abattoir and back, per animal."
+        />
+        <FormNumber
+          control={control}
+          name="cardRatePpht"
+          unit="percent"
+          label="Card fee"
+          hint="What the card company keeps of each price."
+        />
+        <FormNumber control={control} name="cardFixedPence" unit="pounds" label="and for each payment" />
       </View>
+      <TextLink href="/office/price-grid" place="alone">
+        Price grid: what the carcases would bring deadweight
+      </TextLink>
       <Heading level={2}>Trade</Heading>
       <FormCheckbox
         control={control}

@@ -1,8 +1,9 @@
-/** How a whole number of the smallest unit is typed: grams as kilograms, pence as pounds, tenths of a penny per kg as £/kg. */
+/** How a whole number of the smallest unit is typed: grams as kilograms, pence as pounds, tenths of a penny per kg as £/kg, parts per 100,000 as %. */
 export const UNITS = {
   kilograms: { scale: 1000, decimals: 3, atLeast: 0, before: '', after: 'kg' },
   pounds: { scale: 100, decimals: 2, atLeast: 2, before: '£', after: '' },
   poundsPerKg: { scale: 1000, decimals: 3, atLeast: 2, before: '£', after: '/kg' },
+  percent: { scale: 1000, decimals: 3, atLeast: 0, before: '', after: '%' },
   count: { scale: 1, decimals: 0, atLeast: 0, before: '', after: '' },
 } as const;
 

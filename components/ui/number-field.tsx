@@ -40,5 +40,6 @@ function sayOf(value: number | null, { unit, error }: { unit: Unit; error: strin
   if (value < 0) return 'This cannot be below zero.';
   if (!Number.isNaN(value)) return error;
   if (unit === 'count') return 'Give a whole number, such as 4.';
+  if (unit === 'percent') return 'Give a percentage, such as 1.5.';
   return unit === 'kilograms' ? 'Give kilograms, such as 4.25.' : 'Give pounds, such as 18.50.';
 }

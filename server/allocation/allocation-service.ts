@@ -7,6 +7,7 @@ import { lockCuttingDay } from '#server/carcases/cutting-day-queries.ts';
 import type { Db, Deps, Tx } from '#server/deps.ts';
 import { readSettings } from '#server/farm/farm-settings.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
+import { readDayMoney } from '#server/margin/carcase-accounts.ts';
 import { enqueue } from '#server/queue.ts';
 import {
   addAllocation,
@@ -189,12 +190,10 @@ export async function viewAllocation(deps: Deps, row: AllocationRow): Promise<Al
 
 async function loadFacts(db: Db, dayId: string): Promise<AllocationFacts> {
   const figures = await loadDayCutouts(db, dayId);
-  const { deadweightTenthPencePerKg, killPence } = await readSettings(db, figures.day.day);
   return {
     figures,
     offers: await listOffers(db, dayId),
     reserved: await listConfirmedLines(db, dayId),
-    deadweightTenthPencePerKg,
-    killPence,
+    money: await readDayMoney(db, figures),
   };
 }

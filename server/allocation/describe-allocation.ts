@@ -1,18 +1,19 @@
 import type { Allocation, PlannedChoice, PlannedSide } from '#shared/contracts/allocation.ts';
-import { priceForWeight } from '#shared/domain/money.ts';
 import { railOfPrimals } from '#shared/domain/rail-of-primals.ts';
 import { railBasis, spokenFor, type PrimalFill } from '#shared/domain/spoken-for.ts';
 import { formatCount, formatWeight } from '#shared/domain/words.ts';
 import type { SideSupply } from '#shared/engine/cutout/cutout-types.ts';
+import { marginOf, sumEntries } from '#shared/engine/margin/margin.ts';
 import type { DayCutouts } from '#server/carcases/day-figures.ts';
+import type { DayMoney } from '#server/margin/carcase-accounts.ts';
+import { planEntries } from '#server/margin/plan-margin.ts';
 import type { AllocationRow, OfferRow, ReservedLine } from './allocation-queries.ts';
 
 export type AllocationFacts = {
   figures: DayCutouts;
   offers: readonly OfferRow[];
   reserved: readonly ReservedLine[];
-  deadweightTenthPencePerKg: number;
-  killPence: number;
+  money: DayMoney;
 };
 
 /** An allocation as the workbench shows it, with what is sold and held at this moment. */
@@ -23,6 +24,7 @@ export function describeAllocation(row: AllocationRow, facts: AllocationFacts): 
   const fills = spokenFor(railBasis(input, plan), countsOf(facts.offers));
   const sides = input.sides.map((side) => describeSide(row, side, { facts, fill: fills.get(side.id) ?? new Map() }));
   const coldGrams = carcases.reduce((sum, carcase) => sum + carcase.cutout.cold.grams, 0);
+  const margin = marginOf(sumEntries(planEntries(row, facts.money)));
   const cutName = (cutId: string) => input.cuts.find((cut) => cut.id === cutId)?.name ?? cutId;
   return {
     id: row.id,
@@ -35,8 +37,10 @@ export function describeAllocation(row: AllocationRow, facts: AllocationFacts): 
     isProven: row.isProven,
     gapBasisPoints: Math.ceil(plan.gap * 10_000),
     solveMs: Math.round(plan.milliseconds),
-    contributionPence: row.contributionPence - facts.killPence * carcases.length,
-    deadweightPence: priceForWeight(coldGrams, facts.deadweightTenthPencePerKg),
+    contributionPence: margin.contributionPence,
+    deadweightPence: margin.deadweightPence,
+    gainPence: margin.gainPence,
+    unpriced: facts.money.carcases.flatMap(({ problem }) => problem ?? []),
     coldGrams,
     productGrams: plan.cuts.reduce((sum, cut) => sum + cut.madeGrams, 0),
     locks: row.locks.map(({ carcaseId, side, choiceId, wayId }) => ({ carcaseId, side, choiceId, wayId })),

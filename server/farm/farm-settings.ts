@@ -8,15 +8,20 @@ import { listSettings, setSetting } from './farm-queries.ts';
 
 /**
  * What holds until the owner sets something else. The vertebral column threshold is on until a legal check says otherwise;
- * the deadweight price and the costs are common practice, to be put right by the farm before its first sale.
+ * the costs are common practice, to be put right by the farm before its first sale. The levy is both parts of it for cattle
+ * in England from April 2024, since who kills for himself bears both.
  */
 const UNSET: Settings = {
   isReallocationAutomatic: false,
   vertebralColumnMonths: 30,
   isVertebralColumnRuleActive: true,
-  deadweightTenthPencePerKg: 5_200,
   killPence: 16_500,
+  inspectionPence: 600,
+  levyPence: 675,
+  haulagePence: 4_000,
   butcheryTenthPencePerKg: 1_100,
+  cardRatePpht: 1_500,
+  cardFixedPence: 20,
 };
 
 const KEYS = Object.keys(UNSET) as (keyof Settings)[];

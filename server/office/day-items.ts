@@ -1,6 +1,6 @@
 import type { TodayItem } from '#shared/contracts/office.ts';
 import type { Day } from '#shared/domain/day.ts';
-import { formatCount, formatDay, formatMoney } from '#shared/domain/words.ts';
+import { formatCount, formatDay } from '#shared/domain/words.ts';
 import type { DayAllocation, OrderCount, TodayDay } from './today-queries.ts';
 
 export type DayFacts = {
@@ -38,7 +38,7 @@ function allocationItems({ day, allocations }: DayFacts): TodayItem[] {
     const detail = 'Weights or carcases have changed since it was worked out.';
     items.push({ kind: 'out of date', title: `The allocation of ${name} is out of date`, detail, href });
   } else if (newest.state === 'draft' && newest.isProven && shortfalls.length === 0) {
-    const detail = `Its contribution is ${formatMoney(newest.contributionPence)}; what is on sale is still as before.`;
+    const detail = 'A newer plan waits; what is on sale is still as before.';
     items.push({ kind: 'publish', title: `Publish the allocation of ${name}`, detail, href });
   }
   return items;

@@ -38,7 +38,7 @@ export function listMissingKillSheets(db: Db, today: string) {
 
 export type DayAllocation = Pick<
   typeof allocation.$inferSelect,
-  'id' | 'cuttingDayId' | 'state' | 'figuresVersion' | 'isProven' | 'contributionPence' | 'createdAt' | 'plan'
+  'id' | 'cuttingDayId' | 'state' | 'figuresVersion' | 'isProven' | 'createdAt' | 'plan'
 >;
 
 /** By day: the newest allocation and the one in force. */
@@ -50,7 +50,6 @@ export async function listNewestAllocations(db: Db, dayIds: readonly string[]): 
     state: allocation.state,
     figuresVersion: allocation.figuresVersion,
     isProven: allocation.isProven,
-    contributionPence: allocation.contributionPence,
     createdAt: allocation.createdAt,
     plan: allocation.plan,
   };

@@ -55,8 +55,12 @@ export const Allocation = z.strictObject({
   /** Basis points between the answer and the best that could exist. */
   gapBasisPoints: z.int(),
   solveMs: z.int(),
+  /** Contribution = income - direct costs; gain = contribution - deadweight value. */
   contributionPence: z.int(),
   deadweightPence: z.int(),
+  gainPence: z.int(),
+  /** Why a carcase has no deadweight value. */
+  unpriced: z.array(z.string()),
   coldGrams: z.int(),
   productGrams: z.int(),
   locks: z.array(Lock),

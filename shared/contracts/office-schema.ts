@@ -84,9 +84,14 @@ export const Settings = z.strictObject({
   isReallocationAutomatic: z.boolean(),
   vertebralColumnMonths: z.int().min(1).max(120),
   isVertebralColumnRuleActive: z.boolean(),
-  deadweightTenthPencePerKg: Rate,
   killPence: Pence,
+  inspectionPence: Pence,
+  levyPence: Pence,
+  haulagePence: Pence,
   butcheryTenthPencePerKg: Rate,
+  /** What the card company keeps: parts per 100,000 of the price, and a fixed sum. */
+  cardRatePpht: z.int().min(0).max(20_000, 'This is more than a fifth.'),
+  cardFixedPence: z.int().min(0).max(1_000),
 });
 export type Settings = z.infer<typeof Settings>;
 export const getSettingsSchema = { answer: Settings };

@@ -64,6 +64,8 @@ export function makeAllocation(more: Partial<Allocation> = {}): Allocation {
     solveMs: 900,
     contributionPence: 273_100,
     deadweightPence: 182_000,
+    gainPence: 91_100,
+    unpriced: [],
     coldGrams: 640_000,
     productGrams: 448_000,
     locks: [{ carcaseId: CARCASE, side: 'left', choiceId: 'fore-rib', wayId: 'bone-in' }],

@@ -8,9 +8,9 @@ import { OfferList } from '#components/allocation/offer-list.tsx';
 import {
   boxesOnSale,
   describePlan,
-  gainTenthPencePerKg,
   nameSide,
   nameTradeLine,
+  perColdKg,
   signedMoney,
 } from '#components/allocation/plan-words.ts';
 import { WayPanel } from '#components/allocation/way-panel.tsx';
@@ -116,8 +116,8 @@ describe('the plan in words and figures', () => {
   });
 
   it('reckons the gain on deadweight per kg of cold weight', () => {
-    expect(gainTenthPencePerKg(makeAllocation())).toBe(1_423);
-    expect(gainTenthPencePerKg(makeAllocation({ coldGrams: 0 }))).toBe(0);
+    expect(perColdKg(91_100, makeAllocation())).toBe('£1.42/kg');
+    expect(perColdKg(91_100, makeAllocation({ coldGrams: 0 }))).toBe('£0.00/kg');
     expect(signedMoney(4_120)).toBe('+ £41.20');
     expect(signedMoney(-1_860)).toBe('− £18.60');
     expect(signedMoney(0)).toBe('no difference');

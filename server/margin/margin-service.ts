@@ -1,0 +1,47 @@
+import type { DayMargin } from '#shared/contracts/margin.ts';
+import { formatDayTime } from '#shared/domain/words.ts';
+import {
+  findLatestAllocation,
+  findPublishedAllocation,
+  type AllocationRow,
+} from '#server/allocation/allocation-queries.ts';
+import { loadDayCutouts } from '#server/carcases/day-figures.ts';
+import type { Deps } from '#server/deps.ts';
+import { groupBy } from '#server/farm/group-by.ts';
+import { readDayMoney } from './carcase-accounts.ts';
+import { describeMargin, type Ledger } from './describe-margin.ts';
+import { planEntries } from './plan-margin.ts';
+
+/** The margin of a cutting day as planned: by the plan that is on sale, else by the newest. Null without a plan. */
+export async function getDayMargin({ db }: Deps, dayId: string): Promise<DayMargin | null> {
+  const figures = await loadDayCutouts(db, dayId);
+  const row = (await findPublishedAllocation(db, dayId)) ?? (await findLatestAllocation(db, dayId));
+  if (!row) return null;
+  const money = await readDayMoney(db, figures);
+  return describeMargin(figures, money, {
+    basis: 'planned',
+    restsOn: restsOn(row),
+    entries: planEntries(row, money),
+    boxes: plannedBoxes(row),
+    cutName: (cutId) => row.input.input.cuts.find(({ id }) => id === cutId)?.name ?? cutId,
+  });
+}
+
+function restsOn({ state, createdAt }: AllocationRow): string {
+  const plan = state === 'published' ? 'The plan that is on sale' : 'The newest plan, not on sale yet';
+  return `${plan}, of ${formatDayTime(createdAt)}, as if all of it were sold.`;
+}
+
+function plannedBoxes(row: AllocationRow): Ledger['boxes'] {
+  const kinds = groupBy(row.plan.plan.boxes, ({ kindId }) => kindId);
+  return [...kinds].map(([boxKindId, variants]) => {
+    const variant = row.input.input.boxes.find(({ kindId }) => kindId === boxKindId);
+    return {
+      boxKindId,
+      name: variants[0]?.name ?? boxKindId,
+      boxes: variants.reduce((sum, { boxes }) => sum + boxes, 0),
+      pricePence: variant?.pricePence ?? 0,
+      packagingPence: variant?.packagingPence ?? 0,
+    };
+  });
+}
