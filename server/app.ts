@@ -3,6 +3,7 @@ import compression from 'compression';
 import express, { type Express, Router } from 'express';
 import helmet from 'helmet';
 import { AppError } from '#shared/errors.ts';
+import { addAccountRoutes } from './account/account-routes.ts';
 import { addCustomerSettingsRoutes } from './account/customer-settings-routes.ts';
 import { addUnsubscribeRoutes } from './account/unsubscribe-routes.ts';
 import { addAllocationRoutes } from './allocation/allocation-routes.ts';
@@ -53,6 +54,7 @@ export function createApp(deps: Deps, webRoot: string | null): App {
     addPackRoutes,
     addCollectionRoutes,
     addOfficeRoutes,
+    addAccountRoutes,
     addUnsubscribeRoutes,
     addCustomerSettingsRoutes,
   ]) {
