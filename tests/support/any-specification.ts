@@ -2,14 +2,8 @@ import * as fc from 'fast-check';
 import { apportion } from '#shared/engine/apportion.ts';
 import { britishCuts } from '#shared/engine/figures/british-cuts.ts';
 import { toQuarter } from '#shared/engine/figures/reference-tissues.ts';
-import {
-  TISSUES,
-  type Choice,
-  type Primal,
-  type Specification,
-  type Take,
-  type WayLine,
-} from '#shared/engine/figures/specification.ts';
+import type { Choice, Primal, Specification, Take, WayLine } from '#shared/engine/figures/specification.ts';
+import { TISSUES } from '#shared/engine/figures/tissues.ts';
 
 const WHOLE = 100_000;
 const PRODUCTS = ['fillet-steak', 'diced-beef', 'brisket-joint', 'lean-trim', 'trim'];

@@ -1,6 +1,7 @@
 import { apportion } from '#shared/engine/apportion.ts';
 import { totalTissues } from '#shared/engine/figures/reference-tissues.ts';
-import { TISSUES, type Quarter, type Specification, type Tissues } from '#shared/engine/figures/specification.ts';
+import type { Quarter, Specification, Tissues } from '#shared/engine/figures/specification.ts';
+import { TISSUES } from '#shared/engine/figures/tissues.ts';
 import { scale } from '#shared/engine/rounding.ts';
 import { composition } from './composition.ts';
 import type { CarcaseFacts, Clamp } from './cutout-types.ts';

@@ -1,21 +1,21 @@
 import { apportion } from '#shared/engine/apportion.ts';
 import { toQuarter } from '#shared/engine/figures/reference-tissues.ts';
-import {
-  TISSUES,
-  type Choice,
-  type Primal,
-  type Quarter,
-  type Specification,
-  type Tissue,
-  type Tissues,
-  type Way,
+import type {
+  Choice,
+  Primal,
+  Quarter,
+  Specification,
+  Tissue,
+  Tissues,
+  Way,
 } from '#shared/engine/figures/specification.ts';
+import { TISSUES } from '#shared/engine/figures/tissues.ts';
 import { compareSides, type LinePair, type SideCut } from './weighed-sides.ts';
 
 /** Below this many sides a proposal says that it rests on little. */
-const FEW_SIDES = 3;
-/** What the specification says counts as much as this many sides of the farm's own. */
-const PRIOR_SIDES = 6;
+export const FEW_SIDES = 3;
+/** What the specification says counts as much as this many sides of the farm's own: common practice. */
+export const PRIOR_SIDES = 6;
 const WHOLE = 100_000;
 
 export type CorrectionRow = {
@@ -23,6 +23,8 @@ export type CorrectionRow = {
   path: string;
   name: string;
   sides: number;
+  /** What the specification counts for, in sides: six, and those that it has learned from already. */
+  priorSides: number;
   /** Foreseen, and weighed on the same sides brought to the weight that was foreseen for them. */
   estimatedGrams: number;
   weighedGrams: number;
@@ -41,27 +43,34 @@ export type Correction = {
   specification: Specification;
 };
 
+/** Sides that the percentages of a path were corrected by before: they are part of what is now foreseen. */
+export type LearnedSides = ReadonlyMap<string, number>;
+
 /**
- * Credibility of what was seen: n / (n + 6), so that one odd side moves little and many sides move all the way. This is
- * the shrinkage estimator of credibility theory with the prior of six that the spread of estimates uses as well.
+ * What was seen, drawn towards what was foreseen (1): seen counts n / (n + k), where n is the number of sides weighed and
+ * k what the specification counts for, in sides. One odd side moves little, many sides move nearly all the way. It is the
+ * credibility estimator of insurance (H. Bühlmann, Experience rating and credibility, ASTIN Bulletin 4, 1967; reference
+ * from memory); k = 6 is common practice.
  */
-function shrink(seen: number, sides: number): number {
-  return 1 + ((seen - 1) * sides) / (sides + PRIOR_SIDES);
+function shrink(seen: number, sides: number, priorSides: number): number {
+  return 1 + ((seen - 1) * sides) / (sides + priorSides);
 }
 
 /** Ratio by `<primal>/<way>/<line>` and by `<primal>`; 1 where nothing was weighed. */
 type Ratios = ReadonlyMap<string, { ratio: number; sides: number }>;
 
-function toRow(pair: LinePair): CorrectionRow {
+function toRow(pair: LinePair, learned: LearnedSides): CorrectionRow {
   const seen = pair.estimatedGrams > 0 ? pair.weighedGrams / pair.estimatedGrams : 1;
+  const priorSides = PRIOR_SIDES + (learned.get(pair.path) ?? 0);
   return {
     path: pair.path,
     name: pair.name,
     sides: pair.sides,
+    priorSides,
     estimatedGrams: pair.estimatedGrams,
     weighedGrams: Math.round(pair.weighedGrams),
     seenPpht: Math.round(seen * WHOLE),
-    proposedPpht: Math.round(shrink(seen, pair.sides) * WHOLE),
+    proposedPpht: Math.round(shrink(seen, pair.sides, priorSides) * WHOLE),
     isFromFewSides: pair.sides < FEW_SIDES,
   };
 }
@@ -69,11 +78,16 @@ function toRow(pair: LinePair): CorrectionRow {
 /**
  * What the farm's own scales say of a specification: by primal and line, foreseen against weighed, and the percentages
  * that would have foreseen it better, shrunk towards the present ones. Only what was weighed moves; a line's surplus goes
- * to the tissue that it is made of, and the whole is brought back to 100 %. The owner accepts or rejects it.
+ * to the tissue that it is made of, and the whole is brought back to 100 %. The owner accepts or rejects it. The order of
+ * the sides never matters. `history` must hold sides that the present percentages have not learned from: those that they
+ * have are told as `learned`, and make it slower to move.
  */
-export function proposeCorrection(specification: Specification, history: readonly SideCut[]): Correction {
-  const pairs = compareSides(specification, history);
-  const rows = pairs.map(toRow);
+export function proposeCorrection(
+  specification: Specification,
+  history: readonly SideCut[],
+  learned: LearnedSides = new Map(),
+): Correction {
+  const rows = compareSides(specification, history).map((pair) => toRow(pair, learned));
   const ratios: Ratios = new Map(rows.map((row) => [row.path, { ratio: row.proposedPpht / WHOLE, sides: row.sides }]));
   const sides = Math.max(0, ...rows.map((row) => row.sides));
   const few = sides === 1 ? 'one side was' : `${sides} sides were`;

@@ -1,12 +1,7 @@
 import { apportion } from '#shared/engine/apportion.ts';
 import { totalTissues } from '#shared/engine/figures/reference-tissues.ts';
-import {
-  TISSUES,
-  type Primal,
-  type Quarter,
-  type Specification,
-  type Way,
-} from '#shared/engine/figures/specification.ts';
+import type { Primal, Quarter, Specification, Way } from '#shared/engine/figures/specification.ts';
+import { TISSUES } from '#shared/engine/figures/tissues.ts';
 import { SIDES, type CutoutNode, type SideName } from './cutout-types.ts';
 
 /** A node before the scales have spoken: what the specification foresees. */

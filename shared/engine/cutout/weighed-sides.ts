@@ -16,18 +16,25 @@ export function sidesOfCutout(carcaseId: string, cutout: Pick<Cutout, 'nodes'>):
   }));
 }
 
-/** The way that gives exactly these lines of the primal. */
-function wayOf(choice: Choice, primalId: string, lines: ReadonlySet<string>): Way | undefined {
+const placeOf = ({ path }: CutoutNode) => {
+  const [, , primalId = '', lineId = ''] = path.split('/');
+  return { primalId, lineId };
+};
+
+/** How a choice was cut on this side: the way that gives exactly the lines that lie there, over all of its primals. */
+function wayOf(choice: Choice, nodes: readonly CutoutNode[]): Way | undefined {
+  const lines = nodes.filter((node) => node.level === 'line' && choice.primalIds.includes(placeOf(node).primalId));
+  const there = new Set(lines.map((line) => `${placeOf(line).primalId}/${placeOf(line).lineId}`));
   return choice.ways.find((way) => {
-    const given = way.lines.filter(({ takes }) => takes.some((take) => take.primalId === primalId));
-    return given.length === lines.size && given.every(({ id }) => lines.has(id));
+    const given = way.lines.flatMap((line) => line.takes.map((take) => `${take.primalId}/${line.id}`));
+    return given.length === there.size && given.every((line) => there.has(line));
   });
 }
 
 /**
  * Estimated against weighed by primal and by line of a way, in the order of the specification. What was weighed is brought
  * to the weight that was foreseen for its side, so that a heavy side teaches nothing about shares. A node that was not
- * weighed itself, and whose parts were not all weighed, is left out.
+ * weighed itself, and whose parts were not all weighed, is left out. The order of the sides never matters.
  */
 export function compareSides(specification: Specification, history: readonly SideCut[]): LinePair[] {
   const pairs = new Map<string, LinePair>();
@@ -40,24 +47,30 @@ export function compareSides(specification: Specification, history: readonly Sid
       weighedGrams: before.weighedGrams + node.grams * sideRatio,
     });
   };
-  for (const { side, nodes } of history) {
+  for (const { side, nodes } of inOrder(history)) {
     const root = nodes.find(({ path }) => path === side);
     if (!root || root.grams === 0 || root.estimatedGrams === 0) continue;
     const sideRatio = root.estimatedGrams / root.grams;
-    for (const primal of nodes.filter(({ level }) => level === 'primal')) {
-      const primalId = primal.path.split('/')[2] ?? '';
-      if (primal.source === 'weighed') add(primalId, primal, sideRatio);
-      const lines = nodes.filter(({ parentPath }) => parentPath === primal.path);
-      const lineId = ({ path }: CutoutNode) => path.split('/')[3] ?? '';
-      const choice = specification.choices.find(({ primalIds }) => primalIds.includes(primalId));
-      const way = choice && wayOf(choice, primalId, new Set(lines.map(lineId)));
+    const weighed = nodes.filter(({ source }) => source === 'weighed');
+    for (const primal of weighed.filter(({ level }) => level === 'primal')) {
+      add(placeOf(primal).primalId, primal, sideRatio);
+    }
+    for (const choice of specification.choices) {
+      const lines = weighed.filter(
+        (node) => node.level === 'line' && choice.primalIds.includes(placeOf(node).primalId),
+      );
+      const way = lines.length > 0 ? wayOf(choice, nodes) : undefined;
       if (!way) continue;
-      for (const line of lines.filter(({ source }) => source === 'weighed')) {
-        add(`${primalId}/${way.id}/${lineId(line)}`, line, sideRatio);
-      }
+      for (const line of lines) add(`${placeOf(line).primalId}/${way.id}/${placeOf(line).lineId}`, line, sideRatio);
     }
   }
   return order(specification, pairs);
+}
+
+/** Sums of fractions depend on their order in the last digit. */
+function inOrder(history: readonly SideCut[]): SideCut[] {
+  const keyOf = ({ carcaseId, side }: SideCut) => `${carcaseId}/${side}`;
+  return history.toSorted((a, b) => (keyOf(a) < keyOf(b) ? -1 : keyOf(a) > keyOf(b) ? 1 : 0));
 }
 
 function order(specification: Specification, pairs: ReadonlyMap<string, LinePair>): LinePair[] {

@@ -1,6 +1,7 @@
 import { EngineError } from '#shared/engine/engine-error.ts';
 import { totalTissues } from './reference-tissues.ts';
-import { TISSUES, type Choice, type Specification, type Way } from './specification.ts';
+import type { Choice, Specification, Way } from './specification.ts';
+import { TISSUES } from './tissues.ts';
 
 const WHOLE = 100_000;
 

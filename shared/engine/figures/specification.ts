@@ -12,7 +12,6 @@ const Name = z.string().trim().min(1).max(80);
 export const Tissues = z.strictObject({ meat: Ppht, fat: Ppht, bone: Ppht, loss: Ppht });
 export type Tissues = z.infer<typeof Tissues>;
 export type Tissue = keyof Tissues;
-export const TISSUES = ['meat', 'fat', 'bone', 'loss'] as const satisfies readonly Tissue[];
 
 export const Primal = z.strictObject({
   id: Id,
