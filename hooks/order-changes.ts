@@ -1,6 +1,6 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
-import { changeSlot, swapBox } from '#shared/contracts/order-changes.ts';
-import { cancelOrder, leavePayment, type Order } from '#shared/contracts/orders.ts';
+import { addToOrder, changeSlot, leaveAddition, swapBox } from '#shared/contracts/order-changes.ts';
+import { cancelOrder, leavePayment, type BasketLine, type Order } from '#shared/contracts/orders.ts';
 import { call } from './api.ts';
 import { forgetStock, orderQuery } from './orders.ts';
 
@@ -28,6 +28,17 @@ export function useSwapBox(token: string) {
   return useOrderChange(token, (body: { lineId: string; offerId: string; quantity: number }) =>
     call(swapBox, { params: { token }, body }),
   );
+}
+
+/** Goes to payment for more, on a page of the payment company. */
+export function useAddToOrder(token: string) {
+  return useOrderChange(token, (body: { version: number; lines: BasketLine[] }) =>
+    call(addToOrder, { params: { token }, body }),
+  );
+}
+
+export function useLeaveAddition(token: string) {
+  return useOrderChange(token, () => call(leaveAddition, { params: { token } }));
 }
 
 export function useCancelOrder(token: string) {

@@ -19,6 +19,7 @@ import type { Api } from './http/route.ts';
 import { addMarginRoutes } from './margin/margin-routes.ts';
 import { inboundMail } from './mail/inbound.ts';
 import { addOfficeRoutes } from './office/office-routes.ts';
+import { addOrderChangeRoutes } from './orders/order-change-routes.ts';
 import { addOrderRoutes } from './orders/order-routes.ts';
 import { addPackRoutes } from './packs/pack-routes.ts';
 import { paymentWebhook } from './payments/webhook.ts';
@@ -46,6 +47,7 @@ export function createApp(deps: Deps, webRoot: string | null): App {
     addHealthRoutes,
     addShopRoutes,
     addOrderRoutes,
+    addOrderChangeRoutes,
     addHerdRoutes,
     addCarcaseRoutes,
     addAllocationRoutes,

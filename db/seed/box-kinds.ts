@@ -1,4 +1,4 @@
-/** The five boxes that a farm starts with: a natural mix of the side between them. Weights in grams, money in pence. */
+/** The five boxes that a farm starts with and one swap: a natural mix of the side between them. Weights in grams, money in pence. */
 
 type LineLimits = readonly [minGrams: number, maxGrams: number, minPacks: number, maxPacks: number | null];
 
@@ -10,6 +10,8 @@ export type StartingBox = {
   pricePence: number;
   packagingPence: number;
   demandBoxes: number;
+  /** The slug of the box that this is a swap of. */
+  variantOf?: string;
   lines: { name: string; limits: LineLimits; cutIds: readonly string[] }[];
 };
 
@@ -39,10 +41,29 @@ export const STARTING_BOXES: readonly StartingBox[] = [
     guaranteedGrams: 5_000,
     pricePence: 7_600,
     packagingPence: 290,
-    demandBoxes: 13,
+    demandBoxes: 11,
     lines: [
       { name: 'Mince', limits: [1_200, 1_650, 3, 3], cutIds: ['mince'] },
       { name: 'For the stew', limits: [800, 1_100, 2, 2], cutIds: STEWS },
+      { name: 'A roasting joint', limits: [900, 1_800, 1, 1], cutIds: LEAN_ROASTS },
+      {
+        name: 'Steaks for the week',
+        limits: [700, 1_600, 2, 3],
+        cutIds: [...QUICK, 'rump-heart-steak', 'bistro-rump'],
+      },
+    ],
+  },
+  {
+    slug: 'hearth-5-no-stew',
+    variantOf: 'hearth-5',
+    name: 'Hearth, 5 kg, no stew',
+    summary: 'Two more packs of mince in place of the stew.',
+    guaranteedGrams: 5_000,
+    pricePence: 7_600,
+    packagingPence: 290,
+    demandBoxes: 2,
+    lines: [
+      { name: 'Mince', limits: [2_000, 2_750, 5, 5], cutIds: ['mince'] },
       { name: 'A roasting joint', limits: [900, 1_800, 1, 1], cutIds: LEAN_ROASTS },
       {
         name: 'Steaks for the week',

@@ -27,12 +27,16 @@ export async function insertStartingProducts(tx: Tx, { isActive = true } = {}): 
       useByDays: product.useByDays,
     })),
   );
-  for (const [position, { lines, ...kind }] of STARTING_BOXES.entries()) {
+  const ids = new Map<string, string>();
+  for (const [position, { lines, variantOf, ...kind }] of STARTING_BOXES.entries()) {
+    const variantOfId = ids.get(variantOf ?? '') ?? null;
     const [row] = await tx
       .insert(boxKind)
-      .values({ ...kind, isActive, position: position + 1 })
+      .values({ ...kind, isActive, variantOfId, position: position + 1 })
       .returning({ id: boxKind.id });
-    if (row) await insertLines(tx, row.id, lines);
+    if (!row) continue;
+    ids.set(kind.slug, row.id);
+    await insertLines(tx, row.id, lines);
   }
   return { specificationId: specification.id };
 }

@@ -1,4 +1,4 @@
-import { and, asc, eq, sql } from 'drizzle-orm';
+import { and, asc, eq, ne, or, sql } from 'drizzle-orm';
 import { boxKind, boxLine, boxLineCut, cut } from '#db/schema/products.ts';
 import type { BoxKindEdit, Cut } from '#shared/contracts/office.ts';
 import type { Db, Tx } from '#server/deps.ts';
@@ -35,6 +35,20 @@ export async function updateBoxKind(tx: Tx, boxKindId: string, edit: BoxKindEdit
     .where(and(eq(boxKind.id, boxKindId), eq(boxKind.version, version)))
     .returning({ id: boxKind.id });
   return rows.length === 1;
+}
+
+/** A swap costs and promises what its box does. */
+export async function keepSwapsEqual(tx: Tx, boxKindId: string, edit: BoxKindEdit): Promise<void> {
+  const { pricePence, guaranteedGrams } = edit;
+  await tx
+    .update(boxKind)
+    .set({ pricePence, guaranteedGrams, version: sql`${boxKind.version} + 1` })
+    .where(
+      and(
+        eq(boxKind.variantOfId, boxKindId),
+        or(ne(boxKind.pricePence, pricePence), ne(boxKind.guaranteedGrams, guaranteedGrams)),
+      ),
+    );
 }
 
 export async function replaceBoxLines(tx: Tx, boxKindId: string, lines: BoxKindEdit['lines']): Promise<void> {

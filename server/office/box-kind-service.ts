@@ -5,7 +5,13 @@ import { AppError, type FieldErrors } from '#shared/errors.ts';
 import { listBoxKinds as listKindRows, type BoxKindRow } from '#server/allocation/allocation-queries.ts';
 import type { Db, Deps, Tx } from '#server/deps.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
-import { findBoxKindVersion, listOfficeCuts, replaceBoxLines, updateBoxKind } from './box-kind-queries.ts';
+import {
+  findBoxKindVersion,
+  keepSwapsEqual,
+  listOfficeCuts,
+  replaceBoxLines,
+  updateBoxKind,
+} from './box-kind-queries.ts';
 
 export async function listBoxKinds(deps: Deps): Promise<{ boxKinds: BoxKind[]; cuts: Cut[] }> {
   return { boxKinds: (await listKindRows(deps.db)).map(toBoxKind), cuts: await listOfficeCuts(deps.db) };
@@ -19,6 +25,7 @@ export async function editBoxKind(
 ): Promise<BoxKind> {
   return deps.db.transaction(async (tx) => {
     const before = await getBoxKind(tx, boxKindId);
+    await refuseOwnPrice(tx, boxKindId, edit);
     refuseLines(edit, await listOfficeCuts(tx));
     if (!(await updateBoxKind(tx, boxKindId, edit))) {
       throw new AppError(
@@ -28,6 +35,7 @@ export async function editBoxKind(
       );
     }
     await replaceBoxLines(tx, boxKindId, edit.lines);
+    await keepSwapsEqual(tx, boxKindId, edit);
     const detail = { from: before, to: edit };
     await recordAudit(tx, { byUserId, action: 'edited', subject: 'box kind', subjectId: boxKindId, detail });
     return getBoxKind(tx, boxKindId);
@@ -61,6 +69,19 @@ function toBoxKind(row: BoxKindRow): BoxKind {
       cutIds,
     })),
   };
+}
+
+/** Who swaps pays nothing and gets nothing back, so a swap has no price and no guarantee of its own. */
+async function refuseOwnPrice(tx: Tx, boxKindId: string, edit: BoxKindEdit): Promise<void> {
+  const kinds = await listKindRows(tx);
+  const box = kinds.find((kind) => kind.id === kinds.find(({ id }) => id === boxKindId)?.variantOfId);
+  if (!box) return;
+  const fields: FieldErrors = {};
+  const words = `This is a swap of ${box.name}: change it there.`;
+  if (edit.pricePence !== box.pricePence) fields.pricePence = words;
+  if (edit.guaranteedGrams !== box.guaranteedGrams) fields.guaranteedGrams = words;
+  if (Object.keys(fields).length === 0) return;
+  throw new AppError('INVALID_INPUT', 'Nothing was saved: a swap costs and weighs what its box does.', { fields });
 }
 
 /** What can be said beside a field is said there; what only whole packs show is the engine's refusal. */

@@ -10,6 +10,7 @@ import { orderCancelledMail } from '#server/mail/order-cancelled.ts';
 import { queueMail } from '#server/mail/outbox.ts';
 import { askRefund } from '#server/payments/ask-refund.ts';
 import { listPayments } from '#server/payments/payment-queries.ts';
+import { closeAddition } from './addition-page.ts';
 import { unsell } from './hold.ts';
 import { findOrder, listLines, lockOrder, updateOrder, type OrderRow } from './order-queries.ts';
 import { returnPacks } from './return-packs.ts';
@@ -22,6 +23,7 @@ type Cancelling = { reason: string | null; byUserId: string | null };
 /** The customer's own cancelling, by the private link, until the cut-off. A second press finds it done. */
 export async function cancelOrder(deps: Deps, token: string): Promise<Order> {
   const known = await closePage(deps, await getOrderByToken(deps.db, token));
+  await closeAddition(deps, known.id);
   await deps.db.transaction(async (tx) => {
     const order = await lockWithDay(tx, known);
     if (order.state === 'cancelled') return;
@@ -46,6 +48,7 @@ export async function cancelOrderByOwner(
   const known = await findOrder(deps.db, { id: orderId });
   if (!known) throw noSuchOrder();
   await closePage(deps, known);
+  await closeAddition(deps, known.id);
   await deps.db.transaction(async (tx) => {
     const order = await lockWithDay(tx, known);
     if (!canMoveOrder(order.state, 'cancelled')) throw cannotCancel(order);

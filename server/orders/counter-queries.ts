@@ -1,5 +1,6 @@
 import { sql } from 'drizzle-orm';
 import { offer } from '#db/schema/allocations.ts';
+import { orderAddition, orderAdditionLine } from '#db/schema/order-additions.ts';
 import { collectionSlot, customerOrder, orderLine } from '#db/schema/orders.ts';
 import type { Db } from '#server/deps.ts';
 
@@ -13,7 +14,10 @@ export async function listCounterFaults(db: Db): Promise<CounterFault[]> {
   const result = await db.execute<CounterFault>(sql`
     with summed as (
       select ${offer.id} as id, ${offer.held} as held, ${offer.sold} as sold,
-        coalesce(sum(${orderLine.quantity}) filter (where ${customerOrder.isHeld}), 0)::int as held_lines,
+        coalesce(sum(${orderLine.quantity}) filter (where ${customerOrder.isHeld}), 0)::int
+          + (select coalesce(sum(${orderAdditionLine.quantity}), 0)::int from ${orderAdditionLine}
+            join ${orderAddition} on ${orderAddition.id} = ${orderAdditionLine.additionId}
+            where ${orderAddition.state} = 'open' and ${orderAdditionLine.offerId} = ${offer.id}) as held_lines,
         coalesce(sum(${orderLine.quantity}) filter (where ${isSold}), 0)::int as sold_lines
       from ${offer}
       left join ${orderLine} on ${orderLine.offerId} = ${offer.id}

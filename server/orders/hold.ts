@@ -10,7 +10,18 @@ export type HeldLine = Product & { quantity: number };
 
 /** Takes every line and the slot, or throws and, with the transaction, takes nothing. */
 export async function take(tx: Tx, request: HoldRequest, into: 'held' | 'sold'): Promise<HeldLine[]> {
-  const { day, slotId } = request;
+  const wanted = await takeLines(tx, request, into);
+  if (!(await takeSlot(tx, request.slotId, request.day.id))) throw await slotFull(tx, request.slotId);
+  return wanted;
+}
+
+/** The lines alone, for what joins an order that has its slot. */
+export async function takeLines(
+  tx: Tx,
+  request: Omit<HoldRequest, 'slotId'>,
+  into: 'held' | 'sold',
+): Promise<HeldLine[]> {
+  const { day } = request;
   const lines = mergeLines(request.lines);
   const taken = new Set<string>();
   for (const line of lines) {
@@ -28,7 +39,6 @@ export async function take(tx: Tx, request: HoldRequest, into: 'held' | 'sold'):
     if (short.length > 0) throw outOfStock(day, request.lines, short);
     throw new AppError('STATE_CHANGED', 'Stock moved at this very moment. Nothing was taken; please press again.');
   }
-  if (!(await takeSlot(tx, slotId, day.id))) throw await slotFull(tx, slotId);
   return wanted;
 }
 
@@ -75,8 +85,12 @@ export type Taken = { lines: readonly BasketLine[]; slotId: string };
 
 /** Gives back what an open checkout held. */
 export async function release(tx: Tx, { lines, slotId }: Taken): Promise<void> {
-  for (const line of mergeLines(lines)) await freeHeld(tx, line);
+  await releaseLines(tx, lines);
   await freeSlot(tx, slotId);
+}
+
+export async function releaseLines(tx: Tx, lines: readonly BasketLine[]): Promise<void> {
+  for (const line of mergeLines(lines)) await freeHeld(tx, line);
 }
 
 /** Gives back what was paid for. */

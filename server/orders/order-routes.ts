@@ -1,17 +1,13 @@
 import { getOrderCalendar } from '#shared/contracts/downloads.ts';
 import { getOrderCalendarSchema } from '#shared/contracts/downloads-schema.ts';
-import * as changes from '#shared/contracts/order-changes.ts';
-import * as changesSchema from '#shared/contracts/order-changes-schema.ts';
 import * as orders from '#shared/contracts/orders.ts';
 import * as schema from '#shared/contracts/orders-schema.ts';
 import type { Deps } from '#server/deps.ts';
 import { download, route, signedIn, type Api } from '#server/http/route.ts';
 import { priceOf } from './basket.ts';
-import { changeSlot } from './change-slot.ts';
 import { cancelOrder, cancelOrderByOwner } from './cancel-order.ts';
 import { closePage, placeOrder } from './place-order.ts';
 import { getOrderByToken, orderCalendar, readOrderFacts, readSummaries } from './read-order.ts';
-import { swapBox } from './swap-box.ts';
 import { readOrder } from './view-order.ts';
 
 export function addOrderRoutes(api: Api, deps: Deps): void {
@@ -43,14 +39,6 @@ export function addOrderRoutes(api: Api, deps: Deps): void {
   route(api, orders.cancelOrder, {
     schema: schema.cancelOrderSchema,
     handle: ({ params }) => cancelOrder(deps, params.token),
-  });
-  route(api, changes.changeSlot, {
-    schema: changesSchema.changeSlotSchema,
-    handle: ({ params, body }) => changeSlot(deps, { ...params, ...body }),
-  });
-  route(api, changes.swapBox, {
-    schema: changesSchema.swapBoxSchema,
-    handle: ({ params, body }) => swapBox(deps, { ...params, ...body }),
   });
   route(api, orders.listMyOrders, {
     schema: schema.listMyOrdersSchema,

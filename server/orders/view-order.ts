@@ -1,27 +1,32 @@
 import type { Order } from '#shared/contracts/orders.ts';
 import type { Deps } from '#server/deps.ts';
 import { listPayments } from '#server/payments/payment-queries.ts';
+import { findOpenAddition, listAdditionLines } from './addition-queries.ts';
+import { wordsOf } from './line-words.ts';
 import { listSwapRows, type SwapRow } from './order-line-queries.ts';
-import { getCollection, listLines, listOrderPacks, type LineRow } from './order-queries.ts';
+import { getCollection, listLines, listOrderPacks, type LineRow, type OrderRow } from './order-queries.ts';
 import { getDay, getOrderByToken, viewLine } from './read-order.ts';
 
 /** The order as its customer sees it by the private link, and what can be done with it now. */
 export async function readOrder(deps: Deps, token: string): Promise<Order> {
   const order = await getOrderByToken(deps.db, token);
-  const [lines, collection, packs, payments, day, swaps] = await Promise.all([
+  const [lines, collection, packs, payments, day, swaps, addition] = await Promise.all([
     listLines(deps.db, order.id),
     getCollection(deps.db, order.slotId),
     listOrderPacks(deps.db, order.id),
     listPayments(deps.db, order.id),
     getDay(deps.db, order.cuttingDayId),
     listSwapRows(deps.db, order.cuttingDayId),
+    readAddition(deps, order),
   ]);
   const now = deps.clock.now();
   const canChange = order.state === 'confirmed' && now < day.cutOffAt;
   const isOpen = order.isHeld && order.sessionExpiresAt !== null && now < order.sessionExpiresAt;
-  const { orderNo, state, paymentState, name, email, note, totalPence } = order;
+  const { orderNo, state, paymentState, name, email, note, version } = order;
+  const { discountPence, deliveryPence, totalPence } = order;
   return {
-    ...{ orderNo, token, state, paymentState, name, email, note, totalPence },
+    ...{ orderNo, token, state, paymentState, name, email, note, version },
+    ...{ discountPence, deliveryPence, totalPence, addition },
     paymentUrl: isOpen ? order.sessionUrl : null,
     paymentExpiresAt: isOpen ? (order.sessionExpiresAt?.toISOString() ?? null) : null,
     day: day.day,
@@ -47,6 +52,18 @@ export async function readOrder(deps: Deps, token: string): Promise<Order> {
       ...{ code, cut, grams },
       box: quantity > 1 ? `${line}, ${copy} of ${quantity}` : line,
     })),
+  };
+}
+
+/** More for the order, while it waits to be paid on its page. */
+async function readAddition({ db, clock }: Deps, order: OrderRow): Promise<Order['addition']> {
+  const addition = await findOpenAddition(db, order.id);
+  if (!addition?.sessionUrl || !addition.sessionExpiresAt || clock.now() >= addition.sessionExpiresAt) return null;
+  return {
+    amountPence: addition.amountPence,
+    paymentUrl: addition.sessionUrl,
+    expiresAt: addition.sessionExpiresAt.toISOString(),
+    words: wordsOf(await listAdditionLines(db, addition.id)),
   };
 }
 

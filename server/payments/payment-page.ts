@@ -2,7 +2,25 @@ import Stripe from 'stripe';
 import { AppError } from '#shared/errors.ts';
 import type { Deps } from '#server/deps.ts';
 
-/** What a payment page is made from: an order as it stood when it went to payment. */
+/** What a payment page is made from. The same request gives the same page under the company's idempotency key. */
+type PageRequest = {
+  key: string;
+  token: string;
+  email: string;
+  description: string;
+  metadata: Record<string, string>;
+  items: PageItem[];
+  /** When the buyer went to payment: the page lives from then on. */
+  from: Date;
+  /** What the order's page is told when the buyer comes back: paid, or not. */
+  back: { paid: string; left: string };
+  /** The card is kept for what is still to be paid. */
+  keepsCard: boolean;
+};
+
+type PageItem = { name: string; quantity: number; unitPricePence: number };
+
+/** An order as it stood when it went to payment. */
 export type PageOrder = {
   id: string;
   orderNo: number;
@@ -11,35 +29,90 @@ export type PageOrder = {
   /** Raised with every hold: one attempt to pay, one page. */
   version: number;
   reachedPaymentAt: Date;
-  lines: { name: string; quantity: number; unitPricePence: number }[];
+  deliveryPence: number;
+  depositPence: number | null;
+  lines: (PageItem & { discountPence: number })[];
 };
 
 /** The company takes 30 minutes at least; one more is for the way there. */
 const PAGE_MINUTES = 31;
 
-/**
- * Makes the page where an order is paid. Everything in it comes from the order, so that the same attempt asked for twice
- * gives the same page under the company's idempotency key.
- */
+/** Makes the page where an order is paid. Everything in it comes from the order. */
 export function createPaymentPage(deps: Deps, order: PageOrder): Promise<Stripe.Checkout.Session> {
-  const metadata = { orderId: order.id, attempt: String(order.version) };
-  const back = `${deps.origin}/orders/${order.token}`;
+  return createPage(deps, {
+    key: `order ${order.id} attempt ${order.version}`,
+    token: order.token,
+    email: order.email,
+    description: `Order ${order.orderNo}`,
+    metadata: { orderId: order.id, attempt: String(order.version) },
+    items: itemsOf(order),
+    from: order.reachedPaymentAt,
+    back: { paid: 'paid', left: 'left' },
+    keepsCard: order.depositPence !== null,
+  });
+}
+
+/** The company knows no negative amounts: a line with a discount stands there as one item at what is left of it. */
+function itemsOf({ orderNo, lines, deliveryPence, depositPence }: PageOrder): PageItem[] {
+  if (depositPence !== null) {
+    return [{ name: `Deposit for order ${orderNo}`, quantity: 1, unitPricePence: depositPence }];
+  }
+  const goods = lines.map(({ name, quantity, unitPricePence, discountPence }) =>
+    discountPence === 0
+      ? { name, quantity, unitPricePence }
+      : {
+          name: `${quantity} × ${name}, with your code`,
+          quantity: 1,
+          unitPricePence: quantity * unitPricePence - discountPence,
+        },
+  );
+  const items = [...goods, { name: 'Delivery', quantity: 1, unitPricePence: deliveryPence }];
+  return items.filter((item) => item.unitPricePence > 0);
+}
+
+export type PageAddition = {
+  id: string;
+  reachedPaymentAt: Date;
+  order: Pick<PageOrder, 'id' | 'orderNo' | 'token' | 'email'>;
+  lines: PageItem[];
+};
+
+/** Makes the page where more for a paid order is paid. */
+export function createAdditionPage(deps: Deps, addition: PageAddition): Promise<Stripe.Checkout.Session> {
+  const { order } = addition;
+  return createPage(deps, {
+    key: `addition ${addition.id}`,
+    token: order.token,
+    email: order.email,
+    description: `Added to order ${order.orderNo}`,
+    metadata: { orderId: order.id, additionId: addition.id },
+    items: addition.lines,
+    from: addition.reachedPaymentAt,
+    back: { paid: 'added', left: 'left-addition' },
+    keepsCard: false,
+  });
+}
+
+function createPage(deps: Deps, page: PageRequest): Promise<Stripe.Checkout.Session> {
+  const { metadata, description, back, keepsCard } = page;
+  const address = `${deps.origin}/orders/${page.token}`;
   return deps.payments.stripe.checkout.sessions.create(
     {
       mode: 'payment',
-      line_items: order.lines.map((line) => ({
-        quantity: line.quantity,
-        price_data: { currency: 'gbp', unit_amount: line.unitPricePence, product_data: { name: line.name } },
+      line_items: page.items.map((item) => ({
+        quantity: item.quantity,
+        price_data: { currency: 'gbp', unit_amount: item.unitPricePence, product_data: { name: item.name } },
       })),
-      customer_email: order.email,
-      client_reference_id: order.id,
+      customer_email: page.email,
+      client_reference_id: metadata.orderId ?? '',
       metadata,
-      payment_intent_data: { metadata, description: `Order ${order.orderNo}` },
-      success_url: `${back}?from=paid`,
-      cancel_url: `${back}?from=left`,
-      expires_at: Math.floor(order.reachedPaymentAt.getTime() / 1000) + PAGE_MINUTES * 60,
+      payment_intent_data: { metadata, description, ...(keepsCard ? { setup_future_usage: 'off_session' } : {}) },
+      ...(keepsCard ? { customer_creation: 'always' } : {}),
+      success_url: `${address}?from=${back.paid}`,
+      cancel_url: `${address}?from=${back.left}`,
+      expires_at: Math.floor(page.from.getTime() / 1000) + PAGE_MINUTES * 60,
     },
-    { idempotencyKey: `order ${order.id} attempt ${order.version}` },
+    { idempotencyKey: page.key },
   );
 }
 
@@ -50,12 +123,13 @@ export async function endPaymentPage(deps: Deps, sessionId: string): Promise<Str
     return await sessions.expire(sessionId);
   } catch (error) {
     if (!(error instanceof Stripe.errors.StripeInvalidRequestError)) throw error;
-    return sessions.retrieve(sessionId);
+    return getPaymentPage(deps, sessionId);
   }
 }
 
+/** With its payment, which names the card. */
 export function getPaymentPage(deps: Deps, sessionId: string): Promise<Stripe.Checkout.Session> {
-  return deps.payments.stripe.checkout.sessions.retrieve(sessionId);
+  return deps.payments.stripe.checkout.sessions.retrieve(sessionId, { expand: ['payment_intent'] });
 }
 
 /** True when the company could not be reached or had a fault of its own: worth another try, and nobody's mistake. */

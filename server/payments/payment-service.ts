@@ -1,5 +1,7 @@
 import type { Deps } from '#server/deps.ts';
 import { log } from '#server/http/log.ts';
+import { listOpenAdditions } from '#server/orders/addition-queries.ts';
+import { sweepAddition } from '#server/orders/addition-page.ts';
 import { listLines, lockOrder, storeSession, type OrderRow } from '#server/orders/order-queries.ts';
 import { createPaymentPage, endPaymentPage, getPaymentPage, isOutage } from './payment-page.ts';
 import { listHeldOrders } from './payment-queries.ts';
@@ -26,6 +28,14 @@ export async function sweepHolds(deps: Deps): Promise<void> {
     } catch (error) {
       // One order's trouble must not keep the others waiting; the next sweep asks again.
       log.warn({ err: error, orderId: order.id }, 'hold not swept');
+      if (isOutage(error)) return;
+    }
+  }
+  for (const addition of await listOpenAdditions(deps.db, since)) {
+    try {
+      await sweepAddition(deps, addition);
+    } catch (error) {
+      log.warn({ err: error, additionId: addition.id }, 'addition not swept');
       if (isOutage(error)) return;
     }
   }

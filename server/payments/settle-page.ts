@@ -11,17 +11,17 @@ import { getDay, readOrderFacts } from '#server/orders/read-order.ts';
 import { hasSoldOut } from '#server/orders/stock-queries.ts';
 import { insertCharge, insertRefund } from './payment-queries.ts';
 import { enqueue } from '#server/queue.ts';
+import { FREEZE_MS, paidOn, type PaidPage } from './paid-page.ts';
+import { settleAddition } from './settle-addition.ts';
 
-/** After the cut-off no page opens; the last one that could be open has ended by then, and the cutting list stands. */
-const FREEZE_MS = 35 * 60_000;
-
-type Paid = { order: OrderRow; intentId: string; amountPence: number; chargeId: string };
+type Paid = PaidPage & { order: OrderRow; chargeId: string };
 
 /**
  * Brings an order in line with the truth about one payment page, whatever came before: safe when told twice, late or in
  * the wrong order. The page must have been read from the payment company, never taken from a message.
  */
 export async function settlePage(tx: Tx, deps: Deps, page: Stripe.Checkout.Session): Promise<void> {
+  if (page.metadata?.additionId) return settleAddition(tx, deps, page);
   const orderId = page.metadata?.orderId;
   const order = orderId ? await lockOrder(tx, { id: orderId }) : null;
   if (!order) return;
@@ -30,14 +30,14 @@ export async function settlePage(tx: Tx, deps: Deps, page: Stripe.Checkout.Sessi
     if (isCurrent && order.isHeld) await releaseHold(tx, order);
     return;
   }
-  if (page.status !== 'complete' || page.payment_status !== 'paid') return;
-  const intentId = typeof page.payment_intent === 'string' ? page.payment_intent : page.payment_intent?.id;
-  const amountPence = page.amount_total ?? 0;
-  if (!intentId || amountPence === 0) return;
+  const found = paidOn(page);
+  if (!found) return;
+  const { intentId, amountPence } = found;
   const chargeId = await insertCharge(tx, { orderId: order.id, providerId: intentId, amountPence });
   if (!chargeId) return;
-  const paid = { order, intentId, amountPence, chargeId };
-  const isDue = order.state === 'awaiting payment' && isCurrent && amountPence === order.totalPence;
+  const paid = { ...found, order, chargeId };
+  const isDue =
+    order.state === 'awaiting payment' && isCurrent && amountPence === (order.depositPence ?? order.totalPence);
   if (isDue && order.isHeld) {
     await sell(tx, await listLines(tx, order.id));
     await confirm(tx, deps, paid);
@@ -68,10 +68,11 @@ async function takeAgain(tx: Tx, deps: Deps, order: OrderRow): Promise<boolean> 
   }
 }
 
-async function confirm(tx: Tx, deps: Deps, { order }: Paid): Promise<void> {
+async function confirm(tx: Tx, deps: Deps, { order, card }: Paid): Promise<void> {
   const confirmed = await updateOrder(tx, order.id, {
     state: 'confirmed',
-    paymentState: 'paid',
+    paymentState: order.depositPence === null ? 'paid' : 'part paid',
+    ...card,
     isHeld: false,
     sessionUrl: null,
     version: order.version + 1,

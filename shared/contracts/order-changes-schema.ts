@@ -1,6 +1,6 @@
 import { z } from 'zod';
-import { Count, Id } from './fields-schema.ts';
-import { Order, OrderToken } from './orders-schema.ts';
+import { Count, Id, Version } from './fields-schema.ts';
+import { BasketLines, Order, OrderToken } from './orders-schema.ts';
 
 /** Another place or time of the same cutting day. The same one again changes nothing. */
 export const changeSlotSchema = {
@@ -15,3 +15,13 @@ export const swapBoxSchema = {
   body: z.strictObject({ lineId: Id, offerId: Id, quantity: Count }),
   answer: Order,
 };
+
+/** Answers with the page on which the difference is paid. `version` is the order's, as the customer saw it. */
+export const addToOrderSchema = {
+  params: OrderToken,
+  body: z.strictObject({ version: Version, lines: BasketLines }),
+  answer: Order,
+};
+
+/** Gives up an addition that is not paid. */
+export const leaveAdditionSchema = { params: OrderToken, answer: Order };

@@ -4,3 +4,9 @@ import type * as schema from './order-changes-schema.ts';
 /** What a customer may change of a paid order until the cut-off, by its private link. */
 export const changeSlot = endpoint<typeof schema.changeSlotSchema>('POST', '/api/orders/:token/slot', 'public');
 export const swapBox = endpoint<typeof schema.swapBoxSchema>('POST', '/api/orders/:token/swap', 'public');
+export const addToOrder = endpoint<typeof schema.addToOrderSchema>('POST', '/api/orders/:token/additions', 'public');
+export const leaveAddition = endpoint<typeof schema.leaveAdditionSchema>(
+  'POST',
+  '/api/orders/:token/leave-addition',
+  'public',
+);

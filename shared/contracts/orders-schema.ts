@@ -5,7 +5,10 @@ import { Count, Day, Email, Id, Instant, Line, Note, Phone } from './fields-sche
 export const BasketLine = z.strictObject({ offerId: Id, quantity: Count });
 export type BasketLine = z.infer<typeof BasketLine>;
 
-const BasketLines = z.array(BasketLine).min(1, 'The basket is empty.').max(40, 'At most forty lines in one order.');
+export const BasketLines = z
+  .array(BasketLine)
+  .min(1, 'The basket is empty.')
+  .max(40, 'At most forty lines in one order.');
 
 export const PricedLine = z.strictObject({
   offerId: Id,
@@ -75,6 +78,8 @@ export const Order = z.strictObject({
   canChange: z.boolean(),
   dayId: Id,
   slotId: Id,
+  /** Raised by each change. */
+  version: z.int(),
   lines: z.array(
     z.strictObject({
       id: Id,
@@ -89,8 +94,14 @@ export const Order = z.strictObject({
       swaps: z.array(z.strictObject({ offerId: Id, name: z.string(), summary: z.string(), free: z.int() })),
     }),
   ),
+  discountPence: z.int(),
+  deliveryPence: z.int(),
   totalPence: z.int(),
   refundedPence: z.int(),
+  /** More for this order, held while it is being paid. */
+  addition: z
+    .strictObject({ amountPence: z.int(), paymentUrl: z.string(), expiresAt: Instant, words: z.string() })
+    .nullable(),
   collection: z.strictObject({
     name: z.string(),
     addressLines: z.array(z.string()),

@@ -18,3 +18,6 @@ export function refundForMissingGrams(box: {
 export function ratePerKg(pricePence: number, grams: number): number {
   return Math.round((pricePence * 10_000) / grams);
 }
+
+/** The payment company charges a card with no less than this; a smaller difference is let go and written down. */
+export const SMALLEST_CHARGE_PENCE = 30;

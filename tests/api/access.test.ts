@@ -32,6 +32,8 @@ const MAY_CALL: Record<string, Who[]> = {
   'POST /api/orders/:token/cancel': EVERYONE,
   'POST /api/orders/:token/slot': EVERYONE,
   'POST /api/orders/:token/swap': EVERYONE,
+  'POST /api/orders/:token/additions': EVERYONE,
+  'POST /api/orders/:token/leave-addition': EVERYONE,
   'GET /api/my/orders': SIGNED_IN,
   'GET /api/my/details': SIGNED_IN,
   'PUT /api/my/details': SIGNED_IN,

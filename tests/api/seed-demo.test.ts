@@ -56,7 +56,7 @@ describe('the demo farm', () => {
       .from(offer)
       .where(eq(offer.cuttingDayId, next?.id ?? ''));
     expect(loose.filter((row) => row.kind === 'loose')).toHaveLength(12);
-    expect(loose.filter((row) => row.kind === 'box' && row.offered > 0)).toHaveLength(5);
+    expect(loose.filter((row) => row.kind === 'box' && row.offered > 0)).toHaveLength(6);
   });
 
   test('sells what its carcases give: boxes, loose packs and trade lines add up to it within 2 per cent', async () => {

@@ -120,8 +120,12 @@ export function makeOrderView(over: Partial<Order> = {}): Order {
         swaps: [],
       },
     ],
+    discountPence: 0,
+    deliveryPence: 0,
     totalPence: 10_240,
     refundedPence: 0,
+    addition: null,
+    version: 2,
     collection: {
       name: 'The farm gate',
       addressLines: ['Under Rigg', 'ZZ1 1AA'],
