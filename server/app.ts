@@ -10,6 +10,7 @@ import { addAllocationRoutes } from './allocation/allocation-routes.ts';
 import { addCarcaseRoutes } from './carcases/carcase-routes.ts';
 import { addCollectionRoutes } from './collections/collection-routes.ts';
 import type { Deps } from './deps.ts';
+import { addFeedbackRoutes } from './feedback/feedback-routes.ts';
 import { addHerdRoutes } from './herd/herd-routes.ts';
 import { addHealthRoutes } from './http/health-routes.ts';
 import { clientAddress, oneLoopbackName, requestId, sameOrigin, sanePath } from './http/guards.ts';
@@ -23,6 +24,7 @@ import { addOrderChangeRoutes } from './orders/order-change-routes.ts';
 import { addOrderRoutes } from './orders/order-routes.ts';
 import { addPackRoutes } from './packs/pack-routes.ts';
 import { paymentWebhook } from './payments/webhook.ts';
+import { addReceiptRoutes } from './receipts/receipt-routes.ts';
 import { addShopRoutes } from './shop/shop-routes.ts';
 import { addTradeRoutes } from './trade/trade-routes.ts';
 
@@ -56,6 +58,8 @@ export function createApp(deps: Deps, webRoot: string | null): App {
     addPackRoutes,
     addCollectionRoutes,
     addOfficeRoutes,
+    addReceiptRoutes,
+    addFeedbackRoutes,
     addAccountRoutes,
     addUnsubscribeRoutes,
     addCustomerSettingsRoutes,

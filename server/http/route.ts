@@ -1,3 +1,5 @@
+import { Readable } from 'node:stream';
+import { pipeline } from 'node:stream/promises';
 import type { Request, Response, Router } from 'express';
 import type { Answer, Endpoint, EndpointSchema, Input } from '#shared/contracts/endpoint.ts';
 import { mayCall, type Role } from '#shared/domain/roles.ts';
@@ -10,7 +12,7 @@ export type Caller = { id: string; name: string; email: string; role: Role };
 /** The routes of the API and, beside them, the table of who may call what. */
 export type Api = { router: Router; endpoints: Endpoint<EndpointSchema>[]; auth: Auth };
 
-export type Download = { contentType: string; filename: string; body: string | Buffer };
+export type Download = { contentType: string; filename: string; body: string | Buffer | Readable };
 
 type Handler<S extends EndpointSchema, R> = (input: Input<S>, caller: Caller | null) => Promise<R>;
 
@@ -38,7 +40,8 @@ export function download<S extends EndpointSchema>(
     const file = await handle(readInput(schema, request), caller);
     response.setHeader('Content-Type', file.contentType);
     response.setHeader('Content-Disposition', `attachment; filename="${file.filename}"`);
-    response.send(file.body);
+    if (file.body instanceof Readable) await pipeline(file.body, response);
+    else response.send(file.body);
   });
 }
 

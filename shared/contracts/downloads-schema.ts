@@ -6,4 +6,5 @@ export const getOrderCalendarSchema = {
   params: z.strictObject({ token: z.string().regex(/^[A-Za-z0-9_-]{20,64}$/) }),
   answer: File,
 };
+export const getReceiptSchema = getOrderCalendarSchema;
 export const getAllocationModelSchema = { params: z.strictObject({ allocationId: Id }), answer: File };

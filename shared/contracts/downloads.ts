@@ -7,6 +7,8 @@ export const getOrderCalendar = endpoint<typeof schema.getOrderCalendarSchema>(
   '/api/orders/:token/calendar.ics',
   'public',
 );
+/** As it stands now, as a PDF. */
+export const getReceipt = endpoint<typeof schema.getReceiptSchema>('GET', '/api/orders/:token/receipt.pdf', 'public');
 /** The last phase of the allocation's model, so that anyone can check it with another solver. */
 export const getAllocationModel = endpoint<typeof schema.getAllocationModelSchema>(
   'GET',
