@@ -25,8 +25,9 @@ const POLL_SOON_MS = 1_500;
 const POLL_LATER_MS = 10_000;
 const SOON_POLLS = 40;
 
-/** The payment company has the next word: on a payment, or on a refund after cancelling. */
-function isMoving({ state, paymentUrl, paymentState }: Order): boolean {
+/** The payment company has the next word: on a payment, on more that is added, or on a refund after cancelling. */
+function isMoving({ state, paymentUrl, paymentState, addition }: Order): boolean {
+  if (addition) return true;
   if (state === 'awaiting payment') return paymentUrl !== null;
   return state === 'cancelled' && (paymentState === 'paid' || paymentState === 'part paid');
 }

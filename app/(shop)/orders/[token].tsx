@@ -2,9 +2,8 @@ import { useLoaderData, useLocalSearchParams, useRouter } from 'expo-router';
 import type { GenerateMetadataFunction, LoaderFunction } from 'expo-server';
 import { useEffect, useState } from 'react';
 import { View } from 'react-native';
-import { SlotPicker } from '#components/checkout/slot-picker.tsx';
 import { CancelOrder } from '#components/orders/cancel-order.tsx';
-import { ChangeSheet } from '#components/orders/change-sheet.tsx';
+import { MoreForOrder } from '#components/orders/more-for-order.tsx';
 import { OrderCollection } from '#components/orders/order-collection.tsx';
 import { OrderLines } from '#components/orders/order-lines.tsx';
 import { OrderPacks } from '#components/orders/order-packs.tsx';
@@ -18,16 +17,15 @@ import { css } from '#components/theme/css.ts';
 import { Badge } from '#components/ui/badge.tsx';
 import { Button } from '#components/ui/button.tsx';
 import { ButtonLink } from '#components/ui/button-link.tsx';
-import { StateView } from '#components/ui/state-view.tsx';
 import { Text } from '#components/ui/text.tsx';
+import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { pathOf } from '#hooks/api.ts';
 import { loadFarm, type Farm } from '#hooks/farm.ts';
 import { load, type Loaded } from '#hooks/loaded.ts';
-import { useCancelOrder, useChangeSlot, useLeavePayment, useSwapBox } from '#hooks/order-changes.ts';
+import { useCancelOrder, useLeaveAddition, useLeavePayment, useSwapBox } from '#hooks/order-changes.ts';
 import { refusalOf, useOrder } from '#hooks/orders.ts';
 import { pageMetadata } from '#hooks/page-metadata.ts';
-import { useCollections } from '#hooks/shop.ts';
 import { settleOrder } from '#hooks/use-basket.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import { getOrderCalendar } from '#shared/contracts/downloads.ts';
@@ -88,12 +86,19 @@ function OrderPage({ order, hasLeft }: { order: Order; hasLeft: boolean }) {
         <OrderCollection
           order={order}
           calendarHref={pathOf(getOrderCalendar, { params: { token } })}
-          change={order.canChange ? <ChangeTime order={order} /> : null}
+          change={
+            order.canChange ? (
+              <TextLink href={`/orders/${token}/time`} place="alone" icon="forward">
+                Change the place or time
+              </TextLink>
+            ) : null
+          }
         />
       ) : null}
       <OrderPacks packs={order.packs} />
       <OrderLines order={order} onSwap={setSwapping} />
       {swapping ? <Swap order={order} line={swapping} onClose={() => setSwapping(undefined)} /> : null}
+      {order.canChange ? <More order={order} /> : null}
       {order.canChange ? (
         <CancelOrder
           order={order}
@@ -109,53 +114,9 @@ function OrderPage({ order, hasLeft }: { order: Order; hasLeft: boolean }) {
   );
 }
 
-/** Another place or time of the same cutting day. */
-function ChangeTime({ order }: { order: Order }) {
-  const [isOpen, setIsOpen] = useState(false);
-  return (
-    <View style={css('w-buttons')}>
-      <Button kind="quiet" label="Change the place or time" onPress={() => setIsOpen(true)} />
-      {isOpen ? <TimeSheet order={order} onClose={() => setIsOpen(false)} /> : null}
-    </View>
-  );
-}
-
-function TimeSheet({ order, onClose }: { order: Order; onClose: () => void }) {
-  const collections = useCollections(order.dayId);
-  const change = useChangeSlot(order.token);
-  const [slotId, setSlotId] = useState(order.slotId);
-  const [pointId, setPointId] = useState<string>();
-  const points = collections.data?.points ?? [];
-  const present = points.find((point) => point.slots.some((slot) => slot.id === order.slotId));
-  return (
-    <ChangeSheet
-      open
-      onClose={onClose}
-      title="Another place or time"
-      doLabel="Move it there"
-      busyLabel="Moving it …"
-      isBusy={change.isPending}
-      isReady={slotId !== '' && slotId !== order.slotId}
-      onDo={() => change.mutate(slotId, { onSuccess: onClose })}
-      refusal={refusalOf(change.error)?.message}
-    >
-      <StateView query={collections} what="the places and times">
-        {() => (
-          <SlotPicker
-            points={points}
-            pointId={pointId ?? present?.id}
-            onPoint={(id) => {
-              setPointId(id);
-              setSlotId('');
-            }}
-            slotId={slotId}
-            onSlot={setSlotId}
-            error={undefined}
-          />
-        )}
-      </StateView>
-    </ChangeSheet>
-  );
+function More({ order }: { order: Order }) {
+  const leave = useLeaveAddition(order.token);
+  return <MoreForOrder order={order} onLeave={() => leave.mutate()} isLeaving={leave.isPending} />;
 }
 
 function Swap({ order, line, onClose }: { order: Order; line: Order['lines'][number]; onClose: () => void }) {
