@@ -3,6 +3,7 @@
  * into the file that every page loads: with the schemas fetched one by one, each visitor of the shop would load zod.
  */
 export { zodResolver } from '@hookform/resolvers/zod';
+export * as account from '#shared/contracts/account-schema.ts';
 export * as carcases from '#shared/contracts/carcases-schema.ts';
 export * as herd from '#shared/contracts/herd-schema.ts';
 export * as margin from '#shared/contracts/margin-schema.ts';

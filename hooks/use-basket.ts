@@ -111,6 +111,12 @@ export function setQuantity(item: Omit<BasketItem, 'quantity'>, quantity: number
   });
 }
 
+/** Puts a former order's things into the basket for a day, beside what is there already. */
+export function fillBasket(dayId: string, items: readonly BasketItem[]): void {
+  chooseDay(dayId);
+  for (const item of items) setQuantity(item, Math.max(item.quantity, quantityOf(read(), item)));
+}
+
 export function chooseDay(dayId: string): void {
   write((basket) => ({ ...basket, dayId }));
 }

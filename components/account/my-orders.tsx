@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { View } from 'react-native';
 import type { OrderSummary } from '#shared/contracts/orders.ts';
 import type { OrderState } from '#shared/domain/order-state.ts';
@@ -21,8 +22,14 @@ const kinds = {
   missed: 'held',
 } as const satisfies Record<OrderState, string>;
 
+type MyOrdersProps = {
+  orders: readonly OrderSummary[];
+  /** What can be done with an order that was paid. */
+  again: (order: OrderSummary) => ReactNode;
+};
+
 /** The orders of one person, the latest first. */
-export function MyOrders({ orders }: { orders: readonly OrderSummary[] }) {
+export function MyOrders({ orders, again }: MyOrdersProps) {
   if (orders.length === 0) {
     return (
       <EmptyState title="No orders yet" words="Orders that you place while you are signed in are listed here.">
@@ -32,7 +39,7 @@ export function MyOrders({ orders }: { orders: readonly OrderSummary[] }) {
   }
   return (
     <View role="list" style={css('w-rows-plain')}>
-      {orders.map((order) => (
+      {[...orders].reverse().map((order) => (
         <View role="listitem" key={order.id} style={css('w-item')}>
           <View style={css('w-item-words')}>
             <TextLink href={`/orders/${order.token}`} place="alone" name={`Order ${order.orderNo}`}>
@@ -40,6 +47,7 @@ export function MyOrders({ orders }: { orders: readonly OrderSummary[] }) {
             </TextLink>
             <Text>{order.lines.join(', ')}</Text>
             <Text size="small" tone="quiet">{`${formatDayTime(order.startsAt)}, ${order.pointName}`}</Text>
+            {order.paymentState === 'unpaid' ? null : again(order)}
           </View>
           <View style={css('w-item-price', 'w-stack-s')}>
             <Money pence={order.totalPence} look="price" />

@@ -1,7 +1,8 @@
-import { useLoaderData, useLocalSearchParams } from 'expo-router';
+import { useLoaderData, useLocalSearchParams, useRouter } from 'expo-router';
 import type { GenerateMetadataFunction } from 'expo-server';
 import { View } from 'react-native';
 import { MyOrders } from '#components/account/my-orders.tsx';
+import { AgainButton } from '#components/orders-after/again-button.tsx';
 import { ListWaiting } from '#components/shop/list-waiting.tsx';
 import { ShopPage } from '#components/shop/shop-page.tsx';
 import { css } from '#components/theme/css.ts';
@@ -12,13 +13,16 @@ import { Heading } from '#components/ui/heading.tsx';
 import { Notice } from '#components/ui/notice.tsx';
 import { Skeleton } from '#components/ui/skeleton.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
+import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { loadFarm } from '#hooks/farm.ts';
 import { useMe } from '#hooks/me.ts';
+import { useOrderAgain } from '#hooks/order-after.ts';
 import { useMyOrders } from '#hooks/orders.ts';
 import { pageMetadata } from '#hooks/page-metadata.ts';
 import { useSignOut } from '#hooks/use-sign-out.ts';
 import { useTitle } from '#hooks/use-title.ts';
+import type { OrderSummary } from '#shared/contracts/orders.ts';
 
 const TITLE = 'Your account · Skelderwick Farm';
 
@@ -69,12 +73,21 @@ function Account({ name, email }: { name: string; email: string }) {
         lead={email}
         actions={<Button kind="quiet" small label="Sign out" busy={isLeaving} onPress={signOut} />}
       />
+      <TextLink href="/account/details" place="alone" icon="forward">
+        Details, news and your data
+      </TextLink>
       <View style={css('w-section')}>
         <Heading level={2}>Your orders</Heading>
         <StateView query={orders} what="your orders" waiting={<Skeleton shape="rows" count={3} />}>
-          {(list) => <MyOrders orders={list.orders} />}
+          {(list) => <MyOrders orders={list.orders} again={(order) => <Again order={order} />} />}
         </StateView>
       </View>
     </View>
   );
+}
+
+function Again({ order }: { order: OrderSummary }) {
+  const router = useRouter();
+  const again = useOrderAgain(order.token, () => router.push('/basket'));
+  return <AgainButton orderNo={order.orderNo} again={again} />;
 }

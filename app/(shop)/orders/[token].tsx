@@ -4,6 +4,7 @@ import { useEffect, useState } from 'react';
 import { View } from 'react-native';
 import { CancelOrder } from '#components/orders/cancel-order.tsx';
 import { MoreForOrder } from '#components/orders/more-for-order.tsx';
+import { OrderAfter } from '#components/orders-after/order-after.tsx';
 import { OrderCollection } from '#components/orders/order-collection.tsx';
 import { OrderLines } from '#components/orders/order-lines.tsx';
 import { OrderPacks } from '#components/orders/order-packs.tsx';
@@ -24,11 +25,12 @@ import { pathOf } from '#hooks/api.ts';
 import { loadFarm, type Farm } from '#hooks/farm.ts';
 import { load, type Loaded } from '#hooks/loaded.ts';
 import { useCancelOrder, useLeaveAddition, useLeavePayment, useSwapBox } from '#hooks/order-changes.ts';
+import { useFeedback, useOrderAgain } from '#hooks/order-after.ts';
 import { refusalOf, useOrder } from '#hooks/orders.ts';
 import { pageMetadata } from '#hooks/page-metadata.ts';
 import { settleOrder } from '#hooks/use-basket.ts';
 import { useTitle } from '#hooks/use-title.ts';
-import { getOrderCalendar } from '#shared/contracts/downloads.ts';
+import { getOrderCalendar, getReceipt } from '#shared/contracts/downloads.ts';
 import { getOrder, type Order } from '#shared/contracts/orders.ts';
 
 type Page = { farm: Farm | null; order: Loaded<Order> };
@@ -107,6 +109,7 @@ function OrderPage({ order, hasLeft }: { order: Order; hasLeft: boolean }) {
           refusal={refusalOf(cancel.error)?.message}
         />
       ) : null}
+      {order.paymentState === 'unpaid' ? null : <After order={order} />}
       <Text size="small" tone="quiet" measure>
         The address of this page is private: whoever has it can see this order and cancel it.
       </Text>
@@ -130,6 +133,14 @@ function Swap({ order, line, onClose }: { order: Order; line: Order['lines'][num
       refusal={refusalOf(swap.error)?.message}
     />
   );
+}
+
+function After({ order: { token, orderNo, state } }: { order: Order }) {
+  const router = useRouter();
+  const again = useOrderAgain(token, () => router.push('/basket'));
+  const feedback = useFeedback(token, state === 'collected' || state === 'delivered');
+  const receiptHref = pathOf(getReceipt, { params: { token } });
+  return <OrderAfter orderNo={orderNo} receiptHref={receiptHref} again={again} feedback={feedback} />;
 }
 
 /** Its payment page is closed and nothing is held any more. */

@@ -191,7 +191,7 @@ describe('cancelling an order', () => {
 
 describe('the orders of an account', () => {
   it('without any, leads to the boxes', () => {
-    render(<MyOrders orders={[]} />);
+    render(<MyOrders orders={[]} again={() => null} />);
     expect(screen.getByRole('link', { name: 'See the boxes' }).getAttribute('href')).toBe('/');
   });
 });
