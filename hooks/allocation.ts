@@ -1,6 +1,6 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
-import type { allocateSchema, publishAllocationSchema } from '#shared/contracts/allocation-schema.ts';
-import { allocate, getAllocation, publishAllocation } from '#shared/contracts/allocation.ts';
+import type { publishAllocationSchema } from '#shared/contracts/allocation-schema.ts';
+import { getAllocation, publishAllocation } from '#shared/contracts/allocation.ts';
 import { getAllocationModel } from '#shared/contracts/downloads.ts';
 import type { CallInput } from '#shared/contracts/endpoint.ts';
 import { call } from './api.ts';
@@ -19,10 +19,6 @@ export function allocationQuery(dayId: string) {
 
 export function useAllocation(dayId: string) {
   return useQuery(allocationQuery(dayId));
-}
-
-export function useAllocate() {
-  return useFarmMutation((input: CallInput<typeof allocateSchema>) => call(allocate, input));
 }
 
 export function usePublishAllocation() {

@@ -10,4 +10,5 @@ export * as margin from '#shared/contracts/margin-schema.ts';
 export * as office from '#shared/contracts/office-schema.ts';
 export * as orders from '#shared/contracts/orders-schema.ts';
 export * as packs from '#shared/contracts/packs-schema.ts';
+export * as planJobs from '#shared/contracts/plan-jobs-schema.ts';
 export * as trade from '#shared/contracts/trade-schema.ts';

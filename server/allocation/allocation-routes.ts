@@ -1,25 +1,16 @@
-import { allocate, getAllocation, publishAllocation } from '#shared/contracts/allocation.ts';
-import { allocateSchema, getAllocationSchema, publishAllocationSchema } from '#shared/contracts/allocation-schema.ts';
+import { getAllocation, publishAllocation } from '#shared/contracts/allocation.ts';
+import { getAllocationSchema, publishAllocationSchema } from '#shared/contracts/allocation-schema.ts';
 import { getAllocationModel } from '#shared/contracts/downloads.ts';
 import { getAllocationModelSchema } from '#shared/contracts/downloads-schema.ts';
 import type { Deps } from '#server/deps.ts';
 import { download, route, signedIn, type Api } from '#server/http/route.ts';
 import { getAllocation as findRow } from './allocation-queries.ts';
-import {
-  allocateDay,
-  getDayAllocations,
-  publishAllocation as publishDay,
-  viewAllocation,
-} from './allocation-service.ts';
+import { getDayAllocations, publishAllocation as publishDay, viewAllocation } from './allocation-service.ts';
 
 export function addAllocationRoutes(api: Api, deps: Deps): void {
   route(api, getAllocation, {
     schema: getAllocationSchema,
     handle: ({ params }) => getDayAllocations(deps, params.dayId),
-  });
-  route(api, allocate, {
-    schema: allocateSchema,
-    handle: async ({ params, body }) => viewAllocation(deps, await allocateDay(deps, params.dayId, body.locks)),
   });
   route(api, publishAllocation, {
     schema: publishAllocationSchema,

@@ -1,6 +1,4 @@
 import type { Allocation, Lock } from '#shared/contracts/allocation.ts';
-import { defaultSpread, WEIGHED_SPREAD } from '#shared/engine/promise/spread.ts';
-import type { Spread } from '#shared/engine/promise/promise-types.ts';
 import { AppError } from '#shared/errors.ts';
 import { loadDayCutouts, type DayCutouts } from '#server/carcases/day-figures.ts';
 import { lockCuttingDay } from '#server/carcases/cutting-day-queries.ts';
@@ -14,18 +12,16 @@ import {
   findLatestAllocation,
   findPublishedAllocation,
   getAllocation,
-  listBoxKinds,
   listConfirmedLines,
-  listCuts,
   listOffers,
   storeAnswer,
   type AllocationRow,
   type ReservedLine,
 } from './allocation-queries.ts';
-import { buildDayInput } from './day-input.ts';
+import { askAbout, loadDayFacts } from './day-facts.ts';
 import { describeAllocation, type AllocationFacts } from './describe-allocation.ts';
 import { publish } from './publish.ts';
-import { explainDay, promiseDay, solveDay } from './solve-day.ts';
+import { explainDay, promiseDay, solveDay, type SolveHow } from './solve-day.ts';
 
 export type Wish = {
   dayId: string;
@@ -38,28 +34,14 @@ export type Wish = {
 export type SolvedDay = Omit<AllocationRow, 'id' | 'createdAt' | 'publishedAt' | 'state'>;
 
 /** Solves a cutting day as it stands now. Nothing is written. Throws NOT_FILLABLE while it has no carcase. */
-export async function solveAllocation(deps: Deps, { dayId, locks, asked = [] }: Wish): Promise<SolvedDay> {
-  const figures = await loadDayCutouts(deps.db, dayId);
-  if (figures.day.state === 'closed') {
-    throw new AppError('STATE_CHANGED', 'This cutting day is closed. Nothing was changed.');
-  }
-  if (figures.carcases.length === 0) {
-    throw new AppError('NOT_FILLABLE', 'There is no carcase on this day yet. Book animals for it, then allocate.');
-  }
-  const settings = await readSettings(deps.db, figures.day.day);
-  const input = buildDayInput({
-    sides: figures.sides,
-    specification: figures.specification,
-    cuts: await listCuts(deps.db),
-    kinds: await listBoxKinds(deps.db),
-    offers: await listOffers(deps.db, dayId),
-    reserved: await listConfirmedLines(deps.db, dayId),
-    asked,
-    locks,
-    butcheryTenthPencePerKg: settings.butcheryTenthPencePerKg,
-    minceClosedReason: null,
-  });
-  const { question, plan } = await solveDay({ input, spreads: spreadsOf(figures) }, deps.solver);
+export async function solveAllocation(
+  deps: Deps,
+  { dayId, locks, asked = [] }: Wish,
+  how: SolveHow = {},
+): Promise<SolvedDay> {
+  const facts = await loadDayFacts(deps.db, dayId);
+  const { figures } = facts;
+  const { question, plan } = await solveDay(askAbout(facts, { locks, asked }), deps.solver, how);
   return {
     cuttingDayId: dayId,
     figuresVersion: figures.day.figuresVersion,
@@ -71,23 +53,17 @@ export async function solveAllocation(deps: Deps, { dayId, locks, asked = [] }: 
   };
 }
 
-/** A carcase that is cut and weighed line by line leaves nothing to guess. */
-function spreadsOf({ carcases }: DayCutouts): Record<string, Spread> {
-  return Object.fromEntries(
-    carcases.map(({ row, cutout }) => {
-      const isCutWeighed = cutout.nodes.every((node) => node.level !== 'line' || node.source === 'weighed');
-      return [row.id, isCutWeighed ? WEIGHED_SPREAD : defaultSpread(cutout.cold.source)];
-    }),
-  );
-}
-
 function weighedCarcases({ carcases }: DayCutouts): string[] {
   return carcases.filter(({ cutout }) => cutout.cold.source === 'weighed').map(({ row }) => row.id);
 }
 
 /** Solves the day with the owner's locks and keeps the answer as a draft; what explains it follows a moment later. */
-export async function allocateDay(deps: Deps, dayId: string, locks: readonly Lock[]): Promise<AllocationRow> {
-  const solved = await solveAllocation(deps, { dayId, locks });
+export async function allocateDay(
+  deps: Deps,
+  { dayId, locks }: Pick<Wish, 'dayId' | 'locks'>,
+  how: SolveHow = {},
+): Promise<AllocationRow> {
+  const solved = await solveAllocation(deps, { dayId, locks }, how);
   return deps.db.transaction((tx) => keepAllocation(tx, solved));
 }
 
@@ -154,7 +130,7 @@ export async function replanDay(deps: Deps, dayId: string): Promise<void> {
   const published = await findPublishedAllocation(deps.db, dayId);
   if (!published) return;
   try {
-    const row = await allocateDay(deps, dayId, published.locks);
+    const row = await allocateDay(deps, { dayId, locks: published.locks });
     const settings = await readSettings(deps.db, deps.clock.today());
     if (!settings.isReallocationAutomatic) return;
     await publishAllocation(deps, { allocationId: row.id, figuresVersion: row.figuresVersion, byUserId: null });

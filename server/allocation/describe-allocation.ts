@@ -2,6 +2,7 @@ import type { Allocation, PlannedChoice, PlannedSide } from '#shared/contracts/a
 import { railOfPrimals } from '#shared/domain/rail-of-primals.ts';
 import { railBasis, spokenFor, type PrimalFill } from '#shared/domain/spoken-for.ts';
 import { formatCount, formatWeight } from '#shared/domain/words.ts';
+import type { Shortfall } from '#shared/engine/allocation/allocation-plan.ts';
 import type { SideSupply } from '#shared/engine/cutout/cutout-types.ts';
 import { marginOf, sumEntries } from '#shared/engine/margin/margin.ts';
 import type { DayCutouts } from '#server/carcases/day-figures.ts';
@@ -58,14 +59,17 @@ export function describeAllocation(row: AllocationRow, facts: AllocationFacts): 
       isFloorAtRisk: promise.isFloorAtRisk,
       worstShortGrams: promise.floorShortfall?.worstShortGrams ?? 0,
     },
-    shortfalls: plan.shortfalls.map((shortfall) => ({
-      name: shortfall.name,
-      missing:
-        shortfall.unit === 'grams'
-          ? formatWeight(shortfall.short)
-          : formatCount(shortfall.short, shortfall.unit.slice(0, -1), shortfall.unit),
-    })),
+    shortfalls: plan.shortfalls.map((shortfall) => ({ name: shortfall.name, missing: missingWords(shortfall) })),
   };
+}
+
+function missingWords({ short, unit }: Shortfall): string {
+  return unit === 'grams' ? formatWeight(short) : formatCount(short, unit.slice(0, -1), unit);
+}
+
+/** `Hearth: 2 boxes missing`. */
+export function nameShortfall(shortfall: Shortfall): string {
+  return `${shortfall.name}: ${missingWords(shortfall)} missing`;
 }
 
 /** A cut that no chosen way makes has nothing to show. */

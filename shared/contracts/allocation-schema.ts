@@ -120,11 +120,6 @@ export const getAllocationSchema = {
   params: DayId,
   answer: z.strictObject({ latest: Allocation.nullable(), published: Allocation.nullable() }),
 };
-export const allocateSchema = {
-  params: DayId,
-  body: z.strictObject({ locks: z.array(Lock).max(400) }),
-  answer: Allocation,
-};
 export const publishAllocationSchema = {
   params: z.strictObject({ allocationId: Id }),
   body: z.strictObject({ figuresVersion: z.int() }),

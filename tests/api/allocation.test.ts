@@ -5,6 +5,7 @@ import { cuttingDay } from '#db/schema/carcases.ts';
 import type { Allocation } from '#shared/contracts/allocation.ts';
 import { startWorld, type World } from '#tests/support/harness.ts';
 import { makeSellingDay } from '#tests/support/make-selling-day.ts';
+import { workOut } from '#tests/support/work-out.ts';
 
 /** A day is solved for real here, on a machine that may be busy. */
 const PATIENCE = 180_000;
@@ -23,9 +24,9 @@ beforeAll(async () => {
 afterAll(() => world.stop());
 
 async function allocate(locks: Allocation['locks'] = []): Promise<Allocation> {
-  const answer = await world.request(owner).post(`/api/cutting-days/${farm.day.id}/allocations`).send({ locks });
-  expect(answer.body).toMatchObject({ dayId: farm.day.id });
-  return answer.body as Allocation;
+  const answer = await workOut(world.request(owner), farm.day.id, locks);
+  expect(answer).toMatchObject({ dayId: farm.day.id });
+  return answer;
 }
 
 /** The newest allocation, once the worker has explained it. */
@@ -41,10 +42,11 @@ function publish({ id, figuresVersion }: { id: string; figuresVersion: number })
 
 describe('allocating a cutting day', () => {
   test('signed out or as a butcher, is refused and nothing is kept', async () => {
-    const path = `/api/cutting-days/${farm.day.id}/allocations`;
-    expect((await world.request().post(path).send({ locks: [] })).status).toBe(401);
+    const path = `/api/cutting-days/${farm.day.id}/plan-jobs`;
+    const body = { locks: [], timeLimitSeconds: 60 };
+    expect((await world.request().post(path).send(body)).status).toBe(401);
     const butcher = await world.signIn('butcher');
-    expect((await world.request(butcher.cookie).post(path).send({ locks: [] })).status).toBe(403);
+    expect((await world.request(butcher.cookie).post(path).send(body)).status).toBe(403);
     const seen = await world.request(owner).get(`/api/cutting-days/${farm.day.id}/allocation`);
     expect(seen.body).toMatchObject({ latest: { id: plan.id, state: 'draft' }, published: null });
   });

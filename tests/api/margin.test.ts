@@ -10,6 +10,7 @@ import { priceForWeight } from '#shared/domain/money.ts';
 import { britishGrid } from '#shared/engine/figures/price-grids.ts';
 import { startWorld, type World } from '#tests/support/harness.ts';
 import { makeSellingDay } from '#tests/support/make-selling-day.ts';
+import { workOut } from '#tests/support/work-out.ts';
 
 /** A day is solved for real here, on a machine that may be busy. */
 const PATIENCE = 180_000;
@@ -100,8 +101,7 @@ describe('the margin of a cutting day', () => {
     'is empty before there is a plan, and the workbench then shows the same three figures',
     async () => {
       expect(await read()).toBeNull();
-      const answer = await owner.post(`/api/cutting-days/${farm.day.id}/allocations`).send({ locks: [] });
-      plan = answer.body as Allocation;
+      plan = await workOut(owner, farm.day.id);
       const { whole, restsOn } = await readMargin();
       expect(restsOn).toContain('not on sale yet');
       const { contributionPence, deadweightPence, gainPence } = plan;

@@ -6,10 +6,10 @@ import { cuttingDay } from '#db/schema/carcases.ts';
 import { datedSetting } from '#db/schema/farm.ts';
 import { boxKind } from '#db/schema/products.ts';
 import { reservation } from '#db/schema/trade.ts';
-import type { Allocation } from '#shared/contracts/allocation.ts';
 import type { Reservation, TradeDay } from '#shared/contracts/trade.ts';
 import { addDays, londonInstant } from '#shared/domain/day.ts';
 import { startWorld, type World } from '#tests/support/harness.ts';
+import { workOut } from '#tests/support/work-out.ts';
 import { makeSellingDay, makeTradeAccount } from '#tests/support/make-selling-day.ts';
 
 // Most of these work the day out again, which takes seconds on a busy machine.
@@ -32,8 +32,7 @@ beforeAll(async () => {
   const first = await world.signIn('butcher');
   butcher = first.cookie;
   await makeTradeAccount(world.db, first.userId, 'Fellside Butchers');
-  const path = `/api/cutting-days/${farm.day.id}/allocations`;
-  const plan = (await world.request(owner).post(path).send({ locks: [] })).body as Allocation;
+  const plan = await workOut(world.request(owner), farm.day.id);
   const wish = { figuresVersion: plan.figuresVersion };
   const answer = await world.request(owner).post(`/api/allocations/${plan.id}/publish`).send(wish);
   expect(answer.body).toMatchObject({ state: 'published' });

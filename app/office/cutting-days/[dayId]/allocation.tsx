@@ -1,36 +1,28 @@
 import { useLocalSearchParams } from 'expo-router';
 import { useState } from 'react';
 import { View } from 'react-native';
-import { CompareTable } from '#components/allocation/compare-table.tsx';
-import { CutTable } from '#components/allocation/cut-table.tsx';
-import { areSameLocks, narrowMembers, setLock, type Members } from '#components/allocation/locks.ts';
-import { OfferList } from '#components/allocation/offer-list.tsx';
-import { describeOutlets, Outlets } from '#components/allocation/outlets.tsx';
-import { PlanFigures } from '#components/allocation/plan-figures.tsx';
-import { PlanNotices } from '#components/allocation/plan-notices.tsx';
+import { JobPanel } from '#components/allocation/job-panel.tsx';
+import { areSameLocks, narrowMembers, type Members } from '#components/allocation/locks.ts';
+import { describeOutlets } from '#components/allocation/outlets.tsx';
+import { PlanView } from '#components/allocation/plan-view.tsx';
 import { boxesOnSale, describePlan } from '#components/allocation/plan-words.ts';
 import { PublishSheet } from '#components/allocation/publish-sheet.tsx';
-import { SideRails } from '#components/allocation/side-rails.tsx';
-import { goToWays, WayPanel } from '#components/allocation/way-panel.tsx';
-import { WaysSection } from '#components/allocation/ways-section.tsx';
+import { TimeLimit } from '#components/allocation/time-limit.tsx';
 import { DayPlaces } from '#components/office/day-places.tsx';
 import { css } from '#components/theme/css.ts';
-import { useBreakpoint } from '#components/theme/use-breakpoint.ts';
 import { Button } from '#components/ui/button.tsx';
-import { Disclosure } from '#components/ui/disclosure.tsx';
 import { EmptyState } from '#components/ui/empty-state.tsx';
-import { Heading } from '#components/ui/heading.tsx';
 import { Notice } from '#components/ui/notice.tsx';
-import { ProblemNotice } from '#components/ui/problem-notice.tsx';
 import { Skeleton } from '#components/ui/skeleton.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
 import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { allocationModelHref, useAllocation } from '#hooks/allocation.ts';
-import { useCuttingDay, useSpecification } from '#hooks/carcases.ts';
+import { useCuttingDay } from '#hooks/carcases.ts';
+import { useSpecification } from '#hooks/specifications.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import { useWorkbench } from '#hooks/use-workbench.ts';
-import type { Allocation, PlannedSide } from '#shared/contracts/allocation.ts';
+import type { Allocation } from '#shared/contracts/allocation.ts';
 import { formatCount, formatDay } from '#shared/domain/words.ts';
 
 export default function AllocationScreen() {
@@ -74,14 +66,14 @@ function Workbench({ dayId, day, carcases, latest, published, members }: Workben
   const [isPublishing, setPublishing] = useState(false);
   useTitle(day ? `Allocation ${formatDay(day)}` : 'Allocation');
   const isUnsaved = latest !== null && !areSameLocks(bench.locks, latest.locks);
-  const mayPublish = latest?.state === 'draft' && !isUnsaved;
+  const mayPublish = latest?.state === 'draft' && latest.isProven && !isUnsaved && !bench.plan.isWorking;
   const workOut = (
     <Button
       kind={mayPublish ? 'quiet' : 'primary'}
       label={latest ? 'Work it out again' : 'Work it out'}
-      busy={bench.allocate.isPending}
+      busy={bench.plan.isWorking}
       busyLabel="Working it out …"
-      onPress={() => void bench.workOut()}
+      onPress={bench.workOut}
     />
   );
   const path = `/office/cutting-days/${dayId}/allocation`;
@@ -106,15 +98,24 @@ function Workbench({ dayId, day, carcases, latest, published, members }: Workben
         }
       />
       <DayPlaces dayId={dayId} role="owner" path={path} />
-      <ProblemNotice error={bench.allocate.error} title="There is no new answer." />
-      {isUnsaved ? (
+      <JobPanel {...bench.plan} onCancel={bench.plan.cancel} />
+      {isUnsaved && !bench.plan.isWorking ? (
         <Notice kind="held" spoken title="The locks have changed." next="Work it out again to see what they cost." />
       ) : null}
       {bench.hasPublished && latest?.state === 'published' ? (
         <Notice kind="good" spoken title={`On sale now: ${describeOutlets(latest)}.`} />
       ) : null}
       {latest ? (
-        <Plan plan={latest} bench={bench} members={members} />
+        <PlanView
+          plan={latest}
+          members={members}
+          chosen={bench.chosen}
+          onChoose={bench.setChosen}
+          locks={bench.locks}
+          onLocks={bench.setLocks}
+          before={bench.before}
+          links={<PlanLinks dayId={dayId} plan={latest} />}
+        />
       ) : (
         <EmptyState
           title="Not allocated yet"
@@ -123,6 +124,7 @@ function Workbench({ dayId, day, carcases, latest, published, members }: Workben
           {workOut}
         </EmptyState>
       )}
+      <TimeLimit seconds={bench.seconds} onChange={bench.setSeconds} />
       {latest ? (
         <PublishSheet
           open={isPublishing}
@@ -138,62 +140,18 @@ function Workbench({ dayId, day, carcases, latest, published, members }: Workben
   );
 }
 
-type PlanProps = { plan: Allocation; bench: ReturnType<typeof useWorkbench>; members: Members };
-
-function Plan({ plan, bench, members }: PlanProps) {
-  const isBeside = useBreakpoint() === 'office';
-  const { chosen } = bench;
-  const side = plan.sides.find((one) => one.carcaseId === chosen?.carcaseId && one.side === chosen.side);
-  const choose = ({ carcaseId, side: which }: PlannedSide, primalId: string) =>
-    bench.setChosen({ carcaseId, side: which, primalId });
-  const panel = chosen && side && (
-    <WayPanel
-      side={side}
-      primalIds={members[chosen.primalId] ?? [chosen.primalId]}
-      locks={bench.locks}
-      isExplained={plan.isExplained}
-      onLock={(choiceId, wayId) => bench.setLocks(setLock(bench.locks, { ...chosen, choiceId }, wayId))}
-    />
-  );
+function PlanLinks({ dayId, plan }: { dayId: string; plan: Allocation }) {
   return (
     <>
-      <PlanNotices plan={plan} />
-      <View style={css('w-columns', 'w-columns-office')}>
-        <SideRails
-          sides={plan.sides}
-          members={members}
-          chosen={chosen && side && { side, primalId: chosen.primalId }}
-          onChoose={choose}
-          panelBelow={isBeside ? null : panel}
-          isNaming={!isBeside}
-        />
-        <View style={css('w-stack-l')}>
-          {isBeside && panel ? <div style={{ position: 'sticky', top: 16, zIndex: 1 }}>{panel}</div> : null}
-          <View>
-            <Heading level={2}>On offer</Heading>
-            <OfferList boxes={plan.boxes} isExplained={plan.isExplained} />
-          </View>
-          <PlanFigures plan={plan} />
-          <TextLink href={allocationModelHref(plan.id)} outside place="alone">
-            Save the model as a file
-          </TextLink>
-        </View>
-      </View>
-      {bench.before ? (
-        <CompareTable beforeTitle="The answer before" nowTitle="This answer" before={bench.before} now={plan} />
-      ) : null}
-      <Heading level={2}>Cuts and where they go</Heading>
-      <Disclosure words="Kilograms of each cut" ruled open={isBeside}>
-        <CutTable cuts={plan.cuts} />
-      </Disclosure>
-      <Outlets loose={plan.loose} trade={plan.trade} />
-      <WaysSection
-        sides={plan.sides}
-        onChoose={(one, primalId) => {
-          choose(one, primalId);
-          goToWays();
-        }}
-      />
+      <TextLink href={`/office/cutting-days/${dayId}/margin`} place="alone">
+        Where the money comes from
+      </TextLink>
+      <TextLink href={`/office/cutting-days/${dayId}/what-if`} place="alone">
+        What if …
+      </TextLink>
+      <TextLink href={allocationModelHref(plan.id)} outside place="alone">
+        Save the model as a file
+      </TextLink>
     </>
   );
 }
