@@ -7,6 +7,7 @@ import { addAccountRoutes } from './account/account-routes.ts';
 import { addCustomerSettingsRoutes } from './account/customer-settings-routes.ts';
 import { addUnsubscribeRoutes } from './account/unsubscribe-routes.ts';
 import { addAllocationRoutes } from './allocation/allocation-routes.ts';
+import { addPlanJobRoutes } from './allocation/plan-job-routes.ts';
 import { addCarcaseRoutes } from './carcases/carcase-routes.ts';
 import { addCollectionRoutes } from './collections/collection-routes.ts';
 import type { Deps } from './deps.ts';
@@ -53,6 +54,7 @@ export function createApp(deps: Deps, webRoot: string | null): App {
     addHerdRoutes,
     addCarcaseRoutes,
     addAllocationRoutes,
+    addPlanJobRoutes,
     addMarginRoutes,
     addTradeRoutes,
     addPackRoutes,
