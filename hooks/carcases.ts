@@ -1,6 +1,7 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
 import type {
   bookCarcasesSchema,
+  chooseSpecificationSchema,
   closeCuttingDaySchema,
   enterKillSheetSchema,
   enterWeightsSchema,
@@ -9,15 +10,14 @@ import type {
 import {
   addCuttingDay,
   bookCarcases,
+  chooseSpecification,
   closeCuttingDay,
   enterKillSheet,
   enterWeights,
   getCarcase,
   getCuttingDay,
-  getSpecification,
   listCollectionPoints,
   listCuttingDays,
-  listSpecifications,
 } from '#shared/contracts/carcases.ts';
 import type { CallInput } from '#shared/contracts/endpoint.ts';
 import { call } from './api.ts';
@@ -56,22 +56,6 @@ export function collectionPointsQuery() {
   });
 }
 
-export function specificationsQuery() {
-  return queryOptions({
-    queryKey: ['specifications'],
-    queryFn: ({ signal }) => call(listSpecifications, { signal }),
-    staleTime: STALE.office,
-  });
-}
-
-export function specificationQuery(specificationId: string) {
-  return queryOptions({
-    queryKey: ['specifications', specificationId],
-    queryFn: ({ signal }) => call(getSpecification, { params: { specificationId }, signal }),
-    staleTime: STALE.office,
-  });
-}
-
 export function useCuttingDays() {
   return useQuery(cuttingDaysQuery());
 }
@@ -88,17 +72,12 @@ export function useCollectionPoints() {
   return useQuery(collectionPointsQuery());
 }
 
-export function useSpecifications() {
-  return useQuery(specificationsQuery());
-}
-
-/** Waits until the edition is known. */
-export function useSpecification(specificationId: string | undefined) {
-  return useQuery({ ...specificationQuery(specificationId ?? ''), enabled: specificationId !== undefined });
-}
-
 export function useAddCuttingDay() {
   return useFarmMutation((body: NewCuttingDay) => call(addCuttingDay, { body }));
+}
+
+export function useChooseSpecification() {
+  return useFarmMutation((input: CallInput<typeof chooseSpecificationSchema>) => call(chooseSpecification, input));
 }
 
 export function useCloseCuttingDay() {

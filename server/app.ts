@@ -27,6 +27,7 @@ import { addPackRoutes } from './packs/pack-routes.ts';
 import { paymentWebhook } from './payments/webhook.ts';
 import { addReceiptRoutes } from './receipts/receipt-routes.ts';
 import { addShopRoutes } from './shop/shop-routes.ts';
+import { addSpecificationRoutes } from './specifications/specification-routes.ts';
 import { addTradeRoutes } from './trade/trade-routes.ts';
 
 export type App = { express: Express; api: Api };
@@ -56,6 +57,7 @@ export function createApp(deps: Deps, webRoot: string | null): App {
     addAllocationRoutes,
     addPlanJobRoutes,
     addMarginRoutes,
+    addSpecificationRoutes,
     addTradeRoutes,
     addPackRoutes,
     addCollectionRoutes,

@@ -6,25 +6,13 @@ import { bookCarcases } from './booking-service.ts';
 import { getCarcase } from './carcase-service.ts';
 import { closeCuttingDay } from './close-day-service.ts';
 import { addCuttingDay, getCuttingDay, listCollectionPoints, listCuttingDays } from './cutting-day-service.ts';
+import { chooseSpecification } from './day-specification-service.ts';
 import { enterKillSheet } from './kill-sheet-service.ts';
-import { getSpecification, listSpecifications, saveSpecification } from './specification-service.ts';
 import { enterWeights } from './weights-service.ts';
 
 export function addCarcaseRoutes(api: Api, deps: Deps): void {
   addDayRoutes(api, deps);
   addBeastRoutes(api, deps);
-  route(api, contract.listSpecifications, {
-    schema: schema.listSpecificationsSchema,
-    handle: async () => ({ specifications: await listSpecifications(deps) }),
-  });
-  route(api, contract.getSpecification, {
-    schema: schema.getSpecificationSchema,
-    handle: ({ params }) => getSpecification(deps, params.specificationId),
-  });
-  route(api, contract.saveSpecification, {
-    schema: schema.saveSpecificationSchema,
-    handle: ({ body }, caller) => saveSpecification(deps, signedIn(caller).id, body),
-  });
 }
 
 function addDayRoutes(api: Api, deps: Deps): void {
@@ -39,6 +27,10 @@ function addDayRoutes(api: Api, deps: Deps): void {
   route(api, contract.addCuttingDay, {
     schema: schema.addCuttingDaySchema,
     handle: ({ body }, caller) => addCuttingDay(deps, signedIn(caller).id, body),
+  });
+  route(api, contract.chooseSpecification, {
+    schema: schema.chooseSpecificationSchema,
+    handle: ({ params, body }, caller) => chooseSpecification(deps, signedIn(caller).id, { ...params, ...body }),
   });
   route(api, contract.closeCuttingDay, {
     schema: schema.closeCuttingDaySchema,

@@ -1,4 +1,4 @@
-import { and, asc, count, desc, eq, inArray, max, ne, notInArray, sql } from 'drizzle-orm';
+import { and, asc, count, desc, eq, inArray, ne, notInArray, sql } from 'drizzle-orm';
 import { cuttingDay, cuttingSpecification } from '#db/schema/carcases.ts';
 import { collectionPoint, collectionSlot, customerOrder } from '#db/schema/orders.ts';
 import { reservation } from '#db/schema/trade.ts';
@@ -51,6 +51,20 @@ export async function raiseFigures(tx: Tx, dayId: string): Promise<void> {
     .update(cuttingDay)
     .set({ figuresVersion: sql`${cuttingDay.figuresVersion} + 1` })
     .where(eq(cuttingDay.id, dayId));
+}
+
+/** False when another edit came first, or the day is past choosing. */
+export async function setDaySpecification(
+  tx: Tx,
+  dayId: string,
+  { version, specificationId }: { version: number; specificationId: string },
+): Promise<boolean> {
+  const rows = await tx
+    .update(cuttingDay)
+    .set({ specificationId, version: sql`${cuttingDay.version} + 1` })
+    .where(and(eq(cuttingDay.id, dayId), eq(cuttingDay.version, version), eq(cuttingDay.state, 'planned')))
+    .returning({ id: cuttingDay.id });
+  return rows.length === 1;
 }
 
 /** False when another edit came first. */
@@ -108,7 +122,7 @@ export function listPoints(db: Db | Tx): Promise<{ id: string; name: string }[]>
   return db
     .select({ id: collectionPoint.id, name: collectionPoint.name })
     .from(collectionPoint)
-    .where(eq(collectionPoint.isActive, true))
+    .where(and(eq(collectionPoint.isActive, true), eq(collectionPoint.kind, 'collection')))
     .orderBy(asc(collectionPoint.name));
 }
 
@@ -129,21 +143,4 @@ export function listSpecificationRows(db: Db | Tx): Promise<{ id: string; name: 
     .select({ id: cuttingSpecification.id, name: cuttingSpecification.name, edition: cuttingSpecification.edition })
     .from(cuttingSpecification)
     .orderBy(asc(cuttingSpecification.name), desc(cuttingSpecification.edition));
-}
-
-export async function latestEdition(db: Db | Tx, name: string): Promise<number> {
-  const rows = await db
-    .select({ edition: max(cuttingSpecification.edition) })
-    .from(cuttingSpecification)
-    .where(eq(cuttingSpecification.name, name));
-  return rows[0]?.edition ?? 0;
-}
-
-/** Null when somebody else saved this edition first. */
-export async function insertSpecification(
-  tx: Tx,
-  row: { name: string; edition: number; body: unknown },
-): Promise<SpecificationRow | null> {
-  const rows = await tx.insert(cuttingSpecification).values(row).onConflictDoNothing().returning();
-  return rows[0] ?? null;
 }

@@ -95,9 +95,9 @@ function fieldsOfDates(deps: Deps, wanted: NewCuttingDay, cutOffAt: Date): Field
 
 async function fieldsOfReferences(tx: Tx, wanted: NewCuttingDay): Promise<FieldErrors> {
   const fields: FieldErrors = {};
-  if (!(await findSpecification(tx, wanted.specificationId))) {
-    fields.specificationId = 'There is no such cutting specification.';
-  }
+  const specification = await findSpecification(tx, wanted.specificationId);
+  if (!specification) fields.specificationId = 'There is no such cutting specification.';
+  else if (specification.retiredAt !== null) fields.specificationId = 'This cutting specification is retired.';
   const points = new Set((await listPoints(tx)).map((point) => point.id));
   for (const [index, collection] of wanted.collections.entries()) {
     if (!points.has(collection.pointId)) fields[`collections.${index}.pointId`] = 'There is no such collection point.';

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { Day, Grams, Id, Instant, Line, Rail, Side, Time, Version } from './fields-schema.ts';
+import { Day, Grams, Id, Instant, Rail, Side, Time, Version } from './fields-schema.ts';
 
 export const CarcaseState = z.enum(['booked', 'killed', 'hanging', 'cut', 'sold through']);
 export const CONFORMATIONS = ['E', 'U+', '-U', 'R', 'O+', '-O', 'P+', '-P'] as const;
@@ -146,15 +146,8 @@ export const enterWeightsSchema = {
   answer: Carcase,
 };
 
-const SpecificationBody = z.record(z.string(), z.unknown());
-export const SpecificationSummary = z.strictObject({ id: Id, name: z.string(), edition: z.int() });
-export const listSpecificationsSchema = { answer: z.strictObject({ specifications: z.array(SpecificationSummary) }) };
-export const getSpecificationSchema = {
-  params: z.strictObject({ specificationId: Id }),
-  answer: z.strictObject({ ...SpecificationSummary.shape, body: SpecificationBody }),
-};
-/** Saves a new edition; the engine checks the body and refuses parts that do not sum to 100 %. */
-export const saveSpecificationSchema = {
-  body: z.strictObject({ name: Line, basedOnEdition: z.int().min(0), body: SpecificationBody }),
-  answer: SpecificationSummary,
+export const chooseSpecificationSchema = {
+  params: DayId,
+  body: z.strictObject({ version: Version, specificationId: Id }),
+  answer: CuttingDay,
 };

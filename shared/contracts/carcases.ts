@@ -31,14 +31,9 @@ export const enterKillSheet = endpoint<typeof schema.enterKillSheetSchema>(
 export const enterWeights = endpoint<typeof schema.enterWeightsSchema>('PUT', '/api/carcases/:carcaseId/weights', [
   'owner',
 ]);
-export const listSpecifications = endpoint<typeof schema.listSpecificationsSchema>('GET', '/api/specifications', [
-  'owner',
-]);
-export const getSpecification = endpoint<typeof schema.getSpecificationSchema>(
-  'GET',
-  '/api/specifications/:specificationId',
+/** Before the day is put on sale; its figures are then a new version and its plan is out of date. */
+export const chooseSpecification = endpoint<typeof schema.chooseSpecificationSchema>(
+  'PUT',
+  '/api/cutting-days/:dayId/specification',
   ['owner'],
 );
-export const saveSpecification = endpoint<typeof schema.saveSpecificationSchema>('POST', '/api/specifications', [
-  'owner',
-]);
