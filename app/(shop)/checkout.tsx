@@ -19,6 +19,7 @@ import { useBasketOrder } from '#hooks/basket-lines.ts';
 import { checkoutResolver, warmCheckoutRules } from '#hooks/checkout-resolver.ts';
 import { loadCounter, useCounter } from '#hooks/counter.ts';
 import { useMe } from '#hooks/me.ts';
+import { useMyDetails } from '#hooks/my-account.ts';
 import { refusalOf, usePlaceOrder } from '#hooks/orders.ts';
 import { pageMetadata } from '#hooks/page-metadata.ts';
 import { useCollections, type CutList } from '#hooks/shop.ts';
@@ -65,6 +66,7 @@ function Checkout({ home, cuts }: { home: ShopHome; cuts: CutList }) {
   const { day, items, lines, totalPence, isRight } = useBasketOrder(basket, { home, cuts });
   const collections = useCollections(day?.id);
   const { data: me } = useMe();
+  const { data: mine } = useMyDetails(Boolean(me?.user));
   const place = usePlaceOrder();
   usePageReturn(place.reset);
   useEffect(warmCheckoutRules, []);
@@ -106,7 +108,8 @@ function Checkout({ home, cuts }: { home: ShopHome; cuts: CutList }) {
           <CheckoutForm
             points={points}
             resolver={checkoutResolver}
-            known={me?.user ? { name: me.user.name, email: me.user.email } : {}}
+            known={mine ? { name: mine.name, email: mine.email, phone: mine.phone } : {}}
+            asksNews={!mine?.news.isGiven}
             terms={<TermsWords day={day} />}
             buttonLabel={`Go to payment · ${formatMoney(totalPence)}`}
             isSending={place.isPending || place.isSuccess}

@@ -4,21 +4,25 @@ import { View } from 'react-native';
 import type { Checkout } from '#shared/contracts/orders.ts';
 import type { CollectionPoint } from '#shared/contracts/shop.ts';
 import type { FieldErrors as ServerFields } from '#shared/errors.ts';
+import { CONSENT_VERSION, consentWords } from '#shared/domain/consent.ts';
 import { css } from '#components/theme/css.ts';
 import { Button } from '#components/ui/button.tsx';
 import { Field } from '#components/ui/field.tsx';
+import { FormCheckbox } from '#components/ui/form-checkbox.tsx';
 import { Heading } from '#components/ui/heading.tsx';
 import { Notice } from '#components/ui/notice.tsx';
 import { SlotPicker } from './slot-picker.tsx';
 
 /** What the person fills in; key, day and lines come from the basket. */
-export type CheckoutFields = Pick<Checkout, 'slotId' | 'name' | 'email' | 'phone' | 'note'>;
+export type CheckoutFields = Pick<Checkout, 'slotId' | 'name' | 'email' | 'phone' | 'note' | 'wantsNews'>;
 
 type CheckoutFormProps = {
   points: readonly CollectionPoint[];
   resolver: Resolver<CheckoutFields>;
   /** Who is signed in, as far as known. */
   known: Partial<CheckoutFields>;
+  /** False for somebody who gets marketing mail already. */
+  asksNews?: boolean;
   /** What pressing the button agrees to. */
   terms: ReactNode;
   buttonLabel: string;
@@ -37,7 +41,7 @@ export function CheckoutForm(props: CheckoutFormProps) {
     resolver: props.resolver,
     mode: 'onTouched',
     shouldFocusError: false,
-    defaultValues: { slotId: '', name: '', email: '', phone: '', note: '', ...props.known },
+    defaultValues: { slotId: '', name: '', email: '', phone: '', note: '', wantsNews: false, ...props.known },
   });
   const [pointId, setPointId] = useState(points.length === 1 ? points[0]?.id : undefined);
   const slots = useRef<HTMLDivElement>(null);
@@ -50,11 +54,12 @@ export function CheckoutForm(props: CheckoutFormProps) {
     }
   }, [refusal, setError]);
 
-  const { name: knownName, email: knownEmail } = props.known;
+  const { name: knownName, email: knownEmail, phone: knownPhone } = props.known;
   useEffect(() => {
     if (knownName && !getFieldState('name').isDirty) setValue('name', knownName);
     if (knownEmail && !getFieldState('email').isDirty) setValue('email', knownEmail);
-  }, [knownName, knownEmail, setValue, getFieldState]);
+    if (knownPhone && !getFieldState('phone').isDirty) setValue('phone', knownPhone);
+  }, [knownName, knownEmail, knownPhone, setValue, getFieldState]);
 
   // The places and times are no single control: the library would pass over them to the next field that is wrong.
   const focusFirst = (errors: FieldErrors<CheckoutFields>) => {
@@ -92,6 +97,14 @@ export function CheckoutForm(props: CheckoutFormProps) {
         />
       </div>
       <PersonFields form={form} onEnter={submit} />
+      {props.asksNews === false ? null : (
+        <FormCheckbox
+          control={form.control}
+          name="wantsNews"
+          label={consentWords(CONSENT_VERSION)}
+          note="Only if you like: the order does not depend on it, and each such mail has a way out."
+        />
+      )}
       {refusal ? <Notice kind="error" title={refusal.message} /> : null}
       <View style={css('w-stack')}>
         {props.terms}

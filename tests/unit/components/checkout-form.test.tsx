@@ -70,6 +70,7 @@ describe('the checkout form', () => {
       email: 'nell@example.com',
       phone: '01632 960144',
       note: '',
+      wantsNews: false,
     });
   });
 
