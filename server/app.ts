@@ -21,11 +21,13 @@ import type { Api } from './http/route.ts';
 import { addMarginRoutes } from './margin/margin-routes.ts';
 import { inboundMail } from './mail/inbound.ts';
 import { addOfficeRoutes } from './office/office-routes.ts';
+import { addDeliveryRoutes } from './delivery/delivery-routes.ts';
 import { addOrderChangeRoutes } from './orders/order-change-routes.ts';
 import { addOrderRoutes } from './orders/order-routes.ts';
 import { addPackRoutes } from './packs/pack-routes.ts';
 import { paymentWebhook } from './payments/webhook.ts';
 import { addReceiptRoutes } from './receipts/receipt-routes.ts';
+import { addPromoRoutes } from './promo/promo-routes.ts';
 import { addShopRoutes } from './shop/shop-routes.ts';
 import { addSpecificationRoutes } from './specifications/specification-routes.ts';
 import { addTradeRoutes } from './trade/trade-routes.ts';
@@ -52,6 +54,8 @@ export function createApp(deps: Deps, webRoot: string | null): App {
     addShopRoutes,
     addOrderRoutes,
     addOrderChangeRoutes,
+    addPromoRoutes,
+    addDeliveryRoutes,
     addHerdRoutes,
     addCarcaseRoutes,
     addAllocationRoutes,

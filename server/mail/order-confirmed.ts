@@ -8,7 +8,7 @@ export function orderConfirmedMail(facts: OrderFacts): WrittenMail {
     { kind: 'heading', text: 'Your beef is set aside' },
     {
       kind: 'text',
-      text: `Thank you, ${facts.name}. Order ${facts.orderNo} is paid and yours. Collect it ${collectionTime(facts.collection)}.`,
+      text: `Thank you, ${facts.name}. Order ${facts.orderNo} is paid and yours. ${facts.isDelivered ? 'We bring it' : 'Collect it'} ${collectionTime(facts.collection)}.`,
     },
     lineRows(facts),
     ...(hasLoose

@@ -19,7 +19,11 @@ export type OrderFacts = {
     linePence: number;
     unitGrams: number;
   }[];
+  discountPence: number;
+  deliveryPence: number;
   totalPence: number;
+  /** The van brings it: the place is the buyer's own address. */
+  isDelivered: boolean;
   collection: {
     name: string;
     addressLines: string[];
@@ -48,17 +52,19 @@ export function lineRows(facts: OrderFacts): LetterPart {
     `${line.quantity} × ${line.name}, ${line.kind === 'box' ? 'at least' : 'up to'} ${formatWeight(line.unitGrams)}`,
     formatMoney(line.linePence),
   ]);
+  if (facts.discountPence > 0) rows.push(['Taken off', formatMoney(-facts.discountPence)]);
+  if (facts.isDelivered) rows.push(['Delivery', formatMoney(facts.deliveryPence)]);
   return { kind: 'sums', rows: [...rows, ['Total', formatMoney(facts.totalPence)]] };
 }
 
-export function placeRows({ collection }: OrderFacts): LetterPart {
+export function placeRows({ collection, isDelivered }: OrderFacts): LetterPart {
   return {
     kind: 'rows',
     rows: [
       ['When', collectionTime(collection)],
       ['Where', [collection.name, ...collection.addressLines].join('\n')],
-      ['Finding it', collection.directions],
-      ['Please bring', collection.bring],
+      [isDelivered ? 'At the door' : 'Finding it', collection.directions],
+      [isDelivered ? 'Please have' : 'Please bring', collection.bring],
     ],
   };
 }

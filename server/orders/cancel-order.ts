@@ -10,6 +10,7 @@ import { orderCancelledMail } from '#server/mail/order-cancelled.ts';
 import { queueMail } from '#server/mail/outbox.ts';
 import { askRefund } from '#server/payments/ask-refund.ts';
 import { listPayments } from '#server/payments/payment-queries.ts';
+import { deleteUse } from '#server/promo/promo-queries.ts';
 import { closeAddition } from './addition-page.ts';
 import { unsell } from './hold.ts';
 import { findOrder, listLines, lockOrder, updateOrder, type OrderRow } from './order-queries.ts';
@@ -84,6 +85,7 @@ async function cancel(
   if (isPaid) {
     await unsell(tx, { lines: await listLines(tx, order.id), slotId: order.slotId });
     await returnPacks(tx, order.id, byUserId);
+    await deleteUse(tx, order.id);
   }
   const cancelled = await updateOrder(tx, order.id, { state: 'cancelled', version: order.version + 1 });
   const refundPence = Math.max(0, refundablePence(await listPayments(tx, order.id)));

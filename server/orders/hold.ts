@@ -42,10 +42,10 @@ export async function takeLines(
   return wanted;
 }
 
-/** The slot, when it belongs to the day and is still to come. */
+/** The slot, when people collect then, it belongs to the day and is still to come. */
 export async function getSlotOfDay(tx: Tx, slotId: string, at: { dayId: string; now: Date }) {
   const slot = await findSlot(tx, slotId);
-  if (slot?.cuttingDayId === at.dayId && slot.startsAt > at.now) return slot;
+  if (slot?.cuttingDayId === at.dayId && slot.kind === 'collection' && slot.startsAt > at.now) return slot;
   throw new AppError('INVALID_INPUT', 'Choose a collection time of this cutting day. Nothing was taken.', {
     fields: { slotId: 'This time cannot be chosen for this day.' },
   });

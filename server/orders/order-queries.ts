@@ -65,16 +65,20 @@ export async function storeSession(
   return rows.length === 1;
 }
 
-export async function replaceLines(tx: Tx, orderId: string, lines: readonly HeldLine[]): Promise<void> {
+/** A line with its share of a promotional code. */
+type PricedHold = HeldLine & { discountPence?: number };
+
+export async function replaceLines(tx: Tx, orderId: string, lines: readonly PricedHold[]): Promise<void> {
   await tx.delete(orderLine).where(eq(orderLine.orderId, orderId));
   await tx.insert(orderLine).values(
-    lines.map(({ offerId, quantity, unitPricePence, unitGrams, name }) => ({
+    lines.map(({ offerId, quantity, unitPricePence, unitGrams, name, discountPence = 0 }) => ({
       orderId,
       offerId,
       quantity,
       unitPricePence,
       unitGrams,
       name,
+      discountPence,
     })),
   );
 }

@@ -2,22 +2,19 @@ import { randomBytes } from 'node:crypto';
 import type { Answer } from '#shared/contracts/endpoint.ts';
 import type { Checkout } from '#shared/contracts/orders.ts';
 import type { placeOrderSchema } from '#shared/contracts/orders-schema.ts';
-import { formatDayTime } from '#shared/domain/words.ts';
 import { AppError } from '#shared/errors.ts';
 import { recordConsent } from '#server/account/consent.ts';
-import type { Deps, Tx } from '#server/deps.ts';
+import type { Deps } from '#server/deps.ts';
 import type { Caller } from '#server/http/route.ts';
 import { asPaymentsDown, createPaymentPage, endPaymentPage, isRefusedEmail } from '#server/payments/payment-page.ts';
 import { endUnknownPage, releaseUnpaged } from '#server/payments/payment-service.ts';
 import { releaseHold, settlePage } from '#server/payments/settle-page.ts';
-import { getDayOnSale, mergeLines } from './basket.ts';
-import { getSlotOfDay, take } from './hold.ts';
+import { detailsOf, getPlaceInTime, holdBasket, isSame } from './hold-basket.ts';
 import {
   findOrder,
   insertOrder,
   listLines,
   lockOrder,
-  replaceLines,
   storeSession,
   updateOrder,
   type OrderRow,
@@ -49,18 +46,19 @@ export async function placeOrder(deps: Deps, request: Request): Promise<Placed> 
 /** Null: another press came first. */
 async function start(deps: Deps, { basket, caller }: Request): Promise<Placed | null> {
   const order = await deps.db.transaction(async (tx) => {
-    const day = await getDayInTime(tx, deps, basket);
+    const place = await getPlaceInTime(tx, deps, basket);
     const order = await insertOrder(tx, {
       token: randomBytes(24).toString('base64url'),
       basketKey: basket.basketKey,
       userId: caller?.id ?? null,
       ...detailsOf(basket),
+      slotId: place.slotId,
       // The sum is known once the lines are taken, a moment later and in the same transaction.
       totalPence: 1,
       reachedPaymentAt: deps.clock.now(),
     });
     if (order && basket.wantsNews) await recordConsent(tx, deps, { ...basket, isGiven: true, source: 'checkout' });
-    return order && holdFor(tx, { order, basket, day });
+    return order && holdBasket(tx, deps, { order, basket, place });
   });
   return order && openPage(deps, order);
 }
@@ -94,9 +92,10 @@ async function holdAgain(deps: Deps, known: OrderRow, { basket, caller }: Reques
   return deps.db.transaction(async (tx) => {
     const order = await lockOrder(tx, { id: known.id });
     if (!order || order.version !== known.version || order.state !== 'awaiting payment' || order.isHeld) return null;
-    const day = await getDayInTime(tx, deps, basket);
+    const place = await getPlaceInTime(tx, deps, basket);
     const again = await updateOrder(tx, order.id, {
       ...detailsOf(basket),
+      slotId: place.slotId,
       userId: caller?.id ?? order.userId,
       isHeld: true,
       version: order.version + 1,
@@ -104,44 +103,8 @@ async function holdAgain(deps: Deps, known: OrderRow, { basket, caller }: Reques
       ...{ sessionId: null, sessionUrl: null, sessionExpiresAt: null },
     });
     if (basket.wantsNews) await recordConsent(tx, deps, { ...basket, isGiven: true, source: 'checkout' });
-    return holdFor(tx, { order: again, basket, day });
+    return holdBasket(tx, deps, { order: again, basket, place });
   });
-}
-
-async function holdFor(
-  tx: Tx,
-  { order, basket, day }: { order: OrderRow; basket: Checkout; day: { id: string; day: string } },
-): Promise<OrderRow> {
-  const lines = await take(tx, { day, lines: basket.lines, slotId: basket.slotId }, 'held');
-  await replaceLines(tx, order.id, lines);
-  const totalPence = lines.reduce((sum, line) => sum + line.quantity * line.unitPricePence, 0);
-  return updateOrder(tx, order.id, { totalPence });
-}
-
-function detailsOf({ dayId, slotId, name, email, phone, note }: Checkout) {
-  return { cuttingDayId: dayId, slotId, name, email, phone, note };
-}
-
-async function getDayInTime(tx: Tx, deps: Deps, { dayId, slotId }: Checkout) {
-  const now = deps.clock.now();
-  const day = await getDayOnSale(tx, dayId);
-  if (now >= day.cutOffAt) {
-    throw new AppError(
-      'CUTOFF_PASSED',
-      `Orders for this day closed ${formatDayTime(day.cutOffAt)}. Nothing was charged; please choose a later day.`,
-      { figures: { cutOffAt: day.cutOffAt.toISOString() } },
-    );
-  }
-  await getSlotOfDay(tx, slotId, { dayId, now });
-  return day;
-}
-
-async function isSame(deps: Deps, order: OrderRow, basket: Checkout): Promise<boolean> {
-  const held = mergeLines(await listLines(deps.db, order.id));
-  const asked = mergeLines(basket.lines);
-  const details = detailsOf(basket);
-  const isSamePlace = (Object.keys(details) as (keyof typeof details)[]).every((key) => order[key] === details[key]);
-  return isSamePlace && JSON.stringify(held) === JSON.stringify(asked);
 }
 
 /** Outside any transaction: the stock is held, and the page is asked for under the attempt's own key. */

@@ -48,6 +48,13 @@ export async function readSummaries(db: Db | Tx, filter: OrderFilter): Promise<O
   return rows.map((row) => ({ ...row, startsAt: row.startsAt.toISOString() }));
 }
 
+/** Where and when an order is handed over: at its collection point, or at the buyer's own door. */
+export async function getPlace(db: Db | Tx, order: OrderRow): Promise<OrderFacts['collection']> {
+  const slot = await getCollection(db, order.slotId);
+  if (!order.deliveryAddress) return slot;
+  return { ...slot, name: 'Your address', addressLines: [...order.deliveryAddress, order.deliveryPostcode ?? ''] };
+}
+
 /** What the mails and the calendar tell of an order. */
 export async function readOrderFacts(deps: Deps, db: Db | Tx, order: OrderRow): Promise<OrderFacts> {
   const farm = await getFarm(db);
@@ -63,8 +70,11 @@ export async function readOrderFacts(deps: Deps, db: Db | Tx, order: OrderRow): 
     day: day.day,
     cutOffAt: day.cutOffAt,
     lines: lines.map(viewLine),
+    discountPence: order.discountPence,
+    deliveryPence: order.deliveryPence,
     totalPence: order.totalPence,
-    collection: await getCollection(db, order.slotId),
+    isDelivered: order.deliveryAddress !== null,
+    collection: await getPlace(db, order),
   };
 }
 
@@ -76,7 +86,7 @@ export function orderCalendar(facts: OrderFacts, order: OrderRow, madeAt: Date):
     madeAt,
     startsAt: collection.startsAt,
     endsAt: collection.endsAt,
-    title: `Collect your beef from ${facts.farm.name}`,
+    title: facts.isDelivered ? `Beef comes from ${facts.farm.name}` : `Collect your beef from ${facts.farm.name}`,
     place: [collection.name, ...collection.addressLines].join(', '),
     description: `Order ${order.orderNo}. ${collection.directions}\n${collection.bring}`,
     url: facts.url,

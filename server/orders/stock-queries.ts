@@ -1,7 +1,7 @@
 import { and, eq, inArray, sql } from 'drizzle-orm';
 import { offer } from '#db/schema/allocations.ts';
 import { cuttingDay } from '#db/schema/carcases.ts';
-import { collectionSlot } from '#db/schema/orders.ts';
+import { collectionPoint, collectionSlot } from '#db/schema/orders.ts';
 import { boxKind, cut } from '#db/schema/products.ts';
 import type { Db, Tx } from '#server/deps.ts';
 
@@ -84,8 +84,13 @@ export async function freeSlot(tx: Tx, slotId: string): Promise<void> {
 }
 
 export async function findSlot(db: Db | Tx, slotId: string) {
-  const rows = await db.select().from(collectionSlot).where(eq(collectionSlot.id, slotId));
-  return rows[0] ?? null;
+  const rows = await db
+    .select({ slot: collectionSlot, kind: collectionPoint.kind })
+    .from(collectionSlot)
+    .innerJoin(collectionPoint, eq(collectionPoint.id, collectionSlot.pointId))
+    .where(eq(collectionSlot.id, slotId));
+  const row = rows[0];
+  return row ? { ...row.slot, kind: row.kind } : null;
 }
 
 export async function findDay(db: Db | Tx, dayId: string) {

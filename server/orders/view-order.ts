@@ -1,23 +1,25 @@
 import type { Order } from '#shared/contracts/orders.ts';
 import type { Deps } from '#server/deps.ts';
 import { listPayments } from '#server/payments/payment-queries.ts';
+import { findCodeOfOrder } from '#server/promo/promo-queries.ts';
 import { findOpenAddition, listAdditionLines } from './addition-queries.ts';
 import { wordsOf } from './line-words.ts';
 import { listSwapRows, type SwapRow } from './order-line-queries.ts';
-import { getCollection, listLines, listOrderPacks, type LineRow, type OrderRow } from './order-queries.ts';
-import { getDay, getOrderByToken, viewLine } from './read-order.ts';
+import { listLines, listOrderPacks, type LineRow, type OrderRow } from './order-queries.ts';
+import { getDay, getOrderByToken, getPlace, viewLine } from './read-order.ts';
 
 /** The order as its customer sees it by the private link, and what can be done with it now. */
 export async function readOrder(deps: Deps, token: string): Promise<Order> {
   const order = await getOrderByToken(deps.db, token);
-  const [lines, collection, packs, payments, day, swaps, addition] = await Promise.all([
+  const [lines, collection, packs, payments, day, swaps, addition, promoCode] = await Promise.all([
     listLines(deps.db, order.id),
-    getCollection(deps.db, order.slotId),
+    getPlace(deps.db, order),
     listOrderPacks(deps.db, order.id),
     listPayments(deps.db, order.id),
     getDay(deps.db, order.cuttingDayId),
     listSwapRows(deps.db, order.cuttingDayId),
     readAddition(deps, order),
+    findCodeOfOrder(deps.db, order.id),
   ]);
   const now = deps.clock.now();
   const canChange = order.state === 'confirmed' && now < day.cutOffAt;
@@ -26,7 +28,8 @@ export async function readOrder(deps: Deps, token: string): Promise<Order> {
   const { discountPence, deliveryPence, totalPence } = order;
   return {
     ...{ orderNo, token, state, paymentState, name, email, note, version },
-    ...{ discountPence, deliveryPence, totalPence, addition },
+    ...{ discountPence, deliveryPence, totalPence, addition, promoCode },
+    isDelivered: order.deliveryAddress !== null,
     paymentUrl: isOpen ? order.sessionUrl : null,
     paymentExpiresAt: isOpen ? (order.sessionExpiresAt?.toISOString() ?? null) : null,
     day: day.day,

@@ -1,4 +1,5 @@
 import type { Fill } from '#shared/contracts/packs.ts';
+import { paidForCopy } from '#shared/domain/money.ts';
 import type { Recipe } from '#shared/engine/allocation/allocation-input.ts';
 import { checkBox } from '#shared/engine/box-fill/check-box.ts';
 import type { PlacedPack } from '#shared/engine/box-fill/box-fill-types.ts';
@@ -55,7 +56,7 @@ function orderJob(rows: WorkRows, work: OrderWork, copy: number): Job {
   const isDone = HANDED_OVER.includes(work.state);
   const isPacked = isDone || work.state === 'packed';
   const job = { id: `${lineId}/${copy}`, lineId, copy, orderId, orderNo, orderName, item, packs, isDone, isPacked };
-  const pricePence = work.unitPricePence;
+  const pricePence = paidForCopy(work, copy);
   const recipe = work.boxKindId ? rows.recipes.get(work.boxKindId) : undefined;
   if (recipe) return { ...job, kind: 'box', recipe, pricePence };
   return { ...job, kind: 'loose', cutId: work.cutId ?? '', upperGrams: work.unitGrams, pricePence };

@@ -102,6 +102,7 @@ export function listOrderWork(db: Db | Tx, dayId: string) {
       quantity: orderLine.quantity,
       unitPricePence: orderLine.unitPricePence,
       unitGrams: orderLine.unitGrams,
+      discountPence: orderLine.discountPence,
       kind: offer.kind,
       boxKindId: offer.boxKindId,
       cutId: offer.cutId,

@@ -9,6 +9,7 @@ import { release, sell, take } from '#server/orders/hold.ts';
 import { listLines, lockOrder, updateOrder, type OrderRow } from '#server/orders/order-queries.ts';
 import { getDay, readOrderFacts } from '#server/orders/read-order.ts';
 import { hasSoldOut } from '#server/orders/stock-queries.ts';
+import { deleteUse } from '#server/promo/promo-queries.ts';
 import { insertCharge, insertRefund } from './payment-queries.ts';
 import { enqueue } from '#server/queue.ts';
 import { FREEZE_MS, paidOn, type PaidPage } from './paid-page.ts';
@@ -50,6 +51,7 @@ export async function settlePage(tx: Tx, deps: Deps, page: Stripe.Checkout.Sessi
 
 export async function releaseHold(tx: Tx, order: OrderRow): Promise<OrderRow> {
   await release(tx, { lines: await listLines(tx, order.id), slotId: order.slotId });
+  await deleteUse(tx, order.id);
   return updateOrder(tx, order.id, { isHeld: false, sessionUrl: null });
 }
 

@@ -31,7 +31,8 @@ function prepareSale(db: Db) {
         collectionDays: sql<
           string[]
         >`array(select distinct (${collectionSlot.startsAt} at time zone 'Europe/London')::date::text
-          from ${collectionSlot} where ${collectionSlot.cuttingDayId} = ${cuttingDay.id} order by 1)`,
+          from ${collectionSlot} join ${collectionPoint} on ${collectionPoint.id} = ${collectionSlot.pointId}
+          where ${collectionSlot.cuttingDayId} = ${cuttingDay.id} and ${collectionPoint.kind} = 'collection' order by 1)`,
       })
       .from(cuttingDay)
       .leftJoin(allocation, and(eq(allocation.cuttingDayId, cuttingDay.id), eq(allocation.state, 'published')))
@@ -107,7 +108,13 @@ function prepareCatalogue(db: Db) {
       })
       .from(collectionSlot)
       .innerJoin(collectionPoint, eq(collectionPoint.id, collectionSlot.pointId))
-      .where(and(eq(collectionSlot.cuttingDayId, placeholder('dayId')), eq(collectionPoint.isActive, true)))
+      .where(
+        and(
+          eq(collectionSlot.cuttingDayId, placeholder('dayId')),
+          eq(collectionPoint.isActive, true),
+          eq(collectionPoint.kind, 'collection'),
+        ),
+      )
       .orderBy(asc(collectionPoint.name), asc(collectionSlot.startsAt))
       .prepare('shop_slots'),
   };

@@ -1,6 +1,8 @@
 import { z } from 'zod';
 import { isDay } from '#shared/domain/day.ts';
+import { formatPostcode, readPostcode } from '#shared/domain/delivery.ts';
 import { hasValidCheckDigit, normaliseEarTag } from '#shared/domain/ear-tag.ts';
+import { normaliseCode } from '#shared/domain/promo.ts';
 import { issueWords } from './issue-words.ts';
 
 // Every contract builds on this module, so that forms and server word a refusal alike.
@@ -44,6 +46,30 @@ export const Phone = z
   .trim()
   .max(30, 'This number is too long.')
   .regex(/^\+?[\d ()-]{7,30}$/, 'Give a telephone number, digits only.');
+
+/** A code as people type it; kept in capitals. */
+export const PromoText = z
+  .string()
+  .max(40, 'A code is shorter than this.')
+  .transform(normaliseCode)
+  .pipe(z.string().regex(/^[A-Z0-9]{3,20}$/, 'A code has three to twenty letters and figures.'));
+
+/** With or without its space, in any letters; kept as `ZZ1 1AA`. */
+export const PostcodeText = z
+  .string()
+  .max(20, 'A postcode is shorter than this.')
+  .transform((text, context) => {
+    const postcode = readPostcode(text);
+    if (postcode) return formatPostcode(postcode);
+    context.addIssue({ code: 'custom', message: 'Give a postcode such as ZZ1 1AA.' });
+    return z.NEVER;
+  });
+
+/** Where the van brings an order. */
+export const DeliveryAddress = z.strictObject({
+  addressLines: z.array(Line).min(1, 'Give the house and the street.').max(4, 'At most four lines.'),
+  postcode: PostcodeText,
+});
 
 export const EarTag = z.string().transform((text, context) => {
   const tag = normaliseEarTag(text);

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { ORDER_STATES, PAYMENT_STATES } from '#shared/domain/order-state.ts';
-import { Count, Day, Email, Id, Instant, Line, Note, Phone } from './fields-schema.ts';
+import { Count, Day, DeliveryAddress, Email, Id, Instant, Line, Note, Phone, PromoText } from './fields-schema.ts';
 
 export const BasketLine = z.strictObject({ offerId: Id, quantity: Count });
 export type BasketLine = z.infer<typeof BasketLine>;
@@ -41,7 +41,12 @@ export const Checkout = z.strictObject({
   basketKey: Id,
   dayId: Id,
   lines: BasketLines,
-  slotId: Id,
+  /** A collection time, unless the van brings it. */
+  slotId: Id.optional(),
+  delivery: DeliveryAddress.optional(),
+  promoCode: PromoText.optional(),
+  /** All of it now, or a deposit and the rest once it is packed. */
+  pay: z.enum(['in full', 'deposit']).optional(),
   name: Line,
   email: Email,
   phone: Phone,
@@ -94,6 +99,8 @@ export const Order = z.strictObject({
       swaps: z.array(z.strictObject({ offerId: Id, name: z.string(), summary: z.string(), free: z.int() })),
     }),
   ),
+  /** The promotional code that the order has. */
+  promoCode: z.string().nullable(),
   discountPence: z.int(),
   deliveryPence: z.int(),
   totalPence: z.int(),
@@ -102,6 +109,8 @@ export const Order = z.strictObject({
   addition: z
     .strictObject({ amountPence: z.int(), paymentUrl: z.string(), expiresAt: Instant, words: z.string() })
     .nullable(),
+  /** The van brings it: the place is the buyer's own address. */
+  isDelivered: z.boolean(),
   collection: z.strictObject({
     name: z.string(),
     addressLines: z.array(z.string()),

@@ -21,3 +21,12 @@ export function ratePerKg(pricePence: number, grams: number): number {
 
 /** The payment company charges a card with no less than this; a smaller difference is let go and written down. */
 export const SMALLEST_CHARGE_PENCE = 30;
+
+/** What one of a line's boxes or packs was paid with, its part of a discount off; the copies sum to the line exactly. */
+export function paidForCopy(
+  line: { quantity: number; unitPricePence: number; discountPence: number },
+  copy: number,
+): number {
+  const whole = line.quantity * line.unitPricePence - line.discountPence;
+  return Math.floor(whole / line.quantity) + (copy <= whole % line.quantity ? 1 : 0);
+}

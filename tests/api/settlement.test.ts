@@ -53,6 +53,24 @@ describe('a packed order', () => {
     expect(settled[0]?.subject).toContain(`£${(owed / 100).toFixed(2)}`);
   });
 
+  test('bought with a code, pays the lighter pack back from what was paid and not from the price', async () => {
+    const code = { code: 'HALF', percent: 50, amountPence: null, minimumPence: 0, lastDay: null };
+    const more = { usageLimit: null, isOncePerCustomer: false };
+    await world
+      .request(bench.owner)
+      .post('/api/office/promo-codes')
+      .send({ ...code, ...more });
+    const order = await makeConfirmedOrder(world, bench, { lines: loosePacks(1), promoCode: 'HALF' });
+    const { pricePence, upperGrams } = bench.looseOffer;
+    const paid = (pricePence ?? 0) - Math.round((pricePence ?? 0) / 2);
+    expect(order.totalPence).toBe(paid);
+    await bench.weigh(bench.looseCutId, [(upperGrams ?? 0) - 200]);
+    await bench.fill();
+    const owed = paid - Math.round((paid * ((upperGrams ?? 0) - 200)) / (upperGrams ?? 1));
+    expect(await refundsOf(order.id)).toMatchObject([{ reason: 'weights settled', amountPence: owed }]);
+    await world.runJobs();
+  });
+
   test('that weighs what was paid for, or more, moves no money and writes no mail', async () => {
     const order = await makeConfirmedOrder(world, bench, { lines: loosePacks(1) });
     const upper = bench.looseOffer.upperGrams ?? 0;

@@ -120,6 +120,8 @@ export function makeOrderView(over: Partial<Order> = {}): Order {
         swaps: [],
       },
     ],
+    promoCode: null,
+    isDelivered: false,
     discountPence: 0,
     deliveryPence: 0,
     totalPence: 10_240,

@@ -18,6 +18,9 @@ const facts: OrderFacts = {
     { name: 'Hearth', kind: 'box', quantity: 1, unitPricePence: 9_400, linePence: 9_400, unitGrams: 5_000 },
     { name: 'Rump steak', kind: 'loose', quantity: 2, unitPricePence: 1_300, linePence: 2_600, unitGrams: 650 },
   ],
+  discountPence: 0,
+  deliveryPence: 0,
+  isDelivered: false,
   totalPence: 12_000,
   collection: {
     name: 'The farm gate',
