@@ -17,6 +17,9 @@ export function PlanNotices({ plan }: { plan: Allocation }) {
           next="Work it out again."
         />
       ) : null}
+      {plan.cautions.map((caution) => (
+        <Notice key={caution} kind="held" title={caution} />
+      ))}
       {plan.unpriced.length > 0 ? (
         <Notice
           kind="held"

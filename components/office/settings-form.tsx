@@ -5,6 +5,7 @@ import { Button } from '#components/ui/button.tsx';
 import { FormCheckbox } from '#components/ui/form-checkbox.tsx';
 import { FormFrame } from '#components/ui/form-frame.tsx';
 import { FormNumber } from '#components/ui/form-number.tsx';
+import { FormSelect } from '#components/ui/form-select.tsx';
 import { Heading } from '#components/ui/heading.tsx';
 import { TextLink } from '#components/ui/text-link.tsx';
 import type { Settings } from '#shared/contracts/office.ts';
@@ -67,6 +68,34 @@ export function SettingsForm({ control, onSubmit, busy }: SettingsFormProps) {
         note="Ask your local authority or the official veterinarian what applies to your premises."
       />
       <FormNumber control={control} name="vertebralColumnMonths" unit="count" label="For cattle over" after="months" />
+      <FormCheckbox
+        control={control}
+        name="isVertebralColumnPremisesAuthorised"
+        label="The cutting premises are authorised to remove vertebral column"
+        note="Opens the bone-in ways of older cattle again. Tick it only with the authorisation in hand: the official veterinarian and the licensed premises say what may leave them."
+      />
+      <Heading level={2}>Mincing</Heading>
+      <FormSelect
+        control={control}
+        name="minceAgeEffect"
+        label="Meat that is older than the limit"
+        hint="Approved premises usually mince within six days of kill, or fifteen where beef was boned and vacuum-packed. Ask your local authority what applies to yours."
+        options={[
+          { value: 'none', label: 'Is minced; say nothing' },
+          { value: 'caution', label: 'Is minced; show the caution' },
+          { value: 'close', label: 'Is not minced' },
+        ]}
+      />
+      <View style={css('w-fields')}>
+        <FormNumber control={control} name="minceWithinDays" unit="count" label="Mince within" after="days of kill" />
+        <FormNumber
+          control={control}
+          name="minceBaggedWithinDays"
+          unit="count"
+          label="Hung in the bag, within"
+          after="days of kill"
+        />
+      </View>
       <View style={css('w-buttons')}>
         <Button label="Save the settings" busy={busy} onPress={onSubmit} />
       </View>

@@ -18,7 +18,7 @@ import {
   type AllocationRow,
   type ReservedLine,
 } from './allocation-queries.ts';
-import { askAbout, loadDayFacts } from './day-facts.ts';
+import { askAbout, judgeDayMince, loadDayFacts } from './day-facts.ts';
 import { describeAllocation, type AllocationFacts } from './describe-allocation.ts';
 import { publish } from './publish.ts';
 import { explainDay, promiseDay, solveDay, type SolveHow } from './solve-day.ts';
@@ -171,5 +171,6 @@ async function loadFacts(db: Db, dayId: string): Promise<AllocationFacts> {
     offers: await listOffers(db, dayId),
     reserved: await listConfirmedLines(db, dayId),
     money: await readDayMoney(db, figures),
+    minceCaution: judgeDayMince(figures, await readSettings(db, figures.day.day)).caution,
   };
 }

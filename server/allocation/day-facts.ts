@@ -1,6 +1,8 @@
 import type { Settings } from '#shared/contracts/office.ts';
 import type { AllocationQuestion } from '#shared/domain/allocation-record.ts';
 import type { WayLock } from '#shared/engine/allocation/allocation-input.ts';
+import { shortEarTag } from '#shared/domain/ear-tag.ts';
+import { judgeMince, type MinceVerdict } from '#shared/domain/mince-age.ts';
 import { defaultSpread, WEIGHED_SPREAD } from '#shared/engine/promise/spread.ts';
 import type { Spread } from '#shared/engine/promise/promise-types.ts';
 import { AppError } from '#shared/errors.ts';
@@ -58,9 +60,20 @@ export function askAbout(facts: DayFacts, { locks, asked = [] }: Wishes): Omit<A
     sides: figures.sides,
     specification: figures.specification,
     butcheryTenthPencePerKg: settings.butcheryTenthPencePerKg,
-    minceClosedReason: null,
+    minceClosedReason: judgeDayMince(figures, settings).closedReason,
   });
   return { input, spreads: spreadsOf(figures) };
+}
+
+/** What the premises' setting says of mincing the meat of this day. */
+export function judgeDayMince({ carcases }: DayCutouts, settings: Settings): MinceVerdict {
+  const { minceAgeEffect: effect, minceWithinDays: days, minceBaggedWithinDays: baggedDays } = settings;
+  const meat = carcases.map(({ row, facts }) => ({
+    name: shortEarTag(row.animal.earTag) || 'A supposed carcase',
+    daysFromKill: facts.hanging.days,
+    isBagged: facts.hanging.method === 'in the bag',
+  }));
+  return judgeMince({ effect, days, baggedDays }, meat);
 }
 
 /** A carcase that is cut and weighed line by line leaves nothing to guess. */

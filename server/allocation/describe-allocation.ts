@@ -15,6 +15,7 @@ export type AllocationFacts = {
   offers: readonly OfferRow[];
   reserved: readonly ReservedLine[];
   money: DayMoney;
+  minceCaution: string | null;
 };
 
 /** An allocation as the workbench shows it, with what is sold and held at this moment. */
@@ -41,6 +42,7 @@ export function describeAllocation(row: AllocationRow, facts: AllocationFacts): 
     contributionPence: margin.contributionPence,
     deadweightPence: margin.deadweightPence,
     gainPence: margin.gainPence,
+    cautions: [input.mince?.closedReason ?? [], facts.minceCaution ?? []].flat(),
     unpriced: facts.money.carcases.flatMap(({ problem }) => problem ?? []),
     coldGrams,
     productGrams: plan.cuts.reduce((sum, cut) => sum + cut.madeGrams, 0),

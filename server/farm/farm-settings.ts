@@ -1,4 +1,3 @@
-import { z } from 'zod';
 import type { Settings } from '#shared/contracts/office.ts';
 import { Settings as SettingsSchema } from '#shared/contracts/office-schema.ts';
 import type { Day } from '#shared/domain/day.ts';
@@ -15,6 +14,10 @@ const UNSET: Settings = {
   isReallocationAutomatic: false,
   vertebralColumnMonths: 30,
   isVertebralColumnRuleActive: true,
+  isVertebralColumnPremisesAuthorised: false,
+  minceAgeEffect: 'caution',
+  minceWithinDays: 6,
+  minceBaggedWithinDays: 15,
   killPence: 16_500,
   inspectionPence: 600,
   levyPence: 675,
@@ -25,7 +28,6 @@ const UNSET: Settings = {
 };
 
 const KEYS = Object.keys(UNSET) as (keyof Settings)[];
-const PREMISES_AUTHORISED = 'isVertebralColumnPremisesAuthorised';
 
 /** The settings in force on a day. */
 export async function readSettings(db: Db | Tx, on: Day): Promise<Settings> {
@@ -44,10 +46,9 @@ export async function writeSettings(db: Db | Tx, validFrom: Day, settings: Setti
 /** Whether ways that keep vertebral column are closed, by the rule in force on the day of kill. */
 export async function readVertebraeRule(db: Db | Tx, killDay: Day): Promise<VertebraeRule> {
   const settings = await readSettings(db, killDay);
-  const stored = await listSettings(db, [PREMISES_AUTHORISED], killDay);
   return {
     isActive: settings.isVertebralColumnRuleActive,
     months: settings.vertebralColumnMonths,
-    isPremisesAuthorised: z.boolean().parse(stored.get(PREMISES_AUTHORISED) ?? false),
+    isPremisesAuthorised: settings.isVertebralColumnPremisesAuthorised,
   };
 }

@@ -59,6 +59,8 @@ export const Allocation = z.strictObject({
   contributionPence: z.int(),
   deadweightPence: z.int(),
   gainPence: z.int(),
+  /** What the owner should know before mincing or selling: the usual limits, and whom to ask. */
+  cautions: z.array(z.string()),
   /** Why a carcase has no deadweight value. */
   unpriced: z.array(z.string()),
   coldGrams: z.int(),

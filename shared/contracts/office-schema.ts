@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { MINCE_EFFECTS } from '#shared/domain/mince-age.ts';
 import { ROLES } from '#shared/domain/roles.ts';
 import { Day, Grams, Id, Line, Pence, Rate, Version } from './fields-schema.ts';
 
@@ -84,6 +85,14 @@ export const Settings = z.strictObject({
   isReallocationAutomatic: z.boolean(),
   vertebralColumnMonths: z.int().min(1).max(120),
   isVertebralColumnRuleActive: z.boolean(),
+  /** The premises that cut are authorised to take vertebral column out: their ways that keep it are open again. */
+  isVertebralColumnPremisesAuthorised: z.boolean(),
+  /** What is done with meat that is older than the days below when it is to be minced. */
+  minceAgeEffect: z.enum(MINCE_EFFECTS),
+  /** Days from kill. */
+  minceWithinDays: z.int('Give whole days.').min(1).max(60),
+  /** The same for beef that was boned and hung in the bag. */
+  minceBaggedWithinDays: z.int('Give whole days.').min(1).max(60),
   killPence: Pence,
   inspectionPence: Pence,
   levyPence: Pence,

@@ -65,6 +65,7 @@ export function makeAllocation(more: Partial<Allocation> = {}): Allocation {
     contributionPence: 273_100,
     deadweightPence: 182_000,
     gainPence: 91_100,
+    cautions: [],
     unpriced: [],
     coldGrams: 640_000,
     productGrams: 448_000,
