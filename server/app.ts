@@ -31,6 +31,7 @@ import { addPromoRoutes } from './promo/promo-routes.ts';
 import { addShopRoutes } from './shop/shop-routes.ts';
 import { addSpecificationRoutes } from './specifications/specification-routes.ts';
 import { addTradeRoutes } from './trade/trade-routes.ts';
+import { addWaitingRoutes } from './waiting-list/waiting-routes.ts';
 
 export type App = { express: Express; api: Api };
 
@@ -67,6 +68,7 @@ export function createApp(deps: Deps, webRoot: string | null): App {
     addCollectionRoutes,
     addOfficeRoutes,
     addReceiptRoutes,
+    addWaitingRoutes,
     addFeedbackRoutes,
     addAccountRoutes,
     addUnsubscribeRoutes,

@@ -7,6 +7,7 @@ import { sendMail } from './mail/outbox.ts';
 import { inviteAgain, tellCutOffs } from './mail/reminders.ts';
 import { settleRefund, sweepHolds } from './payments/payment-service.ts';
 import type { Jobs } from './queue.ts';
+import { serveWaitingList } from './waiting-list/serve-waiting.ts';
 
 /** What the worker does for each kind of job; the tests run the same list. */
 export function taskList(deps: Deps): TaskList {
@@ -16,6 +17,7 @@ export function taskList(deps: Deps): TaskList {
     'replan-day': (payload) => replanDay(deps, (payload as Jobs['replan-day']).dayId),
     'explain-allocation': (payload) => explainAllocation(deps, (payload as Jobs['explain-allocation']).allocationId),
     'sweep-holds': () => sweepHolds(deps),
+    'serve-waiting-list': () => serveWaitingList(deps),
     'tell-cut-offs': () => tellCutOffs(deps),
     'invite-again': () => inviteAgain(deps),
     'prove-counters': async () => void (await proveCounters(deps)),
@@ -27,11 +29,13 @@ const logger = new Logger(() => (level, message) => {
 });
 
 /**
- * By the clock of UTC. Each minute the sweep asks the payment company about every hold whose page has run out; each
- * night what is held and sold of every offer is counted again; each morning customers are reminded and invited.
+ * By the clock of UTC. Each minute the sweep asks the payment company about every hold whose page has run out, and
+ * what came free goes to the waiting list; each night what is held and sold of every offer is counted again; each
+ * morning customers are reminded and invited.
  */
 const CRONTAB = [
   '* * * * * sweep-holds ?fill=2m',
+  '* * * * * serve-waiting-list',
   '30 3 * * * prove-counters',
   '0 9 * * * tell-cut-offs ?fill=8h',
   '15 9 * * * invite-again ?fill=8h',

@@ -4,6 +4,7 @@ import type { priceBasketSchema } from '#shared/contracts/orders-schema.ts';
 import { formatDay } from '#shared/domain/words.ts';
 import { AppError, type ErrorFigures, type FieldErrors } from '#shared/errors.ts';
 import type { Db, Deps, Tx } from '#server/deps.ts';
+import { findShare } from '#server/waiting-list/waiting-share.ts';
 import { findDay, listProducts } from './stock-queries.ts';
 
 export type Product = Pick<PricedLine, 'offerId' | 'kind' | 'name' | 'free' | 'unitPricePence' | 'unitGrams'>;
@@ -62,13 +63,17 @@ export async function getProducts(
 
 export async function priceOf(
   deps: Deps,
-  body: { dayId: string; lines: BasketLine[] },
+  body: { dayId: string; lines: BasketLine[]; waitingToken?: string | undefined },
 ): Promise<Answer<typeof priceBasketSchema>> {
   const day = await getDayOnSale(deps.db, body.dayId);
+  const kept = await findShare(deps, { token: body.waitingToken, dayId: day.id });
   const products = await getProducts(deps.db, day.id, body.lines);
   const lines = body.lines.flatMap(({ offerId, quantity }) => {
     const product = products.get(offerId);
-    return product ? [{ ...product, quantity, linePence: quantity * product.unitPricePence }] : [];
+    if (!product) return [];
+    // What is kept for this buyer alone is theirs to buy, though it is free for nobody else.
+    const free = product.free + (offerId === kept ? 1 : 0);
+    return [{ ...product, free, quantity, linePence: quantity * product.unitPricePence }];
   });
   return {
     dayId: day.id,

@@ -2,6 +2,7 @@ import { sql } from 'drizzle-orm';
 import { offer } from '#db/schema/allocations.ts';
 import { orderAddition, orderAdditionLine } from '#db/schema/order-additions.ts';
 import { collectionSlot, customerOrder, orderLine } from '#db/schema/orders.ts';
+import { waitingEntry } from '#db/schema/waiting-list.ts';
 import type { Db } from '#server/deps.ts';
 
 /** A counter and the sum of the rows that it counts, where the two disagree. */
@@ -17,7 +18,9 @@ export async function listCounterFaults(db: Db): Promise<CounterFault[]> {
         coalesce(sum(${orderLine.quantity}) filter (where ${customerOrder.isHeld}), 0)::int
           + (select coalesce(sum(${orderAdditionLine.quantity}), 0)::int from ${orderAdditionLine}
             join ${orderAddition} on ${orderAddition.id} = ${orderAdditionLine.additionId}
-            where ${orderAddition.state} = 'open' and ${orderAdditionLine.offerId} = ${offer.id}) as held_lines,
+            where ${orderAddition.state} = 'open' and ${orderAdditionLine.offerId} = ${offer.id})
+          + (select count(*)::int from ${waitingEntry}
+            where ${waitingEntry.state} = 'offered' and ${waitingEntry.offerId} = ${offer.id}) as held_lines,
         coalesce(sum(${orderLine.quantity}) filter (where ${isSold}), 0)::int as sold_lines
       from ${offer}
       left join ${orderLine} on ${orderLine.offerId} = ${offer.id}

@@ -8,6 +8,7 @@ import { getRound } from '#server/delivery/delivery-service.ts';
 import type { Deps, Tx } from '#server/deps.ts';
 import { findCodeOfOrder } from '#server/promo/promo-queries.ts';
 import { takePromo } from '#server/promo/promo-service.ts';
+import { claimShare } from '#server/waiting-list/waiting-share.ts';
 import { getDayOnSale, mergeLines } from './basket.ts';
 import { getSlotOfDay, take } from './hold.ts';
 import { listLines, replaceLines, updateOrder, type OrderRow } from './order-queries.ts';
@@ -48,7 +49,11 @@ type Holding = { order: OrderRow; basket: Checkout; place: Place };
 /** Takes what a basket asks for, all or none, and works out what it comes to. */
 export async function holdBasket(tx: Tx, deps: Deps, { order, basket, place }: Holding): Promise<OrderRow> {
   const { day, slotId, van } = place;
-  const lines = await take(tx, { day, lines: basket.lines, slotId }, 'held');
+  const kept = await claimShare(tx, deps, {
+    ...{ token: basket.waitingToken, dayId: day.id, orderId: order.id },
+    offerIds: basket.lines.map((line) => line.offerId),
+  });
+  const lines = await take(tx, { day, lines: basket.lines, slotId, kept }, 'held');
   const goodsPence = lines.reduce((sum, line) => sum + line.quantity * line.unitPricePence, 0);
   const { email, userId } = order;
   const code = basket.promoCode;

@@ -5,7 +5,13 @@ import type { Tx } from '#server/deps.ts';
 import { getProducts, mergeLines, outOfStock, type Product } from './basket.ts';
 import { findSlot, freeHeld, freeSlot, freeSold, sellHeld, takeFree, takeSlot } from './stock-queries.ts';
 
-export type HoldRequest = { day: { id: string; day: string }; lines: readonly BasketLine[]; slotId: string };
+export type HoldRequest = {
+  day: { id: string; day: string };
+  lines: readonly BasketLine[];
+  slotId: string;
+  /** What is held already for whoever asks: so many fewer of these offers are taken. */
+  kept?: ReadonlyMap<string, number>;
+};
 export type HeldLine = Product & { quantity: number };
 
 /** Takes every line and the slot, or throws and, with the transaction, takes nothing. */
@@ -25,7 +31,8 @@ export async function takeLines(
   const lines = mergeLines(request.lines);
   const taken = new Set<string>();
   for (const line of lines) {
-    if (!(await takeFree(tx, line, { dayId: day.id, into }))) break;
+    const quantity = line.quantity - (request.kept?.get(line.offerId) ?? 0);
+    if (quantity > 0 && !(await takeFree(tx, { ...line, quantity }, { dayId: day.id, into }))) break;
     taken.add(line.offerId);
   }
   const products = await getProducts(tx, day.id, request.lines);

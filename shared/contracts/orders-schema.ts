@@ -24,8 +24,11 @@ export const PricedLine = z.strictObject({
 });
 export type PricedLine = z.infer<typeof PricedLine>;
 
+/** From the mail of the waiting list: one box of the basket is kept for its holder. */
+const WaitingToken = z.string().regex(/^[A-Za-z0-9_-]{20,64}$/);
+
 export const priceBasketSchema = {
-  body: z.strictObject({ dayId: Id, lines: BasketLines }),
+  body: z.strictObject({ dayId: Id, lines: BasketLines, waitingToken: WaitingToken.optional() }),
   answer: z.strictObject({
     dayId: Id,
     day: Day,
@@ -53,6 +56,7 @@ export const Checkout = z.strictObject({
   note: Note,
   /** Ticked: marketing mail may be sent to this address. Asked for apart from the order and never ticked beforehand. */
   wantsNews: z.boolean().optional(),
+  waitingToken: WaitingToken.optional(),
 });
 export type Checkout = z.infer<typeof Checkout>;
 
