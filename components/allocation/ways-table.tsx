@@ -38,7 +38,8 @@ export function WaysTable({ side, onChoose }: WaysTableProps) {
   );
 }
 
-function wayWords(choice: PlannedChoice): string {
+/** `rib-eye`, or `sold whole to` whom. */
+export function wayWords(choice: PlannedChoice): string {
   if (choice.wayId === null) return choice.soldTo ? `sold whole to ${choice.soldTo}` : 'sold whole';
   return choice.ways.find((way) => way.wayId === choice.wayId)?.name ?? choice.wayId;
 }

@@ -8,6 +8,7 @@ import { marginOf, sumEntries } from '#shared/engine/margin/margin.ts';
 import type { DayCutouts } from '#server/carcases/day-figures.ts';
 import type { DayMoney } from '#server/margin/carcase-accounts.ts';
 import { planEntries } from '#server/margin/plan-margin.ts';
+import { groupBy } from '#server/farm/group-by.ts';
 import type { AllocationRow, OfferRow, ReservedLine } from './allocation-queries.ts';
 
 export type AllocationFacts = {
@@ -146,10 +147,24 @@ function describeChoice(row: AllocationRow, { side, choice, reserved }: ChoiceFa
     primalIds: choice.primals.map((primal) => primal.primalId),
     wayId: fate?.wayId ?? null,
     soldTo: reserved.find((line) => line.id === soldLine)?.businessName ?? null,
+    cuts: cutsOf(row, { choice, fate }),
     isLocked: row.locks.some(isHere),
     lockCostPence: row.plan.explanation?.locks.find(isHere)?.costPence ?? null,
     ways: choice.ways.map(({ wayId, name, closedReason }) => ({ wayId, name, closedReason })),
   };
+}
+
+type Fate = AllocationRow['plan']['plan']['fates'][number];
+
+function cutsOf(row: AllocationRow, { choice, fate }: { choice: ChoiceFacts['choice']; fate: Fate | undefined }) {
+  const gone = new Set(fate?.soldPrimals.map(({ primalId }) => primalId));
+  const way = choice.ways.find(({ wayId }) => wayId === fate?.wayId);
+  const kept = (way?.yields ?? []).filter(({ primalId }) => !gone.has(primalId));
+  return [...groupBy(kept, ({ cutId }) => cutId)].map(([cutId, yields]) => ({
+    cutId,
+    name: row.input.input.cuts.find(({ id }) => id === cutId)?.name ?? cutId,
+    grams: yields.reduce((sum, { grams }) => sum + grams, 0),
+  }));
 }
 
 function describeTrade(row: AllocationRow, reserved: readonly ReservedLine[]): Allocation['trade'] {

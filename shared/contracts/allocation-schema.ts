@@ -18,6 +18,8 @@ export const PlannedChoice = z.strictObject({
   wayId: z.string().nullable(),
   soldTo: z.string().nullable(),
   isLocked: z.boolean(),
+  /** What the planned way gives, without the primals that are sold whole. */
+  cuts: z.array(z.strictObject({ cutId: z.string(), name: z.string(), grams: z.int() })),
   /** What the lock costs: the optimum without it less the optimum with it. Null where no lock stands. */
   lockCostPence: z.int().nullable(),
   ways: z.array(

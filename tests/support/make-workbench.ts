@@ -26,6 +26,7 @@ export function makeSide(more: Partial<PlannedSide> = {}): PlannedSide {
         wayId: 'bone-in',
         soldTo: null,
         isLocked: true,
+        cuts: [{ cutId: 'rib-on-the-bone', name: 'Rib on the bone', grams: 8_400 }],
         lockCostPence: 1_860,
         ways: [
           { wayId: 'bone-in', name: 'On the bone', closedReason: null },
@@ -40,6 +41,7 @@ export function makeSide(more: Partial<PlannedSide> = {}): PlannedSide {
         wayId: null,
         soldTo: 'Pellow & Dray',
         isLocked: false,
+        cuts: [],
         lockCostPence: null,
         ways: [{ wayId: 'rolled', name: 'Rolled', closedReason: null }],
       },

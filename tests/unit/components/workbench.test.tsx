@@ -13,6 +13,7 @@ import {
   perColdKg,
   signedMoney,
 } from '#components/allocation/plan-words.ts';
+import { listRows } from '#components/allocation/printed-list.tsx';
 import { WayPanel } from '#components/allocation/way-panel.tsx';
 import { CARCASE, makeAllocation, makeSide } from '#tests/support/make-workbench.ts';
 
@@ -153,5 +154,14 @@ describe('the plan in words and figures', () => {
     expect(rows.has('Mince, loose')).toBe(false);
     expect(compareRows(null, makeAllocation(), true).find((row) => row.name === 'Hearth')?.now).toBe('35');
     expect(compareRows(null, makeAllocation())[0]).toMatchObject({ before: '–', difference: '–' });
+  });
+});
+
+describe('the printed cutting list', () => {
+  it('has a row for each cut with its way, and one for a primal that leaves whole', () => {
+    expect(listRows(makeSide())).toEqual([
+      { id: 'fore-rib rib-on-the-bone', primal: 'Fore rib', way: 'On the bone', cut: 'Rib on the bone', grams: 8_400 },
+      { id: 'brisket', primal: 'Brisket', way: 'sold whole to Pellow & Dray', cut: 'leaves whole', grams: 0 },
+    ]);
   });
 });

@@ -6,6 +6,7 @@ import { areSameLocks, narrowMembers, type Members } from '#components/allocatio
 import { describeOutlets } from '#components/allocation/outlets.tsx';
 import { PlanView } from '#components/allocation/plan-view.tsx';
 import { boxesOnSale, describePlan } from '#components/allocation/plan-words.ts';
+import { PrintedList } from '#components/allocation/printed-list.tsx';
 import { PublishSheet } from '#components/allocation/publish-sheet.tsx';
 import { TimeLimit } from '#components/allocation/time-limit.tsx';
 import { DayPlaces } from '#components/office/day-places.tsx';
@@ -82,60 +83,63 @@ function Workbench({ dayId, day, carcases, latest, published, members }: Workben
     : day && `Cutting day ${formatDay(day)} · ${formatCount(carcases, 'carcase')}`;
   return (
     <View style={css('w-stack-l')}>
-      <TitleBar
-        title="Allocation"
-        above={above}
-        actions={
-          <>
-            {latest ? workOut : null}
-            {latest && mayPublish ? (
-              <Button
-                label={`Publish ${formatCount(boxesOnSale(latest), 'box', 'boxes')}`}
-                onPress={() => setPublishing(true)}
-              />
-            ) : null}
-          </>
-        }
-      />
-      <DayPlaces dayId={dayId} role="owner" path={path} />
-      <JobPanel {...bench.plan} onCancel={bench.plan.cancel} />
-      {isUnsaved && !bench.plan.isWorking ? (
-        <Notice kind="held" spoken title="The locks have changed." next="Work it out again to see what they cost." />
-      ) : null}
-      {bench.hasPublished && latest?.state === 'published' ? (
-        <Notice kind="good" spoken title={`On sale now: ${describeOutlets(latest)}.`} />
-      ) : null}
-      {latest ? (
-        <PlanView
-          plan={latest}
-          members={members}
-          chosen={bench.chosen}
-          onChoose={bench.setChosen}
-          locks={bench.locks}
-          onLocks={bench.setLocks}
-          before={bench.before}
-          links={<PlanLinks dayId={dayId} plan={latest} />}
+      {latest ? <PrintedList plan={latest} /> : null}
+      <View style={css('w-stack-l', 'w-no-print')}>
+        <TitleBar
+          title="Allocation"
+          above={above}
+          actions={
+            <>
+              {latest ? workOut : null}
+              {latest && mayPublish ? (
+                <Button
+                  label={`Publish ${formatCount(boxesOnSale(latest), 'box', 'boxes')}`}
+                  onPress={() => setPublishing(true)}
+                />
+              ) : null}
+            </>
+          }
         />
-      ) : (
-        <EmptyState
-          title="Not allocated yet"
-          words="The plan finds how each primal is best cut, how many boxes of each kind that gives, and what goes to butchers, loose packs and mince."
-        >
-          {workOut}
-        </EmptyState>
-      )}
-      <TimeLimit seconds={bench.seconds} onChange={bench.setSeconds} />
-      {latest ? (
-        <PublishSheet
-          open={isPublishing}
-          plan={latest}
-          published={published}
-          busy={bench.publish.isPending}
-          error={bench.publish.error}
-          onPublish={() => void bench.putOnSale(latest).then((isDone) => setPublishing(!isDone))}
-          onClose={() => setPublishing(false)}
-        />
-      ) : null}
+        <DayPlaces dayId={dayId} role="owner" path={path} />
+        <JobPanel {...bench.plan} onCancel={bench.plan.cancel} />
+        {isUnsaved && !bench.plan.isWorking ? (
+          <Notice kind="held" spoken title="The locks have changed." next="Work it out again to see what they cost." />
+        ) : null}
+        {bench.hasPublished && latest?.state === 'published' ? (
+          <Notice kind="good" spoken title={`On sale now: ${describeOutlets(latest)}.`} />
+        ) : null}
+        {latest ? (
+          <PlanView
+            plan={latest}
+            members={members}
+            chosen={bench.chosen}
+            onChoose={bench.setChosen}
+            locks={bench.locks}
+            onLocks={bench.setLocks}
+            before={bench.before}
+            links={<PlanLinks dayId={dayId} plan={latest} />}
+          />
+        ) : (
+          <EmptyState
+            title="Not allocated yet"
+            words="The plan finds how each primal is best cut, how many boxes of each kind that gives, and what goes to butchers, loose packs and mince."
+          >
+            {workOut}
+          </EmptyState>
+        )}
+        <TimeLimit seconds={bench.seconds} onChange={bench.setSeconds} />
+        {latest ? (
+          <PublishSheet
+            open={isPublishing}
+            plan={latest}
+            published={published}
+            busy={bench.publish.isPending}
+            error={bench.publish.error}
+            onPublish={() => void bench.putOnSale(latest).then((isDone) => setPublishing(!isDone))}
+            onClose={() => setPublishing(false)}
+          />
+        ) : null}
+      </View>
     </View>
   );
 }
@@ -152,6 +156,9 @@ function PlanLinks({ dayId, plan }: { dayId: string; plan: Allocation }) {
       <TextLink href={allocationModelHref(plan.id)} outside place="alone">
         Save the model as a file
       </TextLink>
+      <View style={css('w-row')}>
+        <Button kind="quiet" small label="Print the cutting list" onPress={() => window.print()} />
+      </View>
     </>
   );
 }
