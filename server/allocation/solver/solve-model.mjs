@@ -1,3 +1,5 @@
+import { searchSums } from './search-sums.mjs';
+
 /**
  * Solves models in CPLEX LP text with HiGHS. Plain JavaScript, so that Node loads it in a worker thread without a
  * loader, whoever the parent is: node, tsx or vitest.
@@ -65,21 +67,29 @@ function readSolution(highs, model, about) {
   };
 }
 
+/** Reports at most a few times a second. */
+function atIntervals(report) {
+  let reportedAt = -Infinity;
+  return (progress) => {
+    const now = performance.now();
+    if (!report || now - reportedAt < PROGRESS_MILLISECONDS) return;
+    reportedAt = now;
+    report(progress());
+  };
+}
+
 function progressCallbacks(highs, report) {
   if (!report) return undefined;
-  let reportedAt = -Infinity;
+  const atTimes = atIntervals(report);
   return {
-    [highs.constants.callbackType.mipInterrupt](event) {
-      const now = performance.now();
-      if (now - reportedAt < PROGRESS_MILLISECONDS) return;
-      reportedAt = now;
-      const best = event.data.mip_primal_bound;
-      report({
-        milliseconds: Math.round((event.data.running_time ?? 0) * 1000),
-        nodes: Number(event.data.mip_node_count ?? 0),
+    [highs.constants.callbackType.mipInterrupt]({ data }) {
+      const best = data.mip_primal_bound;
+      atTimes(() => ({
+        milliseconds: Math.round((data.running_time ?? 0) * 1000),
+        nodes: Number(data.mip_node_count ?? 0),
         best: best !== undefined && Math.abs(best) < 1e29 ? best : null,
-        bound: event.data.mip_dual_bound ?? 0,
-      });
+        bound: data.mip_dual_bound ?? 0,
+      }));
     },
   };
 }
@@ -89,11 +99,49 @@ function setStart(model, names, start) {
   model.setSolution({ colValue: Float64Array.from(names, (name) => start[name] ?? 0) });
 }
 
+/** The same question by a search that branches on sums of columns first: see `searchSums`. */
+function solveBySums(highs, { model, names, startedAt }, { options, report }) {
+  const places = new Map(names.map((name, index) => [name, index]));
+  const sign = model.getObjectiveSense() === highs.constants.objectiveSense.maximize ? 1 : -1;
+  const gap = options.gap ?? DEFAULT_GAP;
+  const limit = (options.timeLimitSeconds ?? DEFAULT_TIME_LIMIT_SECONDS) * 1000;
+  const milliseconds = () => Math.round(performance.now() - startedAt);
+  const turned = (key) => (Number.isFinite(key) ? sign * key : null);
+  const atTimes = atIntervals(report);
+  const { best, bound, nodes, isStopped } = searchSums(highs, model, {
+    sums: options.sumsFirst.map((columns) => columns.flatMap((name) => places.get(name) ?? [])),
+    sign,
+    gap,
+    isOver: (count) => milliseconds() > limit || count > (options.nodeLimit ?? Infinity),
+    report: (at) =>
+      atTimes(() => ({
+        milliseconds: milliseconds(),
+        nodes: at.nodes,
+        best: turned(at.best),
+        bound: turned(at.bound) ?? 0,
+      })),
+  });
+  const proven = best ? Math.max(0, bound - best.key) / Math.max(1, Math.abs(best.key)) : 1;
+  const isSettled = best ? proven <= gap * (1 + 1e-9) : !isStopped && bound === -Infinity;
+  return {
+    status: isSettled ? (best ? 'optimal' : 'infeasible') : 'limit',
+    hasAnswer: best !== null,
+    objective: best ? sign * best.key : 0,
+    gap: proven,
+    columns: Object.fromEntries(Array.from(best?.columns ?? [], (value, index) => [names[index], value])),
+    nodes,
+    milliseconds: milliseconds(),
+  };
+}
+
 export function solveModel(highs, task, report) {
   const startedAt = performance.now();
   const { model, names } = readModel(highs, task.lpText);
   try {
     setOptions(model, task.options);
+    if (task.options.sumsFirst && hasIntegers(task.lpText)) {
+      return solveBySums(highs, { model, names, startedAt }, { options: task.options, report });
+    }
     if (task.options.start) setStart(model, names, task.options.start);
     run(highs, model, progressCallbacks(highs, report));
     return readSolution(highs, model, { startedAt, names, isInteger: hasIntegers(task.lpText) });

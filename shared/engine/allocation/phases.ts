@@ -4,13 +4,12 @@ import type { Solution, SolveOptions, SolveProgress, Solver } from '#shared/engi
 import type { Priority } from './allocation-input.ts';
 import type { AllocationModel } from './allocation-model.ts';
 import { PRIORITIES, shortTerms } from './build-model.ts';
-import { gapBelow, isLarge, nearRows } from './near-optimum.ts';
+import { leadingSums } from './leading-sums.ts';
 import { relativeGap, type AllocateOptions, type PlanPhase } from './plan-progress.ts';
 
 /** Pence by which an earlier optimum may be missed later: below any price, above a solver's tolerance. */
 export const SHORT_TOLERANCE = 0.01;
 const LEAST_SECONDS = 1;
-const DEFAULT_GAP = 0.0001;
 
 export type Solved = { solution: Solution; lpText: string };
 /** One model on its way to an answer: earlier optima and boxes taken off are rows of its text. */
@@ -52,32 +51,9 @@ function rowsOf(session: Session, about: WriteOptions): Row[] {
   return [...(about.extraRows ?? []), ...session.fixed, ...session.caps.values()];
 }
 
-export async function solve(session: Session, about: WriteOptions): Promise<Solved> {
+export async function solve(session: Session, about: WriteOptions, options: SolveOptions = {}): Promise<Solved> {
   const lpText = session.model.lp.write({ ...about, extraRows: rowsOf(session, about) });
-  return { solution: await ask(session, lpText), lpText };
-}
-
-/**
- * The same for many sides: no answer is above the relaxed optimum, and with most ways kept as it has them a search of a
- * moment comes within the gap of it. Only when it does not is the whole model searched, from the best answer so far.
- */
-async function solveLarge(session: Session, about: WriteOptions): Promise<Solved> {
-  const extraRows = rowsOf(session, about);
-  const { lp } = session.model;
-  const lpText = lp.write({ ...about, extraRows });
-  const relaxed = await ask(session, lp.write({ ...about, extraRows, isRelaxed: true }));
-  if (!relaxed.hasAnswer) return { solution: await ask(session, lpText), lpText };
-  const gap = session.options.gap ?? DEFAULT_GAP;
-  let best: Solution | null = null;
-  for (const around of ['column', 'side'] as const) {
-    const near = lp.write({ ...about, extraRows: [...extraRows, ...nearRows(session.model, relaxed, around)] });
-    const start = best ? { start: best.columns } : {};
-    const solution = await ask(session, near, { gap: gap / 4, ...start });
-    if (solution.hasAnswer && (!best || solution.objective > best.objective)) best = solution;
-    const proven = best ? gapBelow(relaxed.objective, best) : Infinity;
-    if (best && proven <= gap) return { solution: { ...best, status: 'optimal', gap: proven }, lpText };
-  }
-  return { solution: await ask(session, lpText, best ? { start: best.columns } : {}), lpText };
+  return { solution: await ask(session, lpText, options), lpText };
 }
 
 export function isProof(session: Session, solution: Solution): boolean {
@@ -121,12 +97,13 @@ export async function solvePhases(session: Session, hoped: ReadonlyMap<Priority,
     const terms = shortTerms(session.model, priority);
     return terms.length > 0 ? [shortRow(priority, terms, hoped.get(priority) ?? 0)] : [];
   });
-  const solveLast = isLarge(session.model) ? solveLarge : solve;
-  const hopeful = await solveLast(session, { title: TITLE, extraRows: rows });
+  // Later models have their ways settled: what is left in them is packs.
+  const options = session.phase === 'packs' ? {} : { sumsFirst: leadingSums(session.model) };
+  const hopeful = await solve(session, { title: TITLE, extraRows: rows }, options);
   if (hopeful.solution.hasAnswer) {
     session.fixed.push(...rows);
     return hopeful;
   }
   await fixShortfalls(session);
-  return await solveLast(session, { title: TITLE });
+  return await solve(session, { title: TITLE }, options);
 }

@@ -22,6 +22,11 @@ export type SolveOptions = {
   nodeLimit?: number;
   /** A known answer to begin from, by column; columns that it does not name begin at zero. */
   start?: Readonly<Record<string, number>>;
+  /**
+   * Sums of whole-number columns, branched on before the columns themselves. Where many columns are nearly alike, such as
+   * one way of every side, how many of them are taken settles the answer far sooner than which.
+   */
+  sumsFirst?: readonly (readonly string[])[];
   onProgress?: (progress: SolveProgress) => void;
   signal?: AbortSignal;
 };
