@@ -71,4 +71,24 @@ describe('the public pages, in a browser', () => {
       expect(overflow, 'pixels that the page is wider than the phone').toBeLessThanOrEqual(0);
     },
   );
+
+  // The router reads every layout when it starts, so the frames of office and trade come along; their screens must not.
+  const FOREIGN = ['/api/carcases', '/api/animals', 'Cutting note', '/api/auth', 'ZodError', 'shouldUnregister'];
+
+  test.each(['/', '/boxes/hearth', '/cuts'])(
+    '%s, until something is typed, loads no code of forms or of other areas',
+    async (path) => {
+      const page = await shop.openPage(PHONE);
+      const scripts: Promise<string>[] = [];
+      page.on('response', (response) => {
+        if (response.request().resourceType() !== 'script') return;
+        // One that is still on its way when the page closes has not been loaded for it.
+        scripts.push(response.text().catch(() => ''));
+      });
+      await page.goto(path, { waitUntil: 'networkidle' });
+      const code = (await Promise.all(scripts)).join('');
+      expect(code.length).toBeGreaterThan(0);
+      expect(FOREIGN.filter((mark) => code.includes(mark))).toEqual([]);
+    },
+  );
 });

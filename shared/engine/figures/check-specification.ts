@@ -1,3 +1,4 @@
+import { formatPercent } from '#shared/domain/words.ts';
 import { EngineError } from '#shared/engine/engine-error.ts';
 import { totalTissues } from './reference-tissues.ts';
 import type { Choice, Specification, Way } from './specification.ts';
@@ -14,11 +15,9 @@ export type SpecificationFault = {
   expectedPpht: number | null;
 };
 
-const percent = (ppht: number) => `${(ppht / 1000).toFixed(3).replace(/\.?0+$/, '')} %`;
-
 function sumFault(node: string, name: string, [sum, expected]: [number, number]): SpecificationFault[] {
   if (sum === expected) return [];
-  const sentence = `${name} adds up to ${percent(sum)}, not to ${percent(expected)}.`;
+  const sentence = `${name} adds up to ${formatPercent(sum)}, not to ${formatPercent(expected)}.`;
   return [{ node, sentence, sumPpht: sum, expectedPpht: expected }];
 }
 
