@@ -5,10 +5,14 @@
 export { zodResolver } from '@hookform/resolvers/zod';
 export * as account from '#shared/contracts/account-schema.ts';
 export * as carcases from '#shared/contracts/carcases-schema.ts';
+export * as checkout from '#shared/contracts/checkout-form-schema.ts';
+export * as delivery from '#shared/contracts/delivery-schema.ts';
 export * as herd from '#shared/contracts/herd-schema.ts';
 export * as margin from '#shared/contracts/margin-schema.ts';
 export * as office from '#shared/contracts/office-schema.ts';
 export * as orders from '#shared/contracts/orders-schema.ts';
 export * as packs from '#shared/contracts/packs-schema.ts';
+export * as promo from '#shared/contracts/promo-schema.ts';
 export * as planJobs from '#shared/contracts/plan-jobs-schema.ts';
+export * as specifications from '#shared/contracts/specifications-schema.ts';
 export * as trade from '#shared/contracts/trade-schema.ts';

@@ -1,20 +1,19 @@
 import { useEffect, useRef, useState, type ReactNode } from 'react';
-import { Controller, useForm, type FieldErrors, type Resolver, type UseFormReturn } from 'react-hook-form';
+import { Controller, useForm, useWatch, type FieldErrors, type Resolver } from 'react-hook-form';
 import { View } from 'react-native';
-import type { Checkout } from '#shared/contracts/orders.ts';
+import type { CheckoutForm as CheckoutFields } from '#shared/contracts/checkout-form-schema.ts';
 import type { CollectionPoint } from '#shared/contracts/shop.ts';
 import type { FieldErrors as ServerFields } from '#shared/errors.ts';
 import { CONSENT_VERSION, consentWords } from '#shared/domain/consent.ts';
 import { css } from '#components/theme/css.ts';
 import { Button } from '#components/ui/button.tsx';
-import { Field } from '#components/ui/field.tsx';
 import { FormCheckbox } from '#components/ui/form-checkbox.tsx';
 import { Heading } from '#components/ui/heading.tsx';
 import { Notice } from '#components/ui/notice.tsx';
+import { RadioGroup } from '#components/ui/radio-group.tsx';
+import { AddressFields, type VanAnswer } from './address-fields.tsx';
+import { PersonFields } from './person-fields.tsx';
 import { SlotPicker } from './slot-picker.tsx';
-
-/** What the person fills in; key, day and lines come from the basket. */
-export type CheckoutFields = Pick<Checkout, 'slotId' | 'name' | 'email' | 'phone' | 'note' | 'wantsNews'>;
 
 type CheckoutFormProps = {
   points: readonly CollectionPoint[];
@@ -30,9 +29,27 @@ type CheckoutFormProps = {
   /** The farm's refusal: a sentence, and what belongs beside fields. */
   refusal: { message: string; fields: ServerFields } | undefined;
   onSubmit: (fields: CheckoutFields) => void;
+  /** The van, where the farm has one: its word on the postcode that stands in the field. */
+  van?: { answer: VanAnswer | undefined; onPostcode: (postcode: string) => void } | undefined;
+  /** Told what is chosen, since the sum depends on it. */
+  onChoice?: (choice: Pick<CheckoutFields, 'way' | 'pay'>) => void;
+  /** How much a deposit would be, where one can be paid. */
+  depositWords?: string | undefined;
 };
 
-const NAMES = ['slotId', 'name', 'email', 'phone', 'note'] as const;
+const EMPTY: CheckoutFields = {
+  ...{ way: 'collect', slotId: '', street: '', town: '', postcode: '' },
+  ...{ name: '', email: '', phone: '', note: '', wantsNews: false, pay: 'in full' },
+};
+
+const NAMES = ['slotId', 'postcode', 'street', 'name', 'email', 'phone', 'note'] as const;
+
+const WAYS = [
+  { value: 'collect', label: 'I collect it' },
+  { value: 'deliver', label: 'Bring it to me', note: 'By our van, where it comes.' },
+];
+
+const PAY_IN_FULL = { value: 'in full', label: 'All of it' };
 
 /** Place, time, name, e-mail, phone: one screen, filled in by the browser where it can. */
 export function CheckoutForm(props: CheckoutFormProps) {
@@ -41,11 +58,16 @@ export function CheckoutForm(props: CheckoutFormProps) {
     resolver: props.resolver,
     mode: 'onTouched',
     shouldFocusError: false,
-    defaultValues: { slotId: '', name: '', email: '', phone: '', note: '', wantsNews: false, ...props.known },
+    defaultValues: { ...EMPTY, ...props.known },
   });
   const [pointId, setPointId] = useState(points.length === 1 ? points[0]?.id : undefined);
   const slots = useRef<HTMLDivElement>(null);
   const { setError, setValue, getFieldState } = form;
+  const [way, pay] = useWatch({ control: form.control, name: ['way', 'pay'] });
+  const { onChoice } = props;
+  useEffect(() => onChoice?.({ way, pay }), [onChoice, way, pay]);
+  const chooseWay = (value: string) => setValue('way', value === 'deliver' ? 'deliver' : 'collect');
+  const choosePay = (value: string) => setValue('pay', value === 'deposit' ? 'deposit' : 'in full');
 
   useEffect(() => {
     for (const name of NAMES) {
@@ -73,30 +95,50 @@ export function CheckoutForm(props: CheckoutFormProps) {
   return (
     <form className="w-form" noValidate onSubmit={(event) => event.preventDefault()}>
       <div className="w-section" ref={slots}>
-        <Heading level={2}>Collecting it</Heading>
-        <Controller
-          control={form.control}
-          name="slotId"
-          render={({ field, fieldState }) => (
-            <SlotPicker
-              points={points}
-              pointId={pointId}
-              onPoint={(id) => {
-                setPointId(id);
-                field.onChange('');
-                form.clearErrors('slotId');
-              }}
-              slotId={field.value}
-              onSlot={(id) => {
-                field.onChange(id);
-                form.clearErrors('slotId');
-              }}
-              error={fieldState.error ? slotWords(fieldState.error.message, field.value) : undefined}
-            />
-          )}
-        />
+        <Heading level={2}>{way === 'deliver' ? 'Bringing it' : 'Collecting it'}</Heading>
+        {props.van ? (
+          <RadioGroup label="Collect it, or have it brought?" value={way} choices={WAYS} onChange={chooseWay} />
+        ) : null}
+        {way === 'deliver' && props.van ? (
+          <AddressFields
+            control={form.control}
+            onPostcode={props.van.onPostcode}
+            answer={props.van.answer}
+            onCollect={() => chooseWay('collect')}
+          />
+        ) : (
+          <Controller
+            control={form.control}
+            name="slotId"
+            render={({ field, fieldState }) => (
+              <SlotPicker
+                points={points}
+                pointId={pointId}
+                onPoint={(id) => {
+                  setPointId(id);
+                  field.onChange('');
+                  form.clearErrors('slotId');
+                }}
+                slotId={field.value}
+                onSlot={(id) => {
+                  field.onChange(id);
+                  form.clearErrors('slotId');
+                }}
+                error={fieldState.error?.message}
+              />
+            )}
+          />
+        )}
       </div>
-      <PersonFields form={form} onEnter={submit} />
+      <PersonFields control={form.control} onEnter={submit} />
+      {props.depositWords ? (
+        <RadioGroup
+          label="Pay all of it now, or a deposit?"
+          value={pay}
+          choices={[PAY_IN_FULL, { value: 'deposit', label: 'A deposit', note: props.depositWords }]}
+          onChange={choosePay}
+        />
+      ) : null}
       {props.asksNews === false ? null : (
         <FormCheckbox
           control={form.control}
@@ -111,62 +153,5 @@ export function CheckoutForm(props: CheckoutFormProps) {
         <Button wide label={props.buttonLabel} busy={isSending} busyLabel="Keeping it for you …" onPress={submit} />
       </View>
     </form>
-  );
-}
-
-/** The contract speaks of numbers; a person has simply not chosen yet. */
-function slotWords(message: string | undefined, slotId: string): string | undefined {
-  return slotId === '' ? 'Choose a place and a time.' : message;
-}
-
-type PersonFieldsProps = { form: UseFormReturn<CheckoutFields>; onEnter: () => void };
-
-function PersonFields({ form, onEnter }: PersonFieldsProps) {
-  const fields = [
-    { name: 'name', label: 'Name', autoComplete: 'name', inputMode: 'text', autoCapitalize: 'words' },
-    {
-      name: 'email',
-      label: 'E-mail',
-      autoComplete: 'email',
-      inputMode: 'email',
-      hint: 'For the confirmation and the link to your order.',
-    },
-    {
-      name: 'phone',
-      label: 'Phone',
-      autoComplete: 'tel',
-      inputMode: 'tel',
-      hint: 'Only if something about your collection changes.',
-    },
-    { name: 'note', label: 'A note for the packer', autoComplete: 'off', inputMode: 'text', optional: true },
-  ] as const;
-  return (
-    <View style={css('w-section')}>
-      <Heading level={2}>About you</Heading>
-      {fields.map((about) => (
-        <Controller
-          key={about.name}
-          control={form.control}
-          name={about.name}
-          render={({ field, fieldState }) => (
-            <Field
-              ref={field.ref}
-              label={about.label}
-              hint={'hint' in about ? about.hint : undefined}
-              optional={'optional' in about}
-              multiline={about.name === 'note'}
-              autoComplete={about.autoComplete}
-              inputMode={about.inputMode}
-              {...('autoCapitalize' in about ? { autoCapitalize: about.autoCapitalize } : {})}
-              value={field.value}
-              onChangeText={field.onChange}
-              onBlur={field.onBlur}
-              {...(about.name === 'note' ? {} : { onSubmitEditing: onEnter })}
-              error={fieldState.error?.message}
-            />
-          )}
-        />
-      ))}
-    </View>
   );
 }

@@ -8,10 +8,17 @@ import { Heading } from '#components/ui/heading.tsx';
 import { Text } from '#components/ui/text.tsx';
 import { TextLink } from '#components/ui/text-link.tsx';
 
-type CheckoutTermsProps = { day: CuttingDaySummary; lines: readonly PricedLine[]; totalPence: number };
+type CheckoutTermsProps = {
+  day: CuttingDaySummary;
+  lines: readonly PricedLine[];
+  discountPence: number;
+  /** Null while it is not known whether the van comes. */
+  deliveryPence: number | null;
+  totalPence: number;
+};
 
 /** What is bought, for how much, and on which terms: read before paying. */
-export function CheckoutTerms({ day, lines, totalPence }: CheckoutTermsProps) {
+export function CheckoutTerms({ day, lines, discountPence, deliveryPence, totalPence }: CheckoutTermsProps) {
   return (
     <View style={css('w-section')}>
       <View style={css('w-row-between')}>
@@ -28,6 +35,8 @@ export function CheckoutTerms({ day, lines, totalPence }: CheckoutTermsProps) {
             note: `${line.kind === 'box' ? 'at least' : 'up to'} ${formatWeight(line.unitGrams)}${line.quantity > 1 ? ' each' : ''}`,
             value: formatMoney(line.linePence),
           })),
+          ...(discountPence > 0 ? [{ term: 'Your code', value: formatMoney(-discountPence) }] : []),
+          ...(deliveryPence === null ? [] : [{ term: 'Delivery', value: formatMoney(deliveryPence) }]),
           { term: 'Total', value: formatMoney(totalPence), strong: true },
         ]}
       />
@@ -36,12 +45,17 @@ export function CheckoutTerms({ day, lines, totalPence }: CheckoutTermsProps) {
 }
 
 /** What the button agrees to. */
-export function TermsWords({ day }: { day: CuttingDaySummary }) {
+export function TermsWords({ day, restPence }: { day: CuttingDaySummary; restPence: number }) {
   return (
     <View style={css('w-stack-s')}>
       <Text size="small" tone="quiet">
         {`You pay on the next page, by card. You can change or cancel until ${formatDayTime(day.cutOffAt)} and get all of your money back; after that the meat is cut for you.`}
       </Text>
+      {restPence > 0 ? (
+        <Text size="small" tone="quiet">
+          {`The rest, at most ${formatMoney(restPence)}, is taken from the same card once your order is packed and weighed; lighter packs make it less. If the card refuses, you get a link to pay by e-mail.`}
+        </Text>
+      ) : null}
       <Text size="small" tone="quiet">
         Fresh meat spoils quickly, so the fourteen days to send back what was bought online do not apply. A box that
         weighs less than promised and a loose pack lighter than its price are paid back by themselves.

@@ -1,6 +1,7 @@
 import { and, asc, eq, gte, inArray, sql } from 'drizzle-orm';
 import { allocation, offer } from '#db/schema/allocations.ts';
 import { carcase, cuttingDay, cuttingSpecification } from '#db/schema/carcases.ts';
+import { deliveryArea } from '#db/schema/delivery.ts';
 import { farm } from '#db/schema/farm.ts';
 import type { AllocationAnswer, AllocationQuestion } from '#shared/domain/allocation-record.ts';
 import { animal } from '#db/schema/herd.ts';
@@ -94,6 +95,12 @@ function prepareCatalogue(db: Db) {
       .where(and(eq(tradeAccount.state, 'approved'), inArray(reservation.state, ['confirmed', 'dispatched'])))
       .orderBy(asc(tradeAccount.businessName))
       .prepare('shop_butchers'),
+  };
+}
+
+/** Where and when orders are handed over. */
+function preparePlaces(db: Db) {
+  return {
     slots: db
       .select({
         id: collectionSlot.id,
@@ -117,11 +124,17 @@ function prepareCatalogue(db: Db) {
       )
       .orderBy(asc(collectionPoint.name), asc(collectionSlot.startsAt))
       .prepare('shop_slots'),
+    vans: db
+      .select({ id: deliveryArea.id })
+      .from(deliveryArea)
+      .where(eq(deliveryArea.isActive, true))
+      .limit(1)
+      .prepare('shop_vans'),
   };
 }
 
 function prepareAll(db: Db) {
-  return { ...prepareSale(db), ...prepareCatalogue(db) };
+  return { ...prepareSale(db), ...prepareCatalogue(db), ...preparePlaces(db) };
 }
 
 export type ShopQueries = ReturnType<typeof prepareAll>;

@@ -171,9 +171,13 @@ export async function readCuts(deps: Deps): Promise<{ days: CuttingDaySummary[];
 }
 
 /** Collection points of a day with the times that are still to come. */
-export async function readCollections(deps: Deps, dayId: string): Promise<{ points: CollectionPoint[] }> {
+export async function readCollections(
+  deps: Deps,
+  dayId: string,
+): Promise<{ points: CollectionPoint[]; hasVan: boolean }> {
   const now = deps.clock.now();
-  const slots = await shopQueries(deps.db).slots.execute({ dayId });
+  const queries = shopQueries(deps.db);
+  const [slots, vans] = await Promise.all([queries.slots.execute({ dayId }), queries.vans.execute()]);
   const points = new Map<string, CollectionPoint>();
   for (const slot of slots) {
     if (slot.startsAt <= now) continue;
@@ -187,7 +191,7 @@ export async function readCollections(deps: Deps, dayId: string): Promise<{ poin
     });
     points.set(pointId, point);
   }
-  return { points: [...points.values()] };
+  return { points: [...points.values()], hasVan: vans.length > 0 };
 }
 
 /** A British tag is given at birth, and the farm sells only its own animals: born and reared in one country. */

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { Day, Id, Instant, Line, Pence, PostcodeText, Time, Version } from './fields-schema.ts';
+import { Id, Instant, Line, Pence, PostcodeText, Time, Version } from './fields-schema.ts';
 
 const PlaceName = z.strictObject({ name: z.string(), addressLines: z.array(z.string()) });
 

@@ -106,7 +106,8 @@ export const getBoxSchema = { params: z.strictObject({ slug: z.string().max(60) 
 export const listCutsSchema = { answer: z.strictObject({ days: z.array(CuttingDaySummary), cuts: z.array(LooseCut) }) };
 export const listCollectionsSchema = {
   params: z.strictObject({ dayId: Id }),
-  answer: z.strictObject({ points: z.array(CollectionPoint) }),
+  /** `hasVan`: somewhere the farm delivers; where, its postcode says. */
+  answer: z.strictObject({ points: z.array(CollectionPoint), hasVan: z.boolean() }),
 };
 
 /** From a pack's code to the beast it came from. Nothing private. */

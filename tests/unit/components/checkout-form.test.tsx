@@ -65,6 +65,9 @@ describe('the checkout form', () => {
     press();
     await waitFor(() => expect(onSubmit).toHaveBeenCalled());
     expect(onSubmit.mock.calls[0]?.[0]).toEqual({
+      way: 'collect',
+      pay: 'in full',
+      ...{ street: '', town: '', postcode: '' },
       slotId: SLOT,
       name: 'Nell 🐂 Arkwright',
       email: 'nell@example.com',
