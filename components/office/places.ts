@@ -7,6 +7,7 @@ const ownerPlaces: readonly NavItem[] = [
   { label: 'Orders', href: '/office/orders' },
   { label: 'Herd', href: '/office/herd' },
   { label: 'Boxes', href: '/office/boxes' },
+  { label: 'Specifications', href: '/office/specifications' },
   { label: 'Trade', href: '/office/trade' },
   { label: 'E-mail', href: '/office/mails' },
   { label: 'Settings', href: '/office/settings' },
@@ -37,6 +38,7 @@ export function dayPlaces(dayId: string, role: Role): readonly NavItem[] {
     { label: 'Allocation', href: `${at}/allocation` },
     { label: 'Margin', href: `${at}/margin` },
     packing,
+    { label: 'Foreseen and weighed', href: `${at}/comparison` },
     { label: 'Collections', href: `${at}/collections` },
     runSheet,
   ];

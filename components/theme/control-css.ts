@@ -24,6 +24,7 @@ const fields = `
 :root .w-error::before{content:'!';flex:none;width:1.15em;height:1.15em;border-radius:3px;background:var(--danger);color:var(--page);font-weight:700;line-height:1.15em;text-align:center;font-size:.875em}
 :root .w-control{display:flex;flex-direction:row;align-items:stretch;min-height:48px;box-sizing:border-box;border:1.5px solid var(--edge);border-radius:3px;background:var(--page)}
 :root .w-control-short{width:11rem;max-width:100%}
+:root .w-control-cell{width:7rem;min-height:44px;max-width:100%}
 :root .w-control:focus-within{outline:3px solid var(--text);outline-offset:1px}
 :root .w-control-wrong{border-color:var(--danger);border-width:2px}
 :root .w-input{flex:1 1 auto;width:100%;min-width:0;box-sizing:border-box;padding:10px 12px;border:0;background:transparent;color:var(--text);font:400 1.0625rem/1.4 'Public Sans','Public Sans stand-in',system-ui,sans-serif;font-variant-numeric:tabular-nums lining-nums;outline:none}

@@ -85,5 +85,18 @@ const sheets = `
 :root .w-date-words{color:var(--quiet);font-size:.9375rem}
 `;
 
-/** How the parts of the kit look that show something: notices, tables, empty and waiting places, sheets. */
-export const kitCss = marks + notices + tables + waiting + sheets;
+const tree = `
+:root .w-tree,:root .w-tree ul{display:flex;flex-direction:column;margin:0;padding:0;list-style:none;min-width:0}
+:root .w-tree{border-top:1px solid var(--line)}
+:root .w-tree ul{padding-inline-start:16px}
+:root .w-tree-node{display:grid;grid-template-columns:minmax(0,1fr) auto auto;gap:4px 12px;align-items:baseline;width:100%;min-height:44px;padding:10px 8px;box-sizing:border-box;border:0;border-bottom:1px solid var(--line);background:transparent;color:var(--text);font:inherit;text-align:start;cursor:pointer}
+:root .w-tree-node:hover{background:var(--panel)}
+:root .w-tree-node[aria-current=true]{font-weight:700;box-shadow:inset 4px 0 0 var(--text)}
+:root .w-tree-figure{font-variant-numeric:tabular-nums lining-nums;color:var(--quiet);white-space:nowrap}
+:root .w-tree-wrong{color:var(--danger);font-weight:700}
+:root .w-columns-tree{display:grid;grid-template-columns:minmax(0,1fr);gap:24px}
+@media (min-width:760px){:root .w-columns-tree{grid-template-columns:minmax(15rem,20rem) minmax(0,1fr);gap:40px;align-items:start}}
+`;
+
+/** How the parts of the kit look that show something: notices, tables, empty and waiting places, sheets, trees. */
+export const kitCss = marks + notices + tables + waiting + sheets + tree;

@@ -6,6 +6,8 @@ export type FieldWords = {
   /** What is wrong, in words; stands beside the field and is read with it. */
   error?: string | undefined;
   optional?: boolean | undefined;
+  /** For a field in a table, whose column says it to those who see. */
+  isLabelHidden?: boolean | undefined;
 };
 
 /** The ids that tie a control to its words: pass them on as `aria-describedby`. */
@@ -18,7 +20,7 @@ export function describedBy(id: string, { hint, error }: FieldWords): string | u
 export function FieldFrame({ id, words, children }: { id: string; words: FieldWords; children: ReactNode }) {
   return (
     <div className="w-field">
-      <label className="w-label" htmlFor={id}>
+      <label className={words.isLabelHidden ? 'w-hidden' : 'w-label'} htmlFor={id}>
         {words.label}
         {words.optional ? <span className="w-optional"> (if you like)</span> : null}
       </label>

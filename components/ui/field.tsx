@@ -20,15 +20,15 @@ type FieldProps = FieldWords & {
   /** Signs inside the frame: `£` before, `kg` after. The label still has to say what is asked. */
   before?: string;
   after?: string;
-  width?: 'full' | 'short';
+  width?: 'full' | 'short' | 'cell';
   required?: boolean;
   ref?: Ref<TextInput>;
 };
 
 export function Field({ ref, ...props }: FieldProps) {
-  const { label, hint, error, optional, before, after, multiline = false, width = 'full' } = props;
+  const { label, hint, error, optional, isLabelHidden, before, after, multiline = false, width = 'full' } = props;
   const id = useId();
-  const words = { label, hint, error, optional };
+  const words = { label, hint, error, optional, isLabelHidden };
   return (
     <FieldFrame id={id} words={words}>
       <div className={`w-control w-control-${width}${error ? ' w-control-wrong' : ''}`}>

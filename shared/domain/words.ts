@@ -35,6 +35,11 @@ export function formatRate(tenthPencePerKg: number): string {
 const WEEKDAYS = ['Sun', 'Mon', 'Tue', 'Wed', 'Thu', 'Fri', 'Sat'];
 const MONTHS = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec'];
 
+/** Parts per 100,000: `18.3 %`, three decimals at most. */
+export function formatPercent(ppht: number): string {
+  return `${(ppht / 1000).toFixed(3).replace(/\.?0+$/, '')} %`;
+}
+
 /** `Fri 12 Dec`. Written out by hand: the languages' tables differ between browsers and servers. */
 export function formatDay(day: Day): string {
   const [year = 0, month = 1, date = 1] = day.split('-').map(Number);

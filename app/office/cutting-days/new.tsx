@@ -11,6 +11,7 @@ import { useSpecifications } from '#hooks/specifications.ts';
 import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { NewCuttingDay } from '#shared/contracts/carcases.ts';
+import { editionsOnOffer } from '#shared/domain/specification-editions.ts';
 
 const loadSchema = async () => (await import('#hooks/form-schemas.ts')).carcases.NewCuttingDay;
 
@@ -44,7 +45,7 @@ export default function NewCuttingDayScreen() {
             {({ points: places }) => (
               <NewDayForm
                 control={form.control}
-                specifications={list}
+                specifications={editionsOnOffer(list)}
                 points={places}
                 onSubmit={submit}
                 busy={add.isPending}

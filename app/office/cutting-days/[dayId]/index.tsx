@@ -4,6 +4,7 @@ import { View } from 'react-native';
 import { BookingForm, type Booking } from '#components/carcases/booking-form.tsx';
 import { CarcaseTable } from '#components/carcases/carcase-table.tsx';
 import { CloseDay } from '#components/carcases/close-day.tsx';
+import { SpecificationChoice } from '#components/carcases/specification-choice.tsx';
 import { runningWithdrawal } from '#components/herd/animal-state.ts';
 import { DayPlaces } from '#components/office/day-places.tsx';
 import { css } from '#components/theme/css.ts';
@@ -14,14 +15,16 @@ import { Skeleton } from '#components/ui/skeleton.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
 import { Text } from '#components/ui/text.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
-import { useBookCarcases, useCloseCuttingDay, useCuttingDay } from '#hooks/carcases.ts';
+import { useBookCarcases, useChooseSpecification, useCloseCuttingDay, useCuttingDay } from '#hooks/carcases.ts';
 import { useAnimals } from '#hooks/herd.ts';
 import { useToday } from '#hooks/office.ts';
+import { useSpecifications } from '#hooks/specifications.ts';
 import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { CuttingDay } from '#shared/contracts/carcases.ts';
 import type { Animal } from '#shared/contracts/herd.ts';
 import { formatEarTag } from '#shared/domain/ear-tag.ts';
+import { editionsOnOffer } from '#shared/domain/specification-editions.ts';
 import { formatCount, formatDay, formatDayTime, formatKilograms } from '#shared/domain/words.ts';
 
 const loadSchema = async () => (await import('#hooks/form-schemas.ts')).carcases.bookCarcasesSchema.body;
@@ -56,6 +59,7 @@ function Ready({ day }: { day: CuttingDay }) {
       />
       <DayPlaces dayId={day.id} role="owner" path={`/office/cutting-days/${day.id}`} />
       <Text tone="quiet">{`Orders until ${formatDayTime(day.cutOffAt)}. Cut by “${day.specificationName}”.`}</Text>
+      {day.state === 'planned' ? <ChooseSpecification key={day.specificationId} day={day} /> : null}
       <CarcaseTable carcases={day.carcases} />
       {isClosed ? (
         <Notice kind="info" title="This day is closed." kept="Its weights, orders and plan stay as they are." />
@@ -69,6 +73,32 @@ function Ready({ day }: { day: CuttingDay }) {
         </>
       )}
     </View>
+  );
+}
+
+/** Until the day is put on sale it may be cut otherwise; what was planned is then out of date. */
+function ChooseSpecification({ day }: { day: CuttingDay }) {
+  const specifications = useSpecifications();
+  const choose = useChooseSpecification();
+  const [chosenId, setChosenId] = useState(day.specificationId);
+  const send = () =>
+    choose.mutate({ params: { dayId: day.id }, body: { version: day.version, specificationId: chosenId } });
+  return (
+    <StateView query={specifications} what="the cutting specifications">
+      {(data) => (
+        <View style={css('w-stack')}>
+          <SpecificationChoice
+            specifications={editionsOnOffer(data.specifications)}
+            present={{ id: day.specificationId, label: day.specificationName }}
+            chosenId={chosenId}
+            onChoose={setChosenId}
+            onSend={send}
+            busy={choose.isPending}
+          />
+          <ProblemNotice error={choose.error} title="The day keeps its specification." />
+        </View>
+      )}
+    </StateView>
   );
 }
 

@@ -1,0 +1,19 @@
+import type { SpecificationEdition } from '#shared/contracts/specifications.ts';
+import { formatPercent } from '#shared/domain/words.ts';
+
+const ORIGINS = {
+  written: 'written here',
+  copied: 'a copy',
+  restored: 'back to the shipped figures',
+  learned: 'learned from weights',
+} as const satisfies Record<SpecificationEdition['origin'], string>;
+
+export const originWords = ({ origin }: Pick<SpecificationEdition, 'origin'>) => ORIGINS[origin];
+
+/** How far a weight was from what was foreseen: `+ 2.4 %`, `− 0.8 %`; `as foreseen` when there is no difference. */
+export function differencePercent(weighedGrams: number, estimatedGrams: number): string {
+  if (weighedGrams === estimatedGrams) return 'as foreseen';
+  if (estimatedGrams === 0) return 'not foreseen';
+  const tenths = Math.round((Math.abs(weighedGrams - estimatedGrams) * 1000) / estimatedGrams);
+  return `${weighedGrams > estimatedGrams ? '+' : '−'} ${formatPercent(tenths * 100)}`;
+}
