@@ -1,9 +1,10 @@
-// npm run bench: three measures, each as a ratio within this run, so that the machine falls out of them.
-// npm run bench -- allocation (or list, or load) takes one of them.
+// npm run bench: four measures, each as a ratio within this run, so that the machine falls out of them.
+// npm run bench -- allocation (or list, load or lighthouse) takes one of them.
 import { spawn } from 'node:child_process';
 import { ensurePostgres } from './postgres.mjs';
 import { measureBoxList } from './bench/box-list.mjs';
 import { measureFirstLoad } from './bench/first-load.mjs';
+import { measureLighthouse } from './bench/lighthouse.mjs';
 import { runServer } from './bench/servers.mjs';
 import { ensureChromium } from './steps/chromium.mjs';
 import { migrateDatabase, seedDatabase } from './steps/demo-database.mjs';
@@ -54,9 +55,9 @@ async function bench() {
     await ensureSolvers();
     await benchAllocation();
   }
-  if (!wants('list') && !wants('load')) return;
+  if (!['list', 'load', 'lighthouse'].some(wants)) return;
   await ensureWebApp();
-  if (wants('load')) await ensureChromium();
+  if (wants('load') || wants('lighthouse')) await ensureChromium();
   const shop = await startShop();
   if (wants('list')) {
     const { list, bare, ratio } = await step('Asking for the public box list', () =>
@@ -71,6 +72,10 @@ async function bench() {
     say(
       `  ${kib(ours.bytes)} in ${ours.files} files against ${kib(floor.bytes)} in ${floor.files}, as gzip sends them`,
     );
+  }
+  if (wants('lighthouse')) {
+    say("Lighthouse, a phone's settings, against a page with one heading, median of seven rounds:");
+    console.table(await measureLighthouse(shop.url));
   }
   await shop.stop();
 }

@@ -4,14 +4,18 @@ import path from 'node:path';
 import { run } from '../steps/processes.mjs';
 import { step } from '../steps/say.mjs';
 import { dataDir, root } from '../steps/settings.mjs';
-import { exportSettings } from '../steps/web-app.mjs';
+import { exportSettings, precompress } from '../steps/web-app.mjs';
 
 const home = path.join(dataDir, 'bench/empty-app');
 
 const screen = `import { Text } from 'react-native';
 
 export default function Home() {
-  return <Text>Empty</Text>;
+  return (
+    <Text role="heading" aria-level={1}>
+      Empty
+    </Text>
+  );
 }
 `;
 
@@ -22,7 +26,7 @@ config.watchFolders = [${JSON.stringify(path.join(root, 'node_modules'))}];
 module.exports = config;
 `;
 
-/** Our own settings of Expo and its router, around a single screen with one word on it. */
+/** Our own settings of Expo and its router, around a single screen with one heading on it. */
 function filesOfApp() {
   const ours = JSON.parse(readFileSync(path.join(root, 'app.json'), 'utf8'));
   const app = { expo: { ...ours.expo, name: 'Empty', slug: 'empty', scheme: 'empty' } };
@@ -54,6 +58,7 @@ export async function ensureEmptyApp() {
       { log: 'empty-app', env: exportSettings(), cwd: home },
     ),
   );
+  await precompress(path.join(home, 'dist/client'));
   writeFileSync(stamp, hash);
   return home;
 }

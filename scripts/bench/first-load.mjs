@@ -18,7 +18,7 @@ async function measureScripts(browser, url) {
   return { files: sizes.length, bytes };
 }
 
-/** JavaScript of the shop's first page against that of an app with one word in it. `shop` is the running server's address. */
+/** JavaScript of the shop's first page against that of an app with one heading in it. `shop` is the running server's address. */
 export async function measureFirstLoad(shop) {
   const empty = await runServer('empty-app', ['--import', 'tsx', 'scripts/bench/empty-server.ts'], {
     EMPTY_APP: await ensureEmptyApp(),

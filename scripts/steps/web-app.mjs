@@ -8,7 +8,7 @@ import { run } from './processes.mjs';
 import { step } from './say.mjs';
 import { dataDir, root } from './settings.mjs';
 
-const sources = ['app', 'components', 'hooks', 'shared', 'fonts', 'assets'];
+const sources = ['app', 'components', 'hooks', 'shared', 'fonts', 'assets', 'patches'];
 const settings = ['app.json', 'package.json', 'package-lock.json', 'metro.config.js', 'tsconfig.json'];
 const dist = path.join(root, 'dist');
 const stamp = path.join(dist, 'sources.sha256');
@@ -35,7 +35,7 @@ function hashOfSources() {
 const isBuilt = (hash) => existsSync(stamp) && readFileSync(stamp, 'utf8') === hash;
 
 /** Writes .br and .gz beside each script and style sheet, so that the server never compresses a static file twice. */
-async function precompress(folder) {
+export async function precompress(folder) {
   const brotli = promisify(brotliCompress);
   const squeeze = promisify(gzip);
   const files = filesUnder(folder).filter((file) => /\.(js|css)$/.test(file));
