@@ -37,7 +37,7 @@ export function OfficeShell(props: OfficeShellProps) {
         </Link>
         <Places {...props} />
       </View>
-      <View style={css('w-office-top')}>
+      <View role="banner" style={css('w-office-top')}>
         <Link href={homeHref} style={css('t-mark', 'w-mark')}>
           {farmName}
         </Link>
