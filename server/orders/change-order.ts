@@ -28,7 +28,13 @@ export async function lockChangeable(tx: Tx, deps: Deps, token: string): Promise
 }
 
 /** What was done, for the audit trail, and the sentence in which the customer reads it. */
-export type Change = { action: string; detail: Record<string, unknown>; words: string };
+export type Change = {
+  action: string;
+  detail: Record<string, unknown>;
+  words: string;
+  /** Set where the farm changed it, and not the customer. */
+  byUserId?: string | undefined;
+};
 
 /** Writes the change down, raises the order's version and tells the customer, with a new calendar file. */
 export async function finishChange(
@@ -38,7 +44,7 @@ export async function finishChange(
 ): Promise<OrderRow> {
   const changed = await updateOrder(tx, order.id, { ...set, version: order.version + 1 });
   await recordAudit(tx, {
-    byUserId: null,
+    byUserId: change.byUserId ?? null,
     action: change.action,
     subject: 'order',
     subjectId: order.id,
@@ -50,7 +56,7 @@ export async function finishChange(
     kind: 'order changed',
     orderId: order.id,
     to: order.email,
-    ...orderChangedMail(facts, change.words),
+    ...orderChangedMail(facts, change.words, change.byUserId === undefined ? 'customer' : 'farm'),
     attachments: [
       {
         filename: `collect-order-${order.orderNo}.ics`,

@@ -8,7 +8,8 @@ import { addLine, hasPacks, listSwapRows, reduceLine, type SwapRow } from './ord
 import { listLines, type LineRow, type OrderRow } from './order-queries.ts';
 import { readOrder } from './view-order.ts';
 
-export type Swap = { token: string; lineId: string; offerId: string; quantity: number };
+/** `byUserId` is set where the farm swaps for the customer. */
+export type Swap = { token: string; lineId: string; offerId: string; quantity: number; byUserId?: string };
 
 /**
  * Exchanges boxes of a paid order for another variant of the same box: one offer freed and the other taken in one
@@ -37,6 +38,7 @@ export async function swapBox(deps: Deps, swap: Swap): Promise<Order> {
       set: {},
       change: {
         action: 'swapped',
+        byUserId: swap.byUserId,
         detail: { from: line.offerId, to: offerId, quantity },
         words: `${quantity} × ${line.name} is now ${quantity} × ${name}, at the same price.`,
       },
