@@ -8,6 +8,7 @@ import { addCustomerSettingsRoutes } from './account/customer-settings-routes.ts
 import { addUnsubscribeRoutes } from './account/unsubscribe-routes.ts';
 import { addAllocationRoutes } from './allocation/allocation-routes.ts';
 import { addPlanJobRoutes } from './allocation/plan-job-routes.ts';
+import { addShortfallRoutes } from './allocation/shortfall-routes.ts';
 import { addCarcaseRoutes } from './carcases/carcase-routes.ts';
 import { addCollectionRoutes } from './collections/collection-routes.ts';
 import type { Deps } from './deps.ts';
@@ -61,6 +62,7 @@ export function createApp(deps: Deps, webRoot: string | null): App {
     addCarcaseRoutes,
     addAllocationRoutes,
     addPlanJobRoutes,
+    addShortfallRoutes,
     addMarginRoutes,
     addSpecificationRoutes,
     addTradeRoutes,
