@@ -5,6 +5,7 @@ import { apiRoutes } from './api/routes.ts';
 import { applySettings, catchUp, controlRoutes, expireNow, resetSettings } from './control/control-routes.ts';
 import { type Fake, plainSettings, type Settings } from './fake.ts';
 import { pageRoutes } from './page/page-routes.ts';
+import { stripeJsRoutes } from './page/stripe-js-routes.ts';
 import { openStore } from './store.ts';
 import { createSender } from './webhooks/sender.ts';
 
@@ -57,6 +58,7 @@ function createWeb(fake: Fake): express.Express {
   });
   app.use('/v1', apiRoutes(fake));
   app.use('/control', controlRoutes(fake));
+  app.use(stripeJsRoutes(fake));
   app.use(pageRoutes(fake));
   return app;
 }

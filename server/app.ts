@@ -82,7 +82,7 @@ export function createApp(deps: Deps, webRoot: string | null): App {
   app.use('/api', () => {
     throw new AppError('NOT_FOUND', 'There is no such address in the API.');
   });
-  if (webRoot) app.use(oneLoopbackName(deps.origin), pages(webRoot));
+  if (webRoot) app.use(oneLoopbackName(deps.origin), pages(webRoot, deps.payments.scriptUrl));
   app.use(answerErrors);
   return { express: app, api };
 }

@@ -9,7 +9,14 @@ export type { Db, Tx };
 
 export type Clock = { now: () => Date; today: () => Day };
 
-export type Payments = { stripe: Stripe; webhookSecret: string };
+export type Payments = {
+  stripe: Stripe;
+  webhookSecret: string;
+  /** Names the account to the payer's browser. */
+  publishableKey: string;
+  /** Where the payer's browser gets the payment company's own script. */
+  scriptUrl: string;
+};
 
 /** All that the server's code reaches outside itself with. Made in main.ts, or by the tests with stand-ins. */
 export type Deps = {

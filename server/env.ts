@@ -8,6 +8,9 @@ const Env = z.object({
   BETTER_AUTH_SECRET: z.string().min(32),
   STRIPE_SECRET_KEY: z.string().min(8),
   STRIPE_WEBHOOK_SECRET: z.string().min(8),
+  STRIPE_PUBLISHABLE_KEY: z.string().min(8),
+  /** Stripe's own, unless a stand-in plays it. */
+  STRIPE_JS_URL: z.url().default('https://js.stripe.com/endive/stripe.js'),
   STRIPE_API_HOST: z.string().optional(),
   STRIPE_API_PORT: z.coerce.number().int().optional(),
   STRIPE_API_PROTOCOL: z.enum(['http', 'https']).optional(),

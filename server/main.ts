@@ -35,6 +35,8 @@ const deps: Deps = {
       maxNetworkRetries: 2,
     }),
     webhookSecret: env.STRIPE_WEBHOOK_SECRET,
+    publishableKey: env.STRIPE_PUBLISHABLE_KEY,
+    scriptUrl: env.STRIPE_JS_URL,
   },
   mailer: createMailer(env.SMTP_URL, env.MAIL_FROM),
   solver: createSolver(),

@@ -5,6 +5,7 @@ import type { Db, Tx } from './deps.ts';
 export type Jobs = {
   'send-mail': { mailId: string };
   'settle-refund': { paymentId: string };
+  'take-balance': { paymentId: string };
   'replan-day': { dayId: string };
   'explain-allocation': { allocationId: string };
 };

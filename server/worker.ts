@@ -5,6 +5,7 @@ import { log } from './http/log.ts';
 import { proveCounters } from './orders/prove-counters.ts';
 import { sendMail } from './mail/outbox.ts';
 import { inviteAgain, tellCutOffs } from './mail/reminders.ts';
+import { takeBalance } from './payments/balance.ts';
 import { settleRefund, sweepHolds } from './payments/payment-service.ts';
 import type { Jobs } from './queue.ts';
 import { serveWaitingList } from './waiting-list/serve-waiting.ts';
@@ -14,6 +15,7 @@ export function taskList(deps: Deps): TaskList {
   return {
     'send-mail': (payload) => sendMail(deps, (payload as Jobs['send-mail']).mailId),
     'settle-refund': (payload) => settleRefund(deps, (payload as Jobs['settle-refund']).paymentId),
+    'take-balance': (payload) => takeBalance(deps, (payload as Jobs['take-balance']).paymentId),
     'replan-day': (payload) => replanDay(deps, (payload as Jobs['replan-day']).dayId),
     'explain-allocation': (payload) => explainAllocation(deps, (payload as Jobs['explain-allocation']).allocationId),
     'sweep-holds': () => sweepHolds(deps),

@@ -16,18 +16,18 @@ type OrderCollectionProps = {
 
 /** Where, when, how to find it and what to bring, with the file for a calendar. */
 export function OrderCollection({ order, calendarHref, change }: OrderCollectionProps) {
-  const { collection } = order;
+  const { collection, isDelivered } = order;
   return (
     <View style={css('w-section')}>
-      <Heading level={2}>Collecting it</Heading>
+      <Heading level={2}>{isDelivered ? 'Bringing it' : 'Collecting it'}</Heading>
       <DefinitionList
         ruled
         facts
         items={[
           { term: 'When', value: whenWords(collection) },
           { term: 'Where', value: [collection.name, ...collection.addressLines].join(', ') },
-          { term: 'Finding it', value: collection.directions },
-          { term: 'Bring', value: collection.bring },
+          { term: isDelivered ? 'At the door' : 'Finding it', value: collection.directions },
+          { term: isDelivered ? 'Please have' : 'Bring', value: collection.bring },
         ]}
       />
       {change}

@@ -11,8 +11,8 @@ type OrderLinesProps = { order: Order; onSwap: (line: Order['lines'][number]) =>
 
 /** What was ordered and what it came to, less what was paid back. */
 export function OrderLines({ order, onSwap }: OrderLinesProps) {
-  const { lines, totalPence, refundedPence, paymentState } = order;
-  const isPaid = paymentState !== 'unpaid';
+  const { lines, totalPence, refundedPence, paymentState, discountPence, deliveryPence } = order;
+  const isPaid = paymentState !== 'unpaid' && paymentState !== 'part paid';
   return (
     <View style={css('w-section')}>
       <Heading level={2}>What you ordered</Heading>
@@ -24,6 +24,10 @@ export function OrderLines({ order, onSwap }: OrderLinesProps) {
             note: `${line.kind === 'box' ? 'at least' : 'up to'} ${formatWeight(line.unitGrams)}${line.quantity > 1 ? ' each' : ''}`,
             value: formatMoney(line.linePence),
           })),
+          ...(discountPence > 0
+            ? [{ term: order.promoCode ? `Code ${order.promoCode}` : 'Taken off', value: formatMoney(-discountPence) }]
+            : []),
+          ...(order.isDelivered ? [{ term: 'Delivery', value: formatMoney(deliveryPence) }] : []),
           { term: isPaid ? 'Paid' : 'Total', value: formatMoney(totalPence), strong: true },
           ...(refundedPence > 0 ? [{ term: 'Paid back', value: formatMoney(-refundedPence) }] : []),
         ]}

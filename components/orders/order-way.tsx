@@ -19,8 +19,8 @@ export function OrderWay({ order }: { order: Order }) {
       words: at > 0 ? `A confirmation went to ${order.email}` : 'Waiting for the payment',
     },
     { title: 'Cut, weighed and packed', words: formatDay(order.day) },
-    { title: 'Ready to collect', words: order.collection.name },
-    { title: 'Collected', words: whenWords(order.collection) },
+    { title: order.isDelivered ? 'On the van' : 'Ready to collect', words: order.collection.name },
+    { title: order.isDelivered ? 'Delivered' : 'Collected', words: whenWords(order.collection) },
   ];
   return (
     <ol className="w-way" aria-label="How far your order is">

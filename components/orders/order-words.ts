@@ -10,21 +10,26 @@ export function whenWords({ startsAt, endsAt }: Order['collection']): string {
 }
 
 export function standingOf(order: Order, hasLeft: boolean): Standing {
-  const when = `${whenWords(order.collection)}, ${order.collection.name}`;
+  const when = order.isDelivered
+    ? `We bring it ${whenWords(order.collection)}.`
+    : `Collect it ${whenWords(order.collection)}, ${order.collection.name}.`;
+  const paid = order.deposit && order.deposit.rest !== 'paid' ? 'The deposit is paid and it is' : 'Paid and';
   switch (order.state) {
     case 'awaiting payment':
       return waitingFor(order, hasLeft);
     case 'confirmed':
       return {
         title: 'It is yours.',
-        lead: `Paid and kept for you. Collect it ${when}.`,
+        lead: `${paid} kept for you. ${when}`,
         kind: 'free',
         badge: 'Confirmed',
       };
     case 'packed':
-      return { title: 'Packed and weighed.', lead: `Collect it ${when}.`, kind: 'free', badge: 'Packed' };
+      return { title: 'Packed and weighed.', lead: when, kind: 'free', badge: 'Packed' };
     case 'ready':
-      return { title: 'Ready for you.', lead: `Collect it ${when}.`, kind: 'free', badge: 'Ready' };
+      return order.isDelivered
+        ? { title: 'On its way.', lead: when, kind: 'free', badge: 'On the van' }
+        : { title: 'Ready for you.', lead: when, kind: 'free', badge: 'Ready' };
     case 'collected':
       return {
         title: 'Collected. Eat well.',

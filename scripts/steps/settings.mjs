@@ -66,6 +66,8 @@ export function demoEnvironment({ ports, databaseUrl, origin = `http://localhost
     STRIPE_API_HOST: '127.0.0.1',
     STRIPE_API_PORT: String(ports.PAYMENTS_FAKE_PORT),
     STRIPE_API_PROTOCOL: 'http',
+    STRIPE_PUBLISHABLE_KEY: 'pk_test_of_the_demo',
+    STRIPE_JS_URL: `http://127.0.0.1:${ports.PAYMENTS_FAKE_PORT}/stripe.js`,
     SMTP_URL: `smtp://127.0.0.1:${ports.MAIL_FAKE_SMTP_PORT}`,
     MAIL_FROM: 'Skelderwick Farm <orders@skelderwick.example.com>',
     MAIL_INBOUND_URL: `${api}/api/mail/inbound`,

@@ -14,7 +14,7 @@ const { createRequestHandler } = createRequire(import.meta.url)('expo-server/ada
 const YEAR_MS = 365 * 24 * 3_600_000;
 
 /** The exported web app: hashed files for a year, fonts, public files, and pages rendered for each request. */
-export function pages(root: string): Router {
+export function pages(root: string, paymentScriptUrl: string | null = null): Router {
   const client = path.join(root, 'dist', 'client');
   const router = Router();
   router.use(precompressed(client));
@@ -24,7 +24,12 @@ export function pages(root: string): Router {
   router.use(sitemap(client));
   router.use(express.static(client, { index: false, maxAge: 3_600_000 }));
   const build = path.join(root, 'dist', 'server');
-  router.use(finishPage, noEscapes, canonicalQuery, warmFirst(build));
+  router.use(
+    finishPage(paymentScriptUrl === null ? null : new URL(paymentScriptUrl).origin),
+    noEscapes,
+    canonicalQuery,
+    warmFirst(build),
+  );
   router.use(createRequestHandler({ build }));
   router.use(brokenPage);
   return router;
@@ -73,34 +78,39 @@ const canonicalQuery: RequestHandler = (request, _response, next) => {
  * Holds a rendered page back until it is whole. Its status is what the page itself says it shows: a screen for a missing
  * box is a 404. Content-Security-Policy goes by hash: the router's inline scripts carry the page's data and change with it.
  */
-const finishPage: RequestHandler = (_request, response, next) => {
-  const chunks: Buffer[] = [];
-  const keep = (chunk: unknown): void => {
-    if (typeof chunk === 'string' || chunk instanceof Uint8Array) chunks.push(Buffer.from(chunk));
-  };
-  const end = response.end.bind(response);
-  response.write = (chunk: unknown) => {
-    keep(chunk);
-    return true;
-  };
-  response.end = ((chunk?: unknown) => {
-    keep(chunk);
-    const body = Buffer.concat(chunks);
-    if (!response.headersSent && String(response.getHeader('content-type')).includes('text/html')) {
-      const html = body.toString('utf8');
-      const shown = / data-page-status="(404|503)"/.exec(html)?.[1];
-      if (shown && response.statusCode === 200) {
-        response.statusCode = Number(shown);
-        response.statusMessage = '';
+const finishPage =
+  (paymentOrigin: string | null): RequestHandler =>
+  (request, response, next) => {
+    const chunks: Buffer[] = [];
+    const keep = (chunk: unknown): void => {
+      if (typeof chunk === 'string' || chunk instanceof Uint8Array) chunks.push(Buffer.from(chunk));
+    };
+    const end = response.end.bind(response);
+    response.write = (chunk: unknown) => {
+      keep(chunk);
+      return true;
+    };
+    response.end = ((chunk?: unknown) => {
+      keep(chunk);
+      const body = Buffer.concat(chunks);
+      if (!response.headersSent && String(response.getHeader('content-type')).includes('text/html')) {
+        const html = body.toString('utf8');
+        const shown = / data-page-status="(404|503)"/.exec(html)?.[1];
+        if (shown && response.statusCode === 200) {
+          response.statusCode = Number(shown);
+          response.statusMessage = '';
+        }
+        response.setHeader(
+          'Content-Security-Policy',
+          contentSecurityPolicy(html, PAY_PAGE.test(request.path) ? paymentOrigin : null),
+        );
+        response.setHeader('Cache-Control', 'no-store');
+        response.setHeader('Content-Length', body.length);
       }
-      response.setHeader('Content-Security-Policy', contentSecurityPolicy(html));
-      response.setHeader('Cache-Control', 'no-store');
-      response.setHeader('Content-Length', body.length);
-    }
-    return end(body);
-  }) as typeof response.end;
-  next();
-};
+      return end(body);
+    }) as typeof response.end;
+    next();
+  };
 
 /** A page that cannot be drawn is still a page: people see no JSON. The cause goes to the log. */
 // Express knows an error handler by its four parameters.
@@ -124,12 +134,21 @@ const BROKEN = plainPage(
 );
 const NO_SUCH_PAGE = plainPage('There is no such page', 'The address may have been typed wrongly.');
 
-function contentSecurityPolicy(html: string): string {
+/** The one page on which the payment company's own script runs. */
+const PAY_PAGE = /^\/orders\/[^/]+\/pay$/;
+
+function contentSecurityPolicy(html: string, paymentOrigin: string | null): string {
   const inline = [...html.matchAll(/<script(?![^>]*\ssrc=)[^>]*>([\s\S]*?)<\/script>/g)].map((match) => match[1] ?? '');
   const hashes = inline.map((script) => `'sha256-${createHash('sha256').update(script).digest('base64')}'`);
   return [
     "default-src 'self'",
-    `script-src 'self' ${hashes.join(' ')}`,
+    `script-src 'self' ${[...(paymentOrigin ? [paymentOrigin] : []), ...hashes].join(' ')}`,
+    ...(paymentOrigin
+      ? [
+          `connect-src 'self' ${paymentOrigin} https://api.stripe.com`,
+          `frame-src ${paymentOrigin} https://hooks.stripe.com`,
+        ]
+      : []),
     // React Native Web writes its rules into style elements.
     "style-src 'self' 'unsafe-inline'",
     "img-src 'self' data: blob:",

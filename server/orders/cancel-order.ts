@@ -9,6 +9,7 @@ import { recordAudit } from '#server/farm/audit-queries.ts';
 import { orderCancelledMail } from '#server/mail/order-cancelled.ts';
 import { queueMail } from '#server/mail/outbox.ts';
 import { askRefund } from '#server/payments/ask-refund.ts';
+import { stopBalance } from '#server/payments/balance.ts';
 import { listPayments } from '#server/payments/payment-queries.ts';
 import { deleteUse } from '#server/promo/promo-queries.ts';
 import { closeAddition } from './addition-page.ts';
@@ -86,6 +87,7 @@ async function cancel(
     await unsell(tx, { lines: await listLines(tx, order.id), slotId: order.slotId });
     await returnPacks(tx, order.id, byUserId);
     await deleteUse(tx, order.id);
+    await stopBalance(tx, order.id);
   }
   const cancelled = await updateOrder(tx, order.id, { state: 'cancelled', version: order.version + 1 });
   const refundPence = Math.max(0, refundablePence(await listPayments(tx, order.id)));

@@ -37,7 +37,7 @@ function matches({ id, token, basketKey }: { id?: string; token?: string; basket
   return eq(customerOrder.basketKey, basketKey ?? '');
 }
 
-export async function updateOrder(tx: Tx, orderId: string, change: Partial<NewOrderRow>): Promise<OrderRow> {
+export async function updateOrder(tx: Db | Tx, orderId: string, change: Partial<NewOrderRow>): Promise<OrderRow> {
   const rows = await tx.update(customerOrder).set(change).where(eq(customerOrder.id, orderId)).returning();
   const row = rows[0];
   if (!row) throw new Error(`The order ${orderId} has gone.`);

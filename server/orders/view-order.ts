@@ -1,6 +1,7 @@
 import type { Order } from '#shared/contracts/orders.ts';
 import type { Deps } from '#server/deps.ts';
-import { listPayments } from '#server/payments/payment-queries.ts';
+import { listPayments, type PaymentRow } from '#server/payments/payment-queries.ts';
+import { BALANCE } from '#server/payments/payment-state.ts';
 import { findCodeOfOrder } from '#server/promo/promo-queries.ts';
 import { findOpenAddition, listAdditionLines } from './addition-queries.ts';
 import { wordsOf } from './line-words.ts';
@@ -29,6 +30,7 @@ export async function readOrder(deps: Deps, token: string): Promise<Order> {
   return {
     ...{ orderNo, token, state, paymentState, name, email, note, version },
     ...{ discountPence, deliveryPence, totalPence, addition, promoCode },
+    deposit: depositOf(order, payments),
     isDelivered: order.deliveryAddress !== null,
     paymentUrl: isOpen ? order.sessionUrl : null,
     paymentExpiresAt: isOpen ? (order.sessionExpiresAt?.toISOString() ?? null) : null,
@@ -56,6 +58,19 @@ export async function readOrder(deps: Deps, token: string): Promise<Order> {
       box: quantity > 1 ? `${line}, ${copy} of ${quantity}` : line,
     })),
   };
+}
+
+/** Until it is weighed the rest is what is open of the total; then it is what was worked out. */
+function depositOf(order: OrderRow, payments: readonly PaymentRow[]): Order['deposit'] {
+  const { depositPence, balancePence, totalPence } = order;
+  if (depositPence === null) return null;
+  const charged = payments
+    .filter((row) => row.kind === 'charge' && row.state === 'done')
+    .reduce((sum, row) => sum + row.amountPence, 0);
+  if (balancePence === null) return { depositPence, rest: 'later', restPence: totalPence - charged };
+  const balance = payments.find((row) => row.kind === 'charge' && row.reason === BALANCE);
+  const rest = !balance || balance.state === 'done' ? 'paid' : balance.state;
+  return { depositPence, rest, restPence: balance?.amountPence ?? 0 };
 }
 
 /** More for the order, while it waits to be paid on its page. */

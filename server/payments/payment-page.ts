@@ -93,6 +93,24 @@ export function createAdditionPage(deps: Deps, addition: PageAddition): Promise<
   });
 }
 
+/** Makes the page where the rest of a packed order is paid with another card than the one that was kept. */
+export function createBalancePage(
+  deps: Deps,
+  { order, balance, from }: { order: PageAddition['order']; balance: { id: string; amountPence: number }; from: Date },
+): Promise<Stripe.Checkout.Session> {
+  return createPage(deps, {
+    key: `balance ${balance.id} page ${from.getTime()}`,
+    token: order.token,
+    email: order.email,
+    description: `The rest of order ${order.orderNo}`,
+    metadata: { orderId: order.id, balanceId: balance.id },
+    items: [{ name: `The rest of order ${order.orderNo}`, quantity: 1, unitPricePence: balance.amountPence }],
+    from,
+    back: { paid: 'paid', left: 'left-balance' },
+    keepsCard: false,
+  });
+}
+
 function createPage(deps: Deps, page: PageRequest): Promise<Stripe.Checkout.Session> {
   const { metadata, description, back, keepsCard } = page;
   const address = `${deps.origin}/orders/${page.token}`;

@@ -36,6 +36,24 @@ export async function insertCharge(
   return rows[0]?.id ?? null;
 }
 
+/** The rest of a deposit order, still to be taken; null when it has been asked for before. */
+export async function insertBalance(tx: Tx, balance: { orderId: string; amountPence: number }): Promise<string | null> {
+  const rows = await tx
+    .insert(payment)
+    .values({ ...balance, kind: 'charge', reason: 'balance', state: 'asked' })
+    .onConflictDoNothing()
+    .returning({ id: payment.id });
+  return rows[0]?.id ?? null;
+}
+
+export async function findBalance(db: Db | Tx, orderId: string): Promise<PaymentRow | null> {
+  const rows = await db
+    .select()
+    .from(payment)
+    .where(and(eq(payment.orderId, orderId), eq(payment.kind, 'charge'), eq(payment.reason, 'balance')));
+  return rows[0] ?? null;
+}
+
 /** One refund a reason and charge: null when it has been asked for before. */
 export async function insertRefund(
   tx: Tx,
@@ -52,7 +70,7 @@ export async function insertRefund(
 export async function updatePayment(
   db: Db | Tx,
   paymentId: string,
-  change: Partial<Pick<PaymentRow, 'state' | 'providerId' | 'error'>>,
+  change: Partial<Pick<PaymentRow, 'state' | 'providerId' | 'error' | 'attempt'>>,
 ): Promise<void> {
   await db.update(payment).set(change).where(eq(payment.id, paymentId));
 }

@@ -13,6 +13,7 @@ import { deleteUse } from '#server/promo/promo-queries.ts';
 import { insertCharge, insertRefund } from './payment-queries.ts';
 import { enqueue } from '#server/queue.ts';
 import { FREEZE_MS, paidOn, type PaidPage } from './paid-page.ts';
+import { settleBalancePage } from './balance-page.ts';
 import { settleAddition } from './settle-addition.ts';
 
 type Paid = PaidPage & { order: OrderRow; chargeId: string };
@@ -23,6 +24,7 @@ type Paid = PaidPage & { order: OrderRow; chargeId: string };
  */
 export async function settlePage(tx: Tx, deps: Deps, page: Stripe.Checkout.Session): Promise<void> {
   if (page.metadata?.additionId) return settleAddition(tx, deps, page);
+  if (page.metadata?.balanceId) return settleBalancePage(tx, deps, page);
   const orderId = page.metadata?.orderId;
   const order = orderId ? await lockOrder(tx, { id: orderId }) : null;
   if (!order) return;

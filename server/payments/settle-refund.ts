@@ -1,19 +1,13 @@
 import Stripe from 'stripe';
-import { paymentStateOf } from '#shared/domain/refunds.ts';
 import type { Deps, Tx } from '#server/deps.ts';
 import { queueMail } from '#server/mail/outbox.ts';
 import { refundSentMail } from '#server/mail/refund-sent.ts';
-import { lockOrder, updateOrder } from '#server/orders/order-queries.ts';
+import { lockOrder } from '#server/orders/order-queries.ts';
 import { readOrderFacts } from '#server/orders/read-order.ts';
 import { isOutage } from './payment-page.ts';
+import { refreshPaymentState } from './payment-state.ts';
 import { WEIGHTS_SETTLED } from './refund-reasons.ts';
-import {
-  findPayment,
-  findPaymentByProviderId,
-  listPayments,
-  updatePayment,
-  type PaymentRow,
-} from './payment-queries.ts';
+import { findPayment, findPaymentByProviderId, updatePayment, type PaymentRow } from './payment-queries.ts';
 
 /** Beyond this an outage counts as a failure, and the refund stands on Today for a person. */
 const PATIENCE_MS = 12 * 3_600_000;
@@ -34,7 +28,8 @@ export async function sendRefund(deps: Deps, paymentId: string): Promise<void> {
         amount: refund.amountPence,
         metadata: { paymentId, orderId: refund.orderId },
       },
-      { idempotencyKey: `refund ${paymentId}` },
+      // A person's second try is another request: under the same key the company would repeat its refusal.
+      { idempotencyKey: refund.attempt === 1 ? `refund ${paymentId}` : `refund ${paymentId} try ${refund.attempt}` },
     );
     if (sent.status === 'failed' || sent.status === 'canceled') {
       await fail(deps, refund, sent.failure_reason ?? 'The bank refused it.');
@@ -86,10 +81,6 @@ async function fail(deps: Deps, refund: PaymentRow, error: string): Promise<void
     await updatePayment(tx, refund.id, { state: 'failed', error });
     await refreshPaymentState(tx, refund.orderId);
   });
-}
-
-async function refreshPaymentState(tx: Tx, orderId: string): Promise<void> {
-  await updateOrder(tx, orderId, { paymentState: paymentStateOf(await listPayments(tx, orderId)) });
 }
 
 /** A refund that the bank sent back days later: it stands on Today, and the order says that it is owed. */

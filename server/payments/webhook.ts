@@ -2,6 +2,7 @@ import type { RequestHandler } from 'express';
 import type Stripe from 'stripe';
 import { AppError } from '#shared/errors.ts';
 import type { Deps, Tx } from '#server/deps.ts';
+import { settleIntent } from './balance.ts';
 import { getPaymentPage } from './payment-page.ts';
 import { hasEvent, insertEvent } from './payment-queries.ts';
 import { settlePage } from './settle-page.ts';
@@ -45,6 +46,10 @@ async function prepare(deps: Deps, event: Stripe.Event): Promise<Effect | null> 
     case 'checkout.session.expired': {
       const page = await getPaymentPage(deps, event.data.object.id);
       return (tx) => settlePage(tx, deps, page);
+    }
+    case 'payment_intent.succeeded': {
+      const intent = await deps.payments.stripe.paymentIntents.retrieve(event.data.object.id);
+      return (tx) => settleIntent(tx, deps, intent);
     }
     case 'refund.updated':
     case 'refund.failed': {

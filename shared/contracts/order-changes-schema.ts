@@ -25,3 +25,20 @@ export const addToOrderSchema = {
 
 /** Gives up an addition that is not paid. */
 export const leaveAdditionSchema = { params: OrderToken, answer: Order };
+
+/** The rest of a packed deposit order that its card could not be charged with, and how the browser can pay it. */
+export const getBalanceSchema = {
+  params: OrderToken,
+  answer: z.strictObject({
+    orderNo: z.int(),
+    amountPence: z.int(),
+    hasCard: z.boolean(),
+    publishableKey: z.string(),
+    scriptUrl: z.string(),
+  }),
+};
+export const startBalanceSchema = {
+  params: OrderToken,
+  answer: z.strictObject({ clientSecret: z.string(), methodId: z.string() }),
+};
+export const openBalancePageSchema = { params: OrderToken, answer: z.strictObject({ paymentUrl: z.string() }) };

@@ -10,3 +10,13 @@ export const leaveAddition = endpoint<typeof schema.leaveAdditionSchema>(
   '/api/orders/:token/leave-addition',
   'public',
 );
+
+export const getBalance = endpoint<typeof schema.getBalanceSchema>('GET', '/api/orders/:token/balance', 'public');
+/** The card that was kept, confirmed by its owner in the browser. */
+export const startBalance = endpoint<typeof schema.startBalanceSchema>('POST', '/api/orders/:token/balance', 'public');
+/** Another card, on the payment company's page. */
+export const openBalancePage = endpoint<typeof schema.openBalancePageSchema>(
+  'POST',
+  '/api/orders/:token/balance-page',
+  'public',
+);

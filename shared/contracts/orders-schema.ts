@@ -109,6 +109,10 @@ export const Order = z.strictObject({
   deliveryPence: z.int(),
   totalPence: z.int(),
   refundedPence: z.int(),
+  /** Of a deposit order: what was paid at once, and how its rest stands. */
+  deposit: z
+    .strictObject({ depositPence: z.int(), rest: z.enum(['later', 'asked', 'failed', 'paid']), restPence: z.int() })
+    .nullable(),
   /** More for this order, held while it is being paid. */
   addition: z
     .strictObject({ amountPence: z.int(), paymentUrl: z.string(), expiresAt: Instant, words: z.string() })

@@ -61,6 +61,8 @@ export async function startWorld({ withPages = false } = {}) {
         maxNetworkRetries: 2,
       }),
       webhookSecret: WEBHOOK_SECRET,
+      publishableKey: 'pk_test_of_the_tests',
+      scriptUrl: `${payments.url}/stripe.js`,
     },
     mailer: createMailer(mail.smtpUrl, 'Skelderwick Farm <farm@example.com>'),
     solver: createSolver(),

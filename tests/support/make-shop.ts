@@ -121,6 +121,7 @@ export function makeOrderView(over: Partial<Order> = {}): Order {
       },
     ],
     promoCode: null,
+    deposit: null,
     isDelivered: false,
     discountPence: 0,
     deliveryPence: 0,

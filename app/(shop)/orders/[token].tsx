@@ -3,6 +3,7 @@ import type { GenerateMetadataFunction, LoaderFunction } from 'expo-server';
 import { useEffect, useState } from 'react';
 import { View } from 'react-native';
 import { CancelOrder } from '#components/orders/cancel-order.tsx';
+import { DepositStanding } from '#components/orders/deposit-standing.tsx';
 import { MoreForOrder } from '#components/orders/more-for-order.tsx';
 import { OrderAfter } from '#components/orders-after/order-after.tsx';
 import { OrderCollection } from '#components/orders/order-collection.tsx';
@@ -82,6 +83,7 @@ function OrderPage({ order, hasLeft }: { order: Order; hasLeft: boolean }) {
         <TitleBar look="display" above={`Order ${order.orderNo}`} title={standing.title} lead={standing.lead} />
         <Badge kind={standing.kind}>{standing.badge}</Badge>
         {state === 'awaiting payment' ? <Paying order={order} /> : null}
+        {state === 'awaiting payment' || state === 'cancelled' ? null : <DepositStanding order={order} />}
       </View>
       <OrderWay order={order} />
       {isOn ? (
@@ -89,7 +91,7 @@ function OrderPage({ order, hasLeft }: { order: Order; hasLeft: boolean }) {
           order={order}
           calendarHref={pathOf(getOrderCalendar, { params: { token } })}
           change={
-            order.canChange ? (
+            order.canChange && !order.isDelivered ? (
               <TextLink href={`/orders/${token}/time`} place="alone" icon="forward">
                 Change the place or time
               </TextLink>
