@@ -26,6 +26,8 @@ export function KillSheetForm({ control, conformations, fatClasses, onSubmit, bu
       <FormDay control={control} name="killDay" label="Kill day" />
       <View style={css('w-fields')}>
         <FormNumber control={control} name="grams" unit="kilograms" label="Weight, both sides" />
+        <FormNumber control={control} name="leftGrams" unit="kilograms" label="Left side" optional />
+        <FormNumber control={control} name="rightGrams" unit="kilograms" label="Right side" optional />
         <FormSelect
           control={control}
           name="weighedAs"

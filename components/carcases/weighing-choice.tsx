@@ -4,7 +4,7 @@ import { Select } from '#components/ui/select.tsx';
 import type { WeighingDepth } from './weights-form.tsx';
 
 const depths = [
-  { value: 'quarters', label: 'side and quarters' },
+  { value: 'quarters', label: 'carcase, side and quarters' },
   { value: 'primals', label: 'primals' },
   { value: 'cuts', label: 'primals and what is cut from them' },
 ] as const satisfies readonly { value: WeighingDepth; label: string }[];

@@ -10,11 +10,15 @@ export function differenceWords(grams: number | null | undefined, foreseenGrams:
   return `${formatGrams(Math.abs(more))} ${more > 0 ? 'more' : 'less'}${share}`;
 }
 
-/** The parts of one side that a scale can weigh, each with what it weighed so far. */
+/** The hung carcase and the parts of one side that a scale can weigh, each with what it weighed so far. */
 export function weighableOf(nodes: readonly CutoutNode[], side: 'left' | 'right'): CutoutNode[] {
-  return nodes.filter(
-    ({ path, level, kind }) => (path === side || path.startsWith(`${side}/`)) && level !== 'carcase' && kind !== 'loss',
-  );
+  return nodes
+    .filter(({ path, level, kind }) => (level === 'carcase' || isWithin(path, side)) && kind !== 'loss')
+    .map((node) => (node.level === 'carcase' ? { ...node, path: 'hung', name: 'Whole carcase, hung' } : node));
+}
+
+function isWithin(path: string, side: string): boolean {
+  return path === side || path.startsWith(`${side}/`);
 }
 
 type Weighed = { path: string; grams: number | null };

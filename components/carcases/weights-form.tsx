@@ -41,6 +41,10 @@ export function WeightsForm({ control, nodes, depth, onSubmit, busy }: WeightsFo
           </View>
         ))}
       </View>
+      <Text size="small" tone="quiet" measure>
+        What is weighed is never overwritten by an estimate, and rescales what lies under it. Parts may differ from a
+        weighed whole by up to 0.5 % of it: that is shown as the scales’ disagreement. More is refused.
+      </Text>
       <View style={css('w-buttons')}>
         <Button label="Save the weights" busy={busy} onPress={onSubmit} />
       </View>
@@ -69,12 +73,12 @@ function WeightRow({ control, node, at }: { control: Control<Weights>; node: Cut
 
 type Row = { node: CutoutNode; at: number };
 
-/** Side and quarters; or the primals, alone or each with what is cut from it. */
+/** Carcase, side and quarters; or the primals, alone or each with what is cut from it. */
 function groupsOf(nodes: readonly CutoutNode[], depth: WeighingDepth): { name: string; rows: Row[] }[] {
   const rows = nodes.map((node, at) => ({ node, at }));
   if (depth === 'quarters') {
-    const whole = rows.filter(({ node }) => node.level === 'side' || node.level === 'quarter');
-    return [{ name: 'Side and quarters', rows: whole }];
+    const whole = rows.filter(({ node }) => node.level !== 'primal' && node.level !== 'line');
+    return [{ name: 'Carcase, side and quarters', rows: whole }];
   }
   const linesOf = ({ path }: CutoutNode) =>
     rows.filter(({ node }) => node.level === 'line' && node.parentPath === path);

@@ -67,6 +67,8 @@ export function factsOf(row: CarcaseOfDay, measured: Readonly<Record<string, num
     liveGrams: row.liveGrams,
     hotGrams: row.hotGrams,
     coldGrams: row.coldGrams,
+    sideGrams:
+      row.leftGrams === null || row.rightGrams === null ? null : { left: row.leftGrams, right: row.rightGrams },
     killingOutPpht: null,
     conformation: row.conformation,
     fatClass: row.fatClass,

@@ -1,6 +1,7 @@
 import type { Carcase, KillSheet } from '#shared/contracts/carcases.ts';
 import type { Day } from '#shared/domain/day.ts';
 import { formatDayWithYear, formatGrams } from '#shared/domain/words.ts';
+import { WEIGHING_TOLERANCE_PER_MILLE } from '#shared/engine/cutout/measured-weights.ts';
 import { ACCEPTED_GRAMS, coldFromHot } from '#shared/engine/cutout/weight-chain.ts';
 import { AppError, type FieldErrors } from '#shared/errors.ts';
 import type { Deps, Tx } from '#server/deps.ts';
@@ -28,6 +29,8 @@ export async function enterKillSheet(deps: Deps, byUserId: string, sheet: KillSh
       killDay: sheet.killDay,
       hotGrams: sheet.weighedAs === 'hot' ? sheet.grams : null,
       coldGrams: sheet.weighedAs === 'cold' ? sheet.grams : null,
+      leftGrams: sheet.leftGrams ?? null,
+      rightGrams: sheet.rightGrams ?? null,
       conformation: sheet.conformation,
       fatClass: sheet.fatClass,
       dressingSpec: sheet.dressingSpec || null,
@@ -58,6 +61,7 @@ async function refuseFields(
   { before, today }: { before: CarcaseOfDay; today: Day },
 ): Promise<void> {
   refuseWeight(sheet);
+  refuseSides(sheet);
   const killDay = await sentenceAboutKillDay(tx, sheet.killDay, { before, today });
   if (killDay) throw invalid({ killDay });
 }
@@ -69,6 +73,25 @@ function refuseWeight(sheet: KillSheetEntry): void {
   throw new AppError('WEIGHT_OUT_OF_RANGE', `${sentence} Nothing was saved.`, {
     fields: { grams: sentence },
     figures: { coldGrams, minGrams: MIN_COLD_GRAMS, maxGrams: MAX_COLD_GRAMS },
+  });
+}
+
+/** The sides are both there or neither, and differ from the whole by no more than scales do. */
+function refuseSides({ grams, leftGrams, rightGrams }: KillSheetEntry): void {
+  const left = leftGrams ?? null;
+  const right = rightGrams ?? null;
+  if (left === null && right === null) return;
+  if (left === null) throw invalid({ leftGrams: 'Give the other side too, or neither.' });
+  if (right === null) throw invalid({ rightGrams: 'Give the other side too, or neither.' });
+  const [low, high] = ACCEPTED_GRAMS.side;
+  if (left < low || left > high) throw invalid({ leftGrams: 'A side weighs between 20 kg and 360 kg.' });
+  if (right < low || right > high) throw invalid({ rightGrams: 'A side weighs between 20 kg and 360 kg.' });
+  const partsGrams = left + right;
+  if (Math.abs(partsGrams - grams) * 1000 <= grams * WEIGHING_TOLERANCE_PER_MILLE) return;
+  const sentence = `Both sides weigh ${formatGrams(partsGrams)}, the whole ${formatGrams(grams)}: more than 0.5 % apart.`;
+  throw new AppError('MEASURED_EXCEEDS_PARENT', `${sentence} Nothing was saved; check the sheet.`, {
+    fields: { grams: sentence },
+    figures: { partsGrams, parentGrams: grams, differenceGrams: partsGrams - grams },
   });
 }
 

@@ -49,7 +49,13 @@ export const Carcase = z.strictObject({
   ...CarcaseSummary.shape,
   liveGrams: z.int(),
   hotGrams: z.int().nullable(),
+  /** Each side as the kill sheet has it, hot or cold as the whole; null where it does not say. */
+  leftGrams: z.int().nullable(),
+  rightGrams: z.int().nullable(),
   hungGrams: z.int(),
+  hungSource: z.enum(['estimated', 'weighed']),
+  /** False without both classes: the reference class of the specification stands in. */
+  isGraded: z.boolean(),
   dressingSpec: z.string().nullable(),
   nodes: z.array(CutoutNode),
   /** Ways that this carcase may not be cut, each with its reason. */
@@ -121,6 +127,9 @@ export const KillSheet = z.strictObject({
   killDay: Day,
   weighedAs: z.enum(['hot', 'cold']),
   grams: Grams,
+  /** Each side, weighed as the whole was; both or neither. */
+  leftGrams: Grams.nullish(),
+  rightGrams: Grams.nullish(),
   conformation: Conformation.nullable(),
   fatClass: FatClass.nullable(),
   dressingSpec: z.string().trim().max(80).nullable(),
@@ -132,12 +141,12 @@ export const enterWeightsSchema = {
   params: CarcaseId,
   body: z.strictObject({
     version: Version,
-    /** `null` takes a measured weight back. */
+    /** `live`, `hung` or a path of the cutout; `null` takes a measured weight back. */
     weights: z
       .array(
         z.strictObject({
           path: z.string().max(120),
-          grams: z.int().min(0).max(360_000, 'This weight is too large.').nullable(),
+          grams: z.int().min(0).max(1_500_000, 'This weight is too large.').nullable(),
         }),
       )
       .min(1)

@@ -7,6 +7,7 @@ import { CarcaseRails } from '#components/carcases/carcase-rails.tsx';
 import { describeCarcase, nameCarcase } from '#components/carcases/carcase-words.ts';
 import { CutoutTable } from '#components/carcases/cutout-table.tsx';
 import { KillSheetForm } from '#components/carcases/kill-sheet-form.tsx';
+import { LiveWeightForm } from '#components/carcases/live-weight-form.tsx';
 import { WeighingChoice } from '#components/carcases/weighing-choice.tsx';
 import { WeightsForm, type WeighingDepth, type Weights } from '#components/carcases/weights-form.tsx';
 import { changedWeights, weighableOf } from '#components/carcases/weight-difference.ts';
@@ -85,7 +86,12 @@ function Ready({ carcase, round, afresh }: ReadyProps) {
           <WeighingChoice side={side} depth={depth} onSide={setSide} onDepth={setDepth} />
           <WeightsEntry key={`${side} ${round}`} carcase={carcase} side={side} depth={depth} afresh={afresh} />
         </View>
-      ) : null}
+      ) : (
+        <View style={css('w-stack')}>
+          <Heading level={2}>Live weight</Heading>
+          <LiveWeightEntry key={`live ${round}`} carcase={carcase} afresh={afresh} />
+        </View>
+      )}
     </View>
   );
 }
@@ -100,6 +106,8 @@ function KillSheetEntry({ carcase, afresh }: EntryProps) {
     killDay: carcase.killDay,
     weighedAs: carcase.hotGrams === null && isWeighed ? 'cold' : 'hot',
     ...(isWeighed ? { grams: carcase.hotGrams ?? carcase.coldGrams } : {}),
+    leftGrams: carcase.leftGrams,
+    rightGrams: carcase.rightGrams,
     conformation: carcase.conformation as KillSheet['conformation'],
     fatClass: carcase.fatClass as KillSheet['fatClass'],
     dressingSpec: carcase.dressingSpec,
@@ -118,6 +126,24 @@ function KillSheetEntry({ carcase, afresh }: EntryProps) {
         busy={enter.isPending}
       />
       <ProblemNotice error={enter.error} title="The kill sheet was not saved." onShowNewest={afresh} />
+    </View>
+  );
+}
+
+function LiveWeightEntry({ carcase, afresh }: EntryProps) {
+  const enter = useEnterWeights();
+  const form = useContractForm<Weights>(loadWeights, {
+    version: carcase.version,
+    weights: [{ path: 'live', grams: carcase.liveGrams }],
+  });
+  const submit = sendForm(form, async (body) => {
+    await enter.mutateAsync({ params: { carcaseId: carcase.id }, body });
+    afresh();
+  });
+  return (
+    <View style={css('w-stack')}>
+      <LiveWeightForm control={form.control} onSubmit={submit} busy={enter.isPending} />
+      <ProblemNotice error={enter.error} title="The live weight was not saved." onShowNewest={afresh} />
     </View>
   );
 }

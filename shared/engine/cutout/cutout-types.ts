@@ -19,6 +19,11 @@ export type CarcaseFacts = {
   hotGrams: number | null;
   /** As printed on the kill sheet; wins over the hot weight. */
   coldGrams: number | null;
+  /**
+   * Each side as the kill sheet has it, hot or cold alike: so the hung weight parts until a side is weighed itself. Without
+   * them the sides are taken as equal.
+   */
+  sideGrams?: Readonly<Record<SideName, number>> | null;
   /** The farm's own killing-out figure; null takes the default of the type. */
   killingOutPpht: number | null;
   conformation: string | null;

@@ -29,7 +29,9 @@ export function cutout(input: CutoutInput): Cutout {
   const ways = pickWays({ specification, measuredPaths, closedReason: age.closedReason, chosen: input.ways });
   const hungGrams = carcase.measured['hung'] ?? chain.hungEstimateGrams;
   requireGrams('hung', hungGrams);
-  const tree = buildTree(hungGrams, { specification, quarters: effective.quarters, ways });
+  const sideGrams = carcase.sideGrams ?? null;
+  if (sideGrams) for (const side of SIDES) requireGrams('side', sideGrams[side]);
+  const tree = buildTree(hungGrams, { specification, quarters: effective.quarters, ways, sideGrams });
   const nodes = weighTree(tree, readMeasured(carcase.measured, tree));
   const hung = readHung(nodes, chain);
   const supply = {

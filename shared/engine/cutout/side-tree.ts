@@ -35,13 +35,15 @@ type Tree = {
   specification: Specification;
   quarters: readonly [Quarter, Quarter];
   ways: Readonly<Record<SideName, WayOfChoice>>;
+  /** What each side counts for in the hung weight; null for two alike. */
+  sideGrams: Readonly<Record<SideName, number>> | null;
 };
 
-/** The whole carcase, both sides alike, as the specification has it; `grams` is the hung weight. */
+/** The whole carcase as the specification has it, each side by what it counts for; `grams` is the hung weight. */
 export function buildTree(grams: number, tree: Tree): TreeNode {
   const bySide = apportion(
     grams,
-    SIDES.map((id) => ({ id, weight: 1 })),
+    SIDES.map((id) => ({ id, weight: tree.sideGrams?.[id] ?? 1 })),
   );
   const children = SIDES.map((side) => buildSide(side, bySide.get(side) ?? 0, tree));
   return { ...whole('carcase', null, 'Carcase'), level: 'carcase', estimatedGrams: grams, children };

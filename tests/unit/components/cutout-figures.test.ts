@@ -46,8 +46,9 @@ describe('the balance of a cutout', () => {
 });
 
 describe('entering weights', () => {
-  it('offers the parts of one side that a scale can weigh: no loss, not the other side', () => {
+  it('offers the hung carcase and the parts of one side that a scale can weigh: no loss, not the other side', () => {
     expect(weighableOf(nodes, 'left').map(({ path }) => path)).toEqual([
+      'hung',
       'left',
       'left/fore',
       'left/fore/brisket',
