@@ -35,7 +35,6 @@ describe('who may open which page of the office', () => {
     expect(placesFor('customer')).toEqual([]);
     expect(placesFor('packer').map((place) => place.label)).toEqual(['Cutting days']);
     expect(dayPlaces('a1', 'packer').map((place) => place.label)).toEqual(['Packing', 'Run sheet']);
-    expect(dayPlaces('a1', 'owner')).toHaveLength(5);
     expect(dayPlaces('a1', 'owner')).toHaveLength(7);
   });
 });
