@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { proposeCorrection } from '#shared/engine/cutout/propose-correction.ts';
+import { proposeCorrection, type CorrectionRow } from '#shared/engine/cutout/propose-correction.ts';
 import { sidesOfCutout, type SideCut } from '#shared/engine/cutout/weighed-sides.ts';
 import { checkSpecification } from '#shared/engine/figures/check-specification.ts';
 import type { Specification } from '#shared/engine/figures/specification.ts';
@@ -87,5 +87,33 @@ describe('what the farm learns from its own scales', () => {
     const measured = { ...facts.measured, ...Object.fromEntries(lines.map(({ path, grams }) => [path, grams])) };
     const { rows } = proposeCorrection(traditionalSide, sidesOfCutout('heavy', cutCarcase({ ...facts, measured })));
     for (const { seenPpht } of rows) expect(Math.abs(seenPpht - 100_000)).toBeLessThan(30);
+  });
+
+  it('in whatever order the sides come, proposes the same', () => {
+    const history = cutDays(4);
+    expect(proposeCorrection(traditionalSide, history.toReversed())).toEqual(
+      proposeCorrection(traditionalSide, history),
+    );
+  });
+
+  it('once it has learned from four sides, moves by 4 of 14 in place of 4 of 10', () => {
+    const learned = new Map([['brisket/rolled/brisket-joint', 4]]);
+    const joint = (rows: CorrectionRow[]) => rows.find(({ path }) => path === 'brisket/rolled/brisket-joint');
+    const fresh = joint(proposeCorrection(traditionalSide, cutDays(2)).rows);
+    const slower = joint(proposeCorrection(traditionalSide, cutDays(2), learned).rows);
+    expect([fresh?.priorSides, slower?.priorSides]).toEqual([6, 10]);
+    const seen = (fresh?.seenPpht ?? 0) - 100_000;
+    expect(Math.abs((fresh?.proposedPpht ?? 0) - 100_000 - (seen * 4) / 10)).toBeLessThanOrEqual(1);
+    expect(Math.abs((slower?.proposedPpht ?? 0) - 100_000 - (seen * 4) / 14)).toBeLessThanOrEqual(1);
+  });
+
+  it('of a way that shares its lines with another on one primal, teaches the way that was cut', () => {
+    const path = 'left/hind/loin/sirloin-steak';
+    const ways = { left: { 'loin-rump': 'steaks-rump-seamed' } };
+    const foreseen = cutCarcase({}, { ways });
+    const grams = foreseen.nodes.find((node) => node.path === path)?.grams ?? 0;
+    const cut = cutCarcase({ measured: { [path]: Math.round(grams * 1.04) } }, { ways });
+    const { rows } = proposeCorrection(traditionalSide, sidesOfCutout('steer', cut));
+    expect(rows.map((row) => row.path)).toEqual(['loin/steaks-rump-seamed/sirloin-steak']);
   });
 });

@@ -1,9 +1,13 @@
 import * as fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import type { CarcaseFacts, Cutout } from '#shared/engine/cutout/cutout-types.ts';
+import type { CarcaseFacts, Cutout, CutoutNode } from '#shared/engine/cutout/cutout-types.ts';
+import { weighByPacks } from '#shared/engine/cutout/packed-lines.ts';
+import { proposeCorrection } from '#shared/engine/cutout/propose-correction.ts';
+import { sidesOfCutout, type SideCut } from '#shared/engine/cutout/weighed-sides.ts';
 import { EngineError } from '#shared/engine/engine-error.ts';
 import { listSpecificationFaults } from '#shared/engine/figures/check-specification.ts';
 import { CONFORMATIONS, FAT_CLASSES } from '#shared/engine/figures/class-scale.ts';
+import { Specification } from '#shared/engine/figures/specification.ts';
 import { traditionalSide } from '#shared/engine/figures/traditional-side.ts';
 import { cutCarcase, listLeaks } from '#tests/support/make-carcase-facts.ts';
 import { anySpecification } from '#tests/support/any-specification.ts';
@@ -26,7 +30,9 @@ const anyScales = fc.array(fc.record({ at: fc.nat(10_000), perMille: fc.integer(
   maxLength: 12,
 });
 
-function weigh(before: Cutout, scales: { at: number; perMille: number }[]): Record<string, number> {
+type Scales = { at: number; perMille: number }[];
+
+function weigh(before: Cutout, scales: Scales): Record<string, number> {
   const measured: Record<string, number> = {};
   for (const { at, perMille } of scales) {
     const node = before.nodes[at % before.nodes.length];
@@ -100,6 +106,75 @@ describe('for any specification, carcase and class', () => {
         expect(weights(other)).toEqual(weights(one));
       }),
       { ...settings, numRuns: 30 },
+    );
+  });
+});
+
+describe('for any specification and whatever was weighed of it', () => {
+  /** Both sides of a carcase with some of their parts weighed; null where the engine refuses the weights. */
+  function cutSides(specification: Specification, facts: Partial<CarcaseFacts>, scales: Scales): SideCut[] | null {
+    const measured = weigh(cutCarcase(facts, { specification }), scales);
+    const result = cutOrRefuse(() => cutCarcase({ ...facts, measured }, { specification }));
+    return result && sidesOfCutout(`carcase ${facts.coldGrams}`, result);
+  }
+
+  it('the proposed shares add up, hold no fraction and do not depend on the order of the sides', () => {
+    let proposed = 0;
+    fc.assert(
+      fc.property(
+        anySpecification,
+        fc.array(fc.tuple(anyFacts, anyScales), { minLength: 1, maxLength: 3 }),
+        (specification, carcases) => {
+          const history = carcases.flatMap(([facts, scales]) => cutSides(specification, facts, scales) ?? []);
+          const correction = proposeCorrection(specification, history);
+          proposed += correction.rows.length;
+          expect(listSpecificationFaults(correction.specification)).toEqual([]);
+          expect(Specification.safeParse(correction.specification).success).toBe(true);
+          for (const row of correction.rows) {
+            const figures = [row.sides, row.estimatedGrams, row.weighedGrams, row.seenPpht, row.proposedPpht];
+            expect(figures.every((figure) => Number.isSafeInteger(figure) && figure >= 0)).toBe(true);
+          }
+          expect(proposeCorrection(specification, history.toReversed())).toEqual(correction);
+        },
+      ),
+      settings,
+    );
+    expect(proposed).toBeGreaterThan(50);
+  });
+
+  it('packs, shared over the lines that give their cut, are counted to the gram', () => {
+    fc.assert(
+      fc.property(anySpecification, anyFacts, fc.integer({ min: 1, max: 60_000 }), (specification, facts, grams) => {
+        const { nodes } = cutCarcase(facts, { specification });
+        const ofCut = (list: readonly CutoutNode[]) => list.filter(({ cutId }) => cutId === 'diced-beef');
+        const isGiven = ofCut(nodes).some(({ estimatedGrams }) => estimatedGrams > 0);
+        const weighed = weighByPacks(nodes, { 'diced-beef': grams }, new Set());
+        const sum = ofCut(weighed)
+          .filter(({ source }) => source === 'weighed')
+          .reduce((all, one) => all + one.grams, 0);
+        expect(sum).toBe(isGiven ? grams : 0);
+        expect(weighed.filter(({ cutId }) => cutId !== 'diced-beef')).toEqual(
+          nodes.filter(({ cutId }) => cutId !== 'diced-beef'),
+        );
+      }),
+      settings,
+    );
+  });
+
+  it('with sides of unlike weight, parts the carcase by them to the gram', () => {
+    fc.assert(
+      fc.property(
+        anySpecification,
+        anyFacts,
+        fc.tuple(fc.integer({ min: 20_000, max: 360_000 }), fc.integer({ min: 20_000, max: 360_000 })),
+        (specification, facts, [left, right]) => {
+          const result = cutCarcase({ ...facts, sideGrams: { left, right } }, { specification });
+          expect(listLeaks(result)).toEqual([]);
+          const grams = result.nodes.find(({ path }) => path === 'left')?.grams ?? 0;
+          expect(Math.abs(grams - (result.hung.grams * left) / (left + right))).toBeLessThan(1);
+        },
+      ),
+      settings,
     );
   });
 });
