@@ -19,6 +19,7 @@ import { AppError, type FieldErrors } from '#shared/errors.ts';
 import { call } from './api.ts';
 import { useLoaded, type Loaded } from './loaded.ts';
 import { STALE } from './query-client.ts';
+import { keptBox } from './use-basket.ts';
 
 /** While the payment company's word is on its way: often at first, then with patience. */
 const POLL_SOON_MS = 1_500;
@@ -53,10 +54,10 @@ export function useOpenOrder(token: string) {
   return useQuery(orderQuery(token));
 }
 
-export function basketPriceQuery(dayId: string, lines: BasketLine[]) {
+export function basketPriceQuery(dayId: string, lines: BasketLine[], kept: { waitingToken?: string }) {
   return queryOptions({
-    queryKey: ['basket', dayId, lines],
-    queryFn: ({ signal }) => call(priceBasket, { body: { dayId, lines }, signal }),
+    queryKey: ['basket', dayId, lines, kept],
+    queryFn: ({ signal }) => call(priceBasket, { body: { dayId, lines, ...kept }, signal }),
     staleTime: STALE.stock,
     placeholderData: keepPreviousData,
   });
@@ -64,14 +65,15 @@ export function basketPriceQuery(dayId: string, lines: BasketLine[]) {
 
 /** Prices, stock and the sum as the farm counts them; the former figures stay while a change is worked out. */
 export function useBasketPrice(dayId: string | undefined, lines: BasketLine[]) {
-  return useQuery({ ...basketPriceQuery(dayId ?? '', lines), enabled: dayId !== undefined && lines.length > 0 });
+  const query = basketPriceQuery(dayId ?? '', lines, keptBox());
+  return useQuery({ ...query, enabled: dayId !== undefined && lines.length > 0 });
 }
 
 /** Goes to payment. Whatever the answer, stock and slots have moved: both are asked for again. */
 export function usePlaceOrder() {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: (body: Checkout) => call(placeOrder, { body }),
+    mutationFn: (body: Checkout) => call(placeOrder, { body: { ...body, ...keptBox() } }),
     onSettled: () => forgetStock(client),
   });
 }

@@ -17,11 +17,13 @@ export type Basket = {
   items: BasketItem[];
   /** The order that was made of this basket and is not paid yet. */
   orderToken: string | null;
+  /** From the waiting list: one box of this basket is kept for whoever has this token. */
+  keptToken: string | null;
 };
 
 const STORE = 'basket-1';
 const MOST_OF_ONE = 99;
-const EMPTY: Basket = { key: '', dayId: null, items: [], orderToken: null };
+const EMPTY: Basket = { key: '', dayId: null, items: [], orderToken: null, keptToken: null };
 
 const listeners = new Set<() => void>();
 let current: { text: string | null; basket: Basket } = { text: null, basket: EMPTY };
@@ -53,6 +55,7 @@ function parse(text: string | null): Basket {
       dayId: stored.dayId ?? null,
       items: stored.items.filter(isItem),
       orderToken: stored.orderToken ?? null,
+      keptToken: stored.keptToken ?? null,
     };
   } catch {
     return EMPTY;
@@ -121,6 +124,17 @@ export function chooseDay(dayId: string): void {
   write((basket) => ({ ...basket, dayId }));
 }
 
+/** Remembers the token of a box that the waiting list keeps, for the basket's price and for the order. */
+export function noteKept(token: string): void {
+  write((basket) => ({ ...basket, keptToken: token }));
+}
+
+/** What an order of this basket says of the waiting list. */
+export function keptBox(): { waitingToken?: string } {
+  const { keptToken } = read();
+  return keptToken ? { waitingToken: keptToken } : {};
+}
+
 /** Remembers the order that waits for payment, so that the basket can be emptied once it is paid. */
 export function noteOrder(token: string): void {
   write((basket) => ({ ...basket, orderToken: token }));
@@ -134,6 +148,7 @@ export function settleOrder(token: string, outcome: 'paid' | 'given up'): void {
     key: crypto.randomUUID(),
     items: outcome === 'paid' ? [] : basket.items,
     orderToken: null,
+    keptToken: null,
   }));
 }
 

@@ -182,7 +182,7 @@ describe('a box that comes free', () => {
     await cancel(one.token);
     await serveWaitingList(world.deps);
     world.clock.advance({ minutes: 24 * 60 + 1 });
-    world.payments.advance(24 * 3600 + 60);
+    world.payments.advance({ minutes: 24 * 60 + 1 });
     await serveWaitingList(world.deps);
     expect([(await entryOf('first@example.com')).state, (await entryOf('second@example.com')).state]).toEqual([
       'lapsed',

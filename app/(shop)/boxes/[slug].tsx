@@ -14,6 +14,7 @@ import { LoadedView } from '#components/shop/loaded-view.tsx';
 import { sellerWords } from '#components/shop/seller-words.ts';
 import { ShopPage } from '#components/shop/shop-page.tsx';
 import { css } from '#components/theme/css.ts';
+import { JoinForm } from '#components/waiting-list/join-form.tsx';
 import { ButtonLink } from '#components/ui/button-link.tsx';
 import { loadFarm, type Farm } from '#hooks/farm.ts';
 import { load, type Loaded } from '#hooks/loaded.ts';
@@ -21,8 +22,10 @@ import { pageMetadata } from '#hooks/page-metadata.ts';
 import { useBox } from '#hooks/shop.ts';
 import { chooseDay, quantityOf, setQuantity, useBasket } from '#hooks/use-basket.ts';
 import { useTitle } from '#hooks/use-title.ts';
+import { useJoinWaitingList } from '#hooks/waiting-list.ts';
 import { getBox, type Box } from '#shared/contracts/shop.ts';
 import { formatMoney, formatWeight } from '#shared/domain/words.ts';
+import { AppError } from '#shared/errors.ts';
 
 type Page = { farm: Farm | null; box: Loaded<Box> };
 
@@ -100,11 +103,32 @@ function BoxPage({ box, farm }: { box: Box; farm: Farm | null }) {
             }}
             movesFrom={basketDay && basketDay.id !== dayId ? basketDay.day : undefined}
           />
+          {box.offers.some((offer) => offer.dayId === dayId && offer.free > 0) ? null : (
+            <Waiting box={box} day={open.find((day) => day.id === dayId)} />
+          )}
         </View>
       </View>
       <KeepingAdvice />
       <DistanceFacts seller={farm ? sellerWords(farm) : undefined} />
       <BoxJsonLd box={box} farmName={farm?.name ?? box.name} />
     </View>
+  );
+}
+
+/** Sold out on the chosen day: a place on the list instead. */
+function Waiting({ box, day }: { box: Box; day: { id: string; day: string } | undefined }) {
+  const join = useJoinWaitingList();
+  const { error } = join;
+  const fields = error instanceof AppError ? error.fields : undefined;
+  return (
+    <JoinForm
+      key={day?.id ?? 'any'}
+      box={box.name}
+      day={day?.day}
+      isSending={join.isPending}
+      sentTo={join.data?.sentTo}
+      refusal={error ? { message: error.message, email: fields?.email } : undefined}
+      onJoin={({ email, isAnyDay }) => join.mutate({ slug: box.slug, email, ...(isAnyDay ? {} : { dayId: day?.id }) })}
+    />
   );
 }

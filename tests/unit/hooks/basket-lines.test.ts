@@ -12,6 +12,7 @@ function basketOf(dayId: string | null, quantity = 1): Basket {
       { kind: 'loose', productId: 'mince', name: 'Mince', quantity: 2 },
     ],
     orderToken: null,
+    keptToken: null,
   };
 }
 
