@@ -50,6 +50,7 @@ const deps: Deps = {
   clock: systemClock,
   origin: env.PUBLIC_ORIGIN.replace(/\/$/, ''),
   mailInboundToken: env.MAIL_INBOUND_TOKEN,
+  costlyPostsPerMinute: env.COSTLY_POSTS_PER_MINUTE,
 };
 
 try {

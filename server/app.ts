@@ -16,6 +16,7 @@ import { addFeedbackRoutes } from './feedback/feedback-routes.ts';
 import { addHerdRoutes } from './herd/herd-routes.ts';
 import { addHealthRoutes } from './http/health-routes.ts';
 import { clientAddress, oneLoopbackName, requestId, sameOrigin, sanePath } from './http/guards.ts';
+import { COSTLY_POSTS, limitCostly } from './http/limits.ts';
 import { pages } from './http/pages.ts';
 import { answerErrors } from './http/problem.ts';
 import type { Api } from './http/route.ts';
@@ -78,6 +79,7 @@ export function createApp(deps: Deps, webRoot: string | null): App {
   ]) {
     add(api, deps);
   }
+  app.post(COSTLY_POSTS, limitCostly(deps.costlyPostsPerMinute));
   app.use(sameOrigin, express.json({ limit: '256kb' }), api.router);
   app.use('/api', () => {
     throw new AppError('NOT_FOUND', 'There is no such address in the API.');

@@ -29,4 +29,6 @@ export type Deps = {
   /** The address that people type, without a slash at the end. */
   origin: string;
   mailInboundToken: string;
+  /** Posts a minute from one address that hold stock or cost something. */
+  costlyPostsPerMinute: number;
 };

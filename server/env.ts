@@ -17,6 +17,7 @@ const Env = z.object({
   SMTP_URL: z.url(),
   MAIL_FROM: z.string().min(3),
   MAIL_INBOUND_TOKEN: z.string().min(16),
+  COSTLY_POSTS_PER_MINUTE: z.coerce.number().int().min(1).default(30),
 });
 export type Env = z.infer<typeof Env>;
 

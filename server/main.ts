@@ -43,6 +43,7 @@ const deps: Deps = {
   clock: systemClock,
   origin,
   mailInboundToken: env.MAIL_INBOUND_TOKEN,
+  costlyPostsPerMinute: env.COSTLY_POSTS_PER_MINUTE,
 };
 
 tellPagesTheApi(env.PORT);

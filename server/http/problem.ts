@@ -13,6 +13,7 @@ const TITLES: Partial<Record<ErrorCode, string>> = {
   SLOT_FULL: 'That time is full',
   CUTOFF_PASSED: 'Too late for this day',
   BASKET_EXPIRED: 'The basket has expired',
+  TOO_MANY_REQUESTS: 'Too many at once',
   INTERNAL: 'A fault of ours',
   PAYMENTS_DOWN: 'Payments cannot be reached',
 };

@@ -4,6 +4,7 @@ import * as orders from '#shared/contracts/orders.ts';
 import * as schema from '#shared/contracts/orders-schema.ts';
 import type { Deps } from '#server/deps.ts';
 import { download, route, signedIn, type Api } from '#server/http/route.ts';
+import { readFailedRefunds, retryRefund } from '#server/payments/retry-refund.ts';
 import { priceOf } from './basket.ts';
 import { cancelOrder, cancelOrderByOwner } from './cancel-order.ts';
 import { closePage, placeOrder } from './place-order.ts';
@@ -47,6 +48,14 @@ export function addOrderRoutes(api: Api, deps: Deps): void {
   route(api, orders.listOrders, {
     schema: schema.listOrdersSchema,
     handle: async ({ query }) => ({ orders: await readSummaries(deps.db, query) }),
+  });
+  route(api, orders.listFailedRefunds, {
+    schema: schema.listFailedRefundsSchema,
+    handle: () => readFailedRefunds(deps),
+  });
+  route(api, orders.retryRefund, {
+    schema: schema.retryRefundSchema,
+    handle: ({ params }, caller) => retryRefund(deps, signedIn(caller).id, params.paymentId),
   });
   route(api, orders.cancelOrderByOwner, {
     schema: schema.cancelOrderByOwnerSchema,

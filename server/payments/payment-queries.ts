@@ -75,6 +75,23 @@ export async function updatePayment(
   await db.update(payment).set(change).where(eq(payment.id, paymentId));
 }
 
+/** Refunds that stand as failed, the oldest order first. */
+export function listFailedRefunds(db: Db | Tx) {
+  return db
+    .select({
+      paymentId: payment.id,
+      orderNo: customerOrder.orderNo,
+      name: customerOrder.name,
+      amountPence: payment.amountPence,
+      reason: payment.reason,
+      error: payment.error,
+    })
+    .from(payment)
+    .innerJoin(customerOrder, eq(customerOrder.id, payment.orderId))
+    .where(and(eq(payment.kind, 'refund'), eq(payment.state, 'failed')))
+    .orderBy(asc(customerOrder.orderNo), asc(payment.createdAt));
+}
+
 /** False when this event has been here before. */
 export async function insertEvent(
   tx: Tx,

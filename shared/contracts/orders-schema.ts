@@ -157,6 +157,21 @@ export const listOrdersSchema = {
   query: z.strictObject({ dayId: Id.optional(), state: z.enum(ORDER_STATES).optional() }),
   answer: z.strictObject({ orders: z.array(OrderSummary) }),
 };
+/** A refund that the payment company or the bank refused. */
+export const FailedRefund = z.strictObject({
+  paymentId: Id,
+  orderNo: z.int(),
+  name: z.string(),
+  amountPence: z.int(),
+  reason: z.string(),
+  error: z.string().nullable(),
+});
+export type FailedRefund = z.infer<typeof FailedRefund>;
+export const listFailedRefundsSchema = { answer: z.strictObject({ refunds: z.array(FailedRefund) }) };
+export const retryRefundSchema = {
+  params: z.strictObject({ paymentId: Id }),
+  answer: z.strictObject({ refunds: z.array(FailedRefund) }),
+};
 export const cancelOrderByOwnerSchema = {
   params: z.strictObject({ orderId: Id }),
   body: z.strictObject({ reason: Line }),

@@ -127,6 +127,8 @@ const MAY_CALL: Record<string, Who[]> = {
   'POST /api/office/orders/:orderId/state': FARM,
   'GET /api/office/orders': OWNER,
   'POST /api/office/orders/:orderId/cancel': OWNER,
+  'GET /api/office/failed-refunds': OWNER,
+  'POST /api/office/failed-refunds/:paymentId/retry': OWNER,
   'GET /api/today': OWNER,
   'GET /api/office/box-kinds': OWNER,
   'PUT /api/office/box-kinds/:boxKindId': OWNER,

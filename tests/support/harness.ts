@@ -69,6 +69,7 @@ export async function startWorld({ withPages = false } = {}) {
     clock,
     origin,
     mailInboundToken: INBOUND_TOKEN,
+    costlyPostsPerMinute: 100_000,
   };
   const app = createApp(deps, withPages ? path.join(import.meta.dirname, '../..') : null);
   if (withPages) tellPagesTheApi(port);
