@@ -15,5 +15,6 @@ export * from './packs.ts';
 export * from './photographs.ts';
 export * from './products.ts';
 export * from './promo.ts';
+export * from './standing-orders.ts';
 export * from './trade.ts';
 export * from './waiting-list.ts';

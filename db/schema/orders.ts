@@ -91,6 +91,8 @@ export const customerOrder = pgTable(
     /** The card kept with the payment company for the rest. */
     providerCustomerId: text(),
     providerMethodId: text(),
+    /** A standing order begins with this one: the card is kept for the boxes to come. */
+    keepsCard: boolean().notNull().default(false),
     reachedPaymentAt: instant().notNull(),
     /** True while this order's lines and slot are counted as held. */
     isHeld: boolean().notNull().default(true),
