@@ -1,5 +1,11 @@
-import { queryOptions, useQuery } from '@tanstack/react-query';
-import { getDayMargin, getPriceGrids, savePriceGrid, type PriceGridEdit } from '#shared/contracts/margin.ts';
+import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query';
+import {
+  getDayMargin,
+  getPriceGrids,
+  savePriceGrid,
+  type Basis,
+  type PriceGridEdit,
+} from '#shared/contracts/margin.ts';
 import { call } from './api.ts';
 import { STALE } from './query-client.ts';
 import { useFarmMutation } from './use-farm-mutation.ts';
@@ -12,10 +18,10 @@ export function priceGridsQuery() {
   });
 }
 
-export function dayMarginQuery(dayId: string) {
+export function dayMarginQuery(dayId: string, basis: Basis) {
   return queryOptions({
-    queryKey: ['day-margin', dayId],
-    queryFn: ({ signal }) => call(getDayMargin, { params: { dayId }, signal }),
+    queryKey: ['day-margin', dayId, basis],
+    queryFn: ({ signal }) => call(getDayMargin, { params: { dayId }, query: { basis }, signal }),
     staleTime: STALE.stock,
   });
 }
@@ -24,8 +30,9 @@ export function usePriceGrids() {
   return useQuery(priceGridsQuery());
 }
 
-export function useDayMargin(dayId: string) {
-  return useQuery(dayMarginQuery(dayId));
+export function useDayMargin(dayId: string, basis: Basis) {
+  // The other basis comes a moment later: until then the page stays as it is.
+  return useQuery({ ...dayMarginQuery(dayId, basis), placeholderData: keepPreviousData });
 }
 
 export function useSavePriceGrid() {

@@ -55,7 +55,7 @@ export function BarChart({ title, axis, series, groups, tickWords }: BarChartPro
         ))}
         {groups.map((group, index) => (
           <g key={group.id} transform={`translate(0 ${index * GROUP})`}>
-            <text x={0} y={16} className="t-small" style={{ fill: 'var(--text)', fontWeight: 600 }}>
+            <text x={8} y={16} className="t-small" style={{ fill: 'var(--text)', fontWeight: 600 }}>
               {group.name}
             </text>
             {group.bars.map((bar, row) => (

@@ -14,7 +14,7 @@ export function BoxPriceTable({ boxes, cardFee }: Pick<DayMargin, 'boxes' | 'car
         caption="Prices at which a box just pays, and at which selling deadweight would have been better"
         rows={boxes}
         rowKey={({ boxKindId }) => boxKindId}
-        empty="No boxes in this plan."
+        empty="No boxes here."
         columns={[
           { id: 'name', title: 'Box', cell: ({ name }) => name },
           { id: 'boxes', title: 'Boxes', align: 'end', cell: ({ boxes: count }) => count },
@@ -25,7 +25,11 @@ export function BoxPriceTable({ boxes, cardFee }: Pick<DayMargin, 'boxes' | 'car
             title: 'Deadweight better below',
             align: 'end',
             cell: ({ deadweightPricePence }) =>
-              deadweightPricePence === null ? 'none planned' : formatMoney(deadweightPricePence),
+              deadweightPricePence === null
+                ? 'none'
+                : deadweightPricePence === 0
+                  ? 'at no price'
+                  : formatMoney(deadweightPricePence),
           },
         ]}
       />

@@ -13,6 +13,6 @@ export function addMarginRoutes(api: Api, deps: Deps): void {
   });
   route(api, contract.getDayMargin, {
     schema: schema.getDayMarginSchema,
-    handle: async ({ params }) => ({ margin: await getDayMargin(deps, params.dayId) }),
+    handle: async ({ params, query }) => ({ margin: await getDayMargin(deps, params.dayId, query.basis) }),
   });
 }

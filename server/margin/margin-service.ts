@@ -1,4 +1,4 @@
-import type { DayMargin } from '#shared/contracts/margin.ts';
+import type { Basis, DayMargin } from '#shared/contracts/margin.ts';
 import { formatDayTime } from '#shared/domain/words.ts';
 import {
   findLatestAllocation,
@@ -11,18 +11,24 @@ import { groupBy } from '#server/farm/group-by.ts';
 import { readDayMoney } from './carcase-accounts.ts';
 import { describeMargin, type Ledger } from './describe-margin.ts';
 import { planEntries } from './plan-margin.ts';
+import { readSoldDay } from './sold-margin.ts';
 
-/** The margin of a cutting day as planned: by the plan that is on sale, else by the newest. Null without a plan. */
-export async function getDayMargin({ db }: Deps, dayId: string): Promise<DayMargin | null> {
+const SOLD =
+  'What is sold so far, as it was paid and refunded; reservations as they are charged. Beef that is not sold yet brings nothing, while its carcase is paid for whole.';
+
+/** The margin of a cutting day, by the plan that is on sale, else by the newest. Null without a plan. */
+export async function getDayMargin({ db }: Deps, dayId: string, basis: Basis): Promise<DayMargin | null> {
   const figures = await loadDayCutouts(db, dayId);
   const row = (await findPublishedAllocation(db, dayId)) ?? (await findLatestAllocation(db, dayId));
   if (!row) return null;
   const money = await readDayMoney(db, figures);
+  const ledger =
+    basis === 'sold'
+      ? { ...(await readSoldDay(db, { figures, row, money })), restsOn: SOLD }
+      : { entries: planEntries(row, money), boxes: plannedBoxes(row), restsOn: restsOn(row) };
   return describeMargin(figures, money, {
-    basis: 'planned',
-    restsOn: restsOn(row),
-    entries: planEntries(row, money),
-    boxes: plannedBoxes(row),
+    ...ledger,
+    basis,
     cutName: (cutId) => row.input.input.cuts.find(({ id }) => id === cutId)?.name ?? cutId,
   });
 }

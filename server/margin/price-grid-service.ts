@@ -25,7 +25,7 @@ const START: GridInForce = {
   baseTenthPencePerKg: 6_750,
   grid: {
     ...britishGrid,
-    source: `Base: R4L steers, week ending 15 March 2025. Adjustments: ${britishGrid.source.toLowerCase()}`,
+    source: `Base: R4L steers, week ending 15 March 2025. Adjustments: ${britishGrid.source}`,
   },
   levyPence: 506,
   haulagePence: 2_500,

@@ -155,10 +155,14 @@ export const BoxPrices = z.strictObject({
 });
 export type BoxPrices = z.infer<typeof BoxPrices>;
 
+/** `planned`: as if all that the plan offers were sold. `sold`: what was paid and refunded so far. */
+export const Basis = z.enum(['planned', 'sold']);
+export type Basis = z.infer<typeof Basis>;
+
 export const DayMargin = z.strictObject({
   dayId: Id,
   day: Day,
-  basis: z.enum(['planned']),
+  basis: Basis,
   /** What the ledger rests on, in words. */
   restsOn: z.string(),
   grid: z.strictObject({ edition: z.int(), name: z.string(), source: z.string(), validFrom: Day }),
@@ -175,6 +179,7 @@ export type DayMargin = z.infer<typeof DayMargin>;
 
 export const getDayMarginSchema = {
   params: z.strictObject({ dayId: Id }),
+  query: z.strictObject({ basis: Basis }),
   /** Null while nothing has been planned. */
   answer: z.strictObject({ margin: DayMargin.nullable() }),
 };

@@ -1,14 +1,18 @@
 import { and, eq } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { offer } from '#db/schema/allocations.ts';
 import { auditEntry } from '#db/schema/audit.ts';
 import { carcase } from '#db/schema/carcases.ts';
 import { priceGrid } from '#db/schema/margin.ts';
+import { orderLine, payment } from '#db/schema/orders.ts';
+import { pack, packAssignment } from '#db/schema/packs.ts';
 import type { Allocation } from '#shared/contracts/allocation.ts';
 import type { DayMargin, MarginRow, PriceGrid, PriceGridEdit } from '#shared/contracts/margin.ts';
 import { addDays } from '#shared/domain/day.ts';
 import { priceForWeight } from '#shared/domain/money.ts';
 import { britishGrid } from '#shared/engine/figures/price-grids.ts';
 import { startWorld, type World } from '#tests/support/harness.ts';
+import { makeConfirmedOrder } from '#tests/support/make-order.ts';
 import { makeSellingDay } from '#tests/support/make-selling-day.ts';
 import { workOut } from '#tests/support/work-out.ts';
 
@@ -89,7 +93,7 @@ describe('the price grid', () => {
 
 describe('the margin of a cutting day', () => {
   let plan: Allocation;
-  const path = () => `/api/cutting-days/${farm.day.id}/margin`;
+  const path = () => `/api/cutting-days/${farm.day.id}/margin?basis=planned`;
   const read = async () => ((await owner.get(path()).expect(200)).body as { margin: DayMargin | null }).margin;
   const readMargin = async () => {
     const margin = await read();
@@ -167,6 +171,71 @@ describe('the margin of a cutting day', () => {
   });
 
   test('of a day that does not exist, is not found', async () => {
-    await owner.get('/api/cutting-days/00000000-0000-4000-8000-000000000000/margin').expect(404);
+    await owner.get('/api/cutting-days/00000000-0000-4000-8000-000000000000/margin?basis=planned').expect(404);
+  });
+});
+
+describe('the margin of what is sold', () => {
+  const read = async () => {
+    const answer = await owner.get(`/api/cutting-days/${farm.day.id}/margin?basis=sold`).expect(200);
+    const { margin } = answer.body as { margin: DayMargin | null };
+    if (!margin) throw new Error('there is no margin');
+    return margin;
+  };
+  const sum = (rows: readonly Pick<MarginRow, 'margin'>[]) =>
+    rows.reduce((total, { margin }) => total + margin.gainPence, 0);
+  let orderId: string;
+  let paidPence: number;
+
+  test(
+    'before anything is sold, has its carcases to pay for and no income',
+    async () => {
+      const plan = await workOut(owner, farm.day.id);
+      const { figuresVersion } = plan;
+      await owner.post(`/api/allocations/${plan.id}/publish`).send({ figuresVersion }).expect(200);
+      const { whole, byChannel } = await read();
+      expect(whole.incomePence).toBe(0);
+      expect(whole.costs).toMatchObject({ killPence: 2 * 16_500, cardFeesPence: 0, refundsPence: 0 });
+      expect(byChannel.map(({ name }) => name)).toEqual(['Not sold']);
+    },
+    PATIENCE,
+  );
+
+  test('takes an order at what was paid, less the card fee and what went back', async () => {
+    const isGrill = and(eq(offer.cuttingDayId, farm.day.id), eq(offer.boxKindId, farm.grillId));
+    const [grill] = await world.db.select().from(offer).where(isGrill);
+    const counter = { day: farm.day, boxOffer: { id: grill?.id ?? '' }, slot: farm.slot };
+    const order = await makeConfirmedOrder(world, counter, { lines: [{ offerId: grill?.id, quantity: 2 }] });
+    [orderId, paidPence] = [order.id, order.totalPence];
+    const [charge] = await world.db.select().from(payment).where(eq(payment.orderId, orderId));
+    const refund = { orderId, kind: 'refund', reason: 'light', amountPence: 300, state: 'done' } as const;
+    await world.db.insert(payment).values({ ...refund, chargeId: charge?.id ?? null });
+    const { whole, byChannel, byBox, byCut, carcases, boxes } = await read();
+    expect(whole.incomePence).toBe(paidPence);
+    const fee = Math.round((paidPence * 1_500) / 100_000) + 20;
+    expect(whole.costs).toMatchObject({ refundsPence: 300, cardFeesPence: fee });
+    expect(byBox[0]).toMatchObject({ name: 'Grill', margin: { incomePence: paidPence } });
+    expect(boxes.find(({ name }) => name === 'Grill')).toMatchObject({ boxes: 2, pricePence: 7_900 });
+    for (const rows of [carcases, byBox, byCut, byChannel]) expect(sum(rows)).toBe(whole.gainPence);
+  });
+
+  test('once it is packed, goes by the packs that lie in it and the carcase that they are of', async () => {
+    const [line] = await world.db.select().from(orderLine).where(eq(orderLine.orderId, orderId));
+    const [, second] = farm.carcases;
+    const packedOn = world.clock.today();
+    const [steak] = await world.db
+      .insert(pack)
+      .values({
+        ...{ code: 'PACK-OF-THE-TEST', cuttingDayId: farm.day.id, carcaseId: second?.id ?? '', cutId: 'fillet-steak' },
+        ...{ grams: 640, packedOn, useBy: addDays(packedOn, 9) },
+      })
+      .returning();
+    await world.db.insert(packAssignment).values({ packId: steak?.id ?? '', orderLineId: line?.id ?? '' });
+    const { byCut, carcases, whole } = await read();
+    expect(byCut.find(({ id }) => id === 'fillet-steak')?.margin.incomePence).toBe(paidPence);
+    const income = carcases.map(({ carcaseId, margin }) => [carcaseId === second?.id, margin.incomePence]);
+    expect(income).toContainEqual([true, paidPence]);
+    expect(income).toContainEqual([false, 0]);
+    expect(sum(carcases)).toBe(whole.gainPence);
   });
 });

@@ -101,6 +101,7 @@ function Workbench({ dayId, day, carcases, latest, published, members }: Workben
           }
         />
         <DayPlaces dayId={dayId} role="owner" path={path} />
+        {bench.plan.isWorking ? null : <TimeLimit seconds={bench.seconds} onChange={bench.setSeconds} />}
         <JobPanel {...bench.plan} onCancel={bench.plan.cancel} />
         {isUnsaved && !bench.plan.isWorking ? (
           <Notice kind="held" spoken title="The locks have changed." next="Work it out again to see what they cost." />
@@ -127,7 +128,6 @@ function Workbench({ dayId, day, carcases, latest, published, members }: Workben
             {workOut}
           </EmptyState>
         )}
-        <TimeLimit seconds={bench.seconds} onChange={bench.setSeconds} />
         {latest ? (
           <PublishSheet
             open={isPublishing}

@@ -1,4 +1,5 @@
 import { useLocalSearchParams } from 'expo-router';
+import { useState } from 'react';
 import { View } from 'react-native';
 import { BarChart } from '#components/margin/bar-chart.tsx';
 import { CarcaseMargins, nameCarcase } from '#components/margin/carcase-margins.tsx';
@@ -8,6 +9,7 @@ import { MarginTable } from '#components/margin/margin-table.tsx';
 import { DayPlaces } from '#components/office/day-places.tsx';
 import { css } from '#components/theme/css.ts';
 import { ButtonLink } from '#components/ui/button-link.tsx';
+import { ChipGroup } from '#components/ui/chip-group.tsx';
 import { Disclosure } from '#components/ui/disclosure.tsx';
 import { EmptyState } from '#components/ui/empty-state.tsx';
 import { Heading } from '#components/ui/heading.tsx';
@@ -17,7 +19,7 @@ import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useDayMargin } from '#hooks/margin.ts';
 import { useTitle } from '#hooks/use-title.ts';
-import type { DayMargin } from '#shared/contracts/margin.ts';
+import type { Basis, DayMargin } from '#shared/contracts/margin.ts';
 import { formatDay, formatDayWithYear, formatMoney, formatRate } from '#shared/domain/words.ts';
 
 const SHARING =
@@ -25,7 +27,8 @@ const SHARING =
 
 export default function MarginScreen() {
   const { dayId } = useLocalSearchParams<{ dayId: string }>();
-  const query = useDayMargin(dayId);
+  const [basis, setBasis] = useState<Basis>('planned');
+  const query = useDayMargin(dayId, basis);
   const path = `/office/cutting-days/${dayId}/margin`;
   return (
     <StateView
@@ -41,6 +44,15 @@ export default function MarginScreen() {
             lead={margin?.restsOn}
           />
           <DayPlaces dayId={dayId} role="owner" path={path} />
+          <ChipGroup
+            label="Reckoned on"
+            value={basis}
+            chips={[
+              { value: 'planned', label: 'The plan' },
+              { value: 'sold', label: 'What is sold' },
+            ]}
+            onChange={(value) => setBasis(value === 'sold' ? 'sold' : 'planned')}
+          />
           {margin ? <Margins margin={margin} /> : <NothingPlanned dayId={dayId} />}
         </View>
       )}
@@ -100,7 +112,9 @@ function Margins({ margin }: { margin: DayMargin }) {
       <MarginTable caption="Margin by kind of box" what="Box" rows={margin.byBox} sharing={SHARING} />
       <BoxPriceTable boxes={margin.boxes} cardFee={margin.cardFee} />
       <Heading level={2}>By cut</Heading>
-      <MarginTable caption="Margin by cut" what="Cut" rows={margin.byCut} sharing={SHARING} />
+      <Disclosure words={`Margin of ${margin.byCut.length} cuts`} ruled>
+        <MarginTable caption="Margin by cut" what="Cut" rows={margin.byCut} sharing={SHARING} />
+      </Disclosure>
       <Disclosure words="The joint cost and who carries it" ruled>
         <JointCostTable joint={margin.joint} />
       </Disclosure>
