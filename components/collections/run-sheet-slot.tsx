@@ -9,7 +9,7 @@ import { formatCount, formatDay, formatTime, londonDayAndTime } from '#shared/do
 
 type Slot = RunSheet['slots'][number];
 export type RunSheetOrder = Slot['orders'][number];
-export type Mark = 'ready' | 'collected' | 'missed';
+export type Mark = 'ready' | 'collected' | 'delivered' | 'missed';
 
 type RunSheetSlotProps = {
   slot: Slot;
@@ -23,12 +23,13 @@ const kinds: Record<string, 'free' | 'held' | 'sold' | 'quiet'> = {
   packed: 'held',
   confirmed: 'quiet',
   collected: 'sold',
+  delivered: 'sold',
   missed: 'held',
 };
 
 /** The orders of one quarter of an hour at one place, each with its tick. */
 export function RunSheetSlot({ slot, onMark, markingId }: RunSheetSlotProps) {
-  const waiting = slot.orders.filter((order) => order.state !== 'collected').length;
+  const waiting = slot.orders.filter((order) => order.state !== 'collected' && order.state !== 'delivered').length;
   const { day } = londonDayAndTime(slot.startsAt);
   return (
     <View style={css('w-stack-s')}>
@@ -37,7 +38,7 @@ export function RunSheetSlot({ slot, onMark, markingId }: RunSheetSlotProps) {
         <Text tone="quiet">{`${slot.pointName}, ${formatDay(day)}`}</Text>
       </View>
       <Text size="small" tone="quiet">
-        {waiting === 0 ? 'All collected.' : `${formatCount(waiting, 'order')} to hand over.`}
+        {waiting === 0 ? 'All handed over.' : `${formatCount(waiting, 'order')} to hand over.`}
       </Text>
       <View role="list" style={css('w-rows')}>
         {slot.orders.map((order) => (
@@ -47,6 +48,7 @@ export function RunSheetSlot({ slot, onMark, markingId }: RunSheetSlotProps) {
               <Badge kind={kinds[order.state] ?? 'quiet'}>{order.state}</Badge>
             </View>
             <Text>{`${order.items.join(', ')} · ${formatCount(order.packCount, 'pack')}`}</Text>
+            {order.address ? <Text>{order.address}</Text> : null}
             <Marks order={order} busy={markingId === order.id} onMark={(state) => onMark(order, state)} />
           </View>
         ))}
@@ -64,8 +66,8 @@ function Marks({ order, busy, onMark }: MarksProps) {
     return (
       <Button
         kind="quiet"
-        label="Put out ready"
-        name={`Put out ready ${who}`}
+        label={order.address ? 'Put on the van' : 'Put out ready'}
+        name={`${order.address ? 'Put on the van' : 'Put out ready'} ${who}`}
         busy={busy}
         onPress={() => onMark('ready')}
       />
@@ -74,18 +76,22 @@ function Marks({ order, busy, onMark }: MarksProps) {
   if (order.state === 'ready') {
     return (
       <View style={css('w-row')}>
-        <Button label="Collected" name={`Collected ${who}`} busy={busy} onPress={() => onMark('collected')} />
+        {order.address ? (
+          <Button label="Delivered" name={`Delivered ${who}`} busy={busy} onPress={() => onMark('delivered')} />
+        ) : (
+          <Button label="Collected" name={`Collected ${who}`} busy={busy} onPress={() => onMark('collected')} />
+        )}
         <Button
           kind="quiet"
-          label="Did not come"
-          name={`Did not come ${who}`}
+          label={order.address ? 'Nobody at home' : 'Did not come'}
+          name={`${order.address ? 'Nobody at home' : 'Did not come'} ${who}`}
           busy={busy}
           onPress={() => onMark('missed')}
         />
       </View>
     );
   }
-  if (order.state === 'collected') {
+  if (order.state === 'collected' || order.state === 'delivered') {
     return (
       <Button
         kind="quiet"

@@ -19,7 +19,8 @@ const eventOf = (orderId: string) => `ready to collect ${orderId}`;
 export async function readCollectionMails(deps: Deps, dayId: string): Promise<DayMails> {
   const day = await findDay(deps.db, dayId);
   if (!day) throw noSuchDay();
-  const rows = await listCollected(deps.db, { dayId });
+  // Who gets the van is told when it sets out.
+  const rows = (await listCollected(deps.db, { dayId })).filter(({ order }) => order.deliveryAddress === null);
   const sent = new Map(
     (
       await listMailsByEvent(
@@ -63,6 +64,7 @@ async function describe(deps: Deps, row: CollectedRow, sent: SentMail | undefine
 
 /** Why an order's mail must wait. Nobody is called for a box that is not filled. */
 function holdBackOf(order: OrderRow): string | null {
+  if (order.deliveryAddress) return 'The van brings it.';
   if (order.state === 'packed' || order.state === 'ready') return null;
   if (order.state === 'confirmed') return 'Not all of it is packed yet.';
   return `It is ${order.state} already.`;

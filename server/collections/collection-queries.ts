@@ -24,7 +24,7 @@ export function listCollected(db: Db | Tx, where: { dayId: string } | { orderId:
     .where(
       and(
         'dayId' in where ? eq(customerOrder.cuttingDayId, where.dayId) : eq(customerOrder.id, where.orderId),
-        inArray(customerOrder.state, ['confirmed', 'packed', 'ready', 'collected', 'missed']),
+        inArray(customerOrder.state, ['confirmed', 'packed', 'ready', 'collected', 'delivered', 'missed']),
       ),
     )
     .orderBy(asc(collectionSlot.startsAt), asc(collectionPoint.name), asc(customerOrder.orderNo));

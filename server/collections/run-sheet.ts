@@ -3,6 +3,7 @@ import { canMoveOrder, type OrderState } from '#shared/domain/order-state.ts';
 import { AppError } from '#shared/errors.ts';
 import type { Deps, Tx } from '#server/deps.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
+import { outForDeliveryMail } from '#server/mail/out-for-delivery.ts';
 import { missedCollectionMail } from '#server/mail/missed-collection.ts';
 import { queueMail } from '#server/mail/outbox.ts';
 import { lockOrder, updateOrder, type OrderRow } from '#server/orders/order-queries.ts';
@@ -12,7 +13,10 @@ import { listCollected, type CollectedRow } from './collection-queries.ts';
 
 type RunSheetOrder = RunSheet['slots'][number]['orders'][number];
 
-/** Who comes when, with what to hand over. No price and nothing about a person but the name on the box. */
+/**
+ * Who comes when, with what to hand over. No price and nothing about a person but the name on the box, and the address
+ * where the van brings it.
+ */
 export async function readRunSheet(deps: Deps, dayId: string): Promise<RunSheet> {
   const day = await findDay(deps.db, dayId);
   if (!day) throw new AppError('NOT_FOUND', 'There is no such cutting day.');
@@ -32,7 +36,9 @@ export async function readRunSheet(deps: Deps, dayId: string): Promise<RunSheet>
 
 function describe({ order, items, packCount }: CollectedRow): RunSheetOrder {
   const { id, orderNo, name, state, version } = order;
-  return { id, orderNo, name, items, packCount, state, version };
+  const { deliveryAddress, deliveryPostcode } = order;
+  const address = deliveryAddress ? [...deliveryAddress, deliveryPostcode ?? ''].join(', ') : null;
+  return { id, orderNo, name, items, packCount, address, state, version };
 }
 
 /** A tick on the run sheet; collected can be taken back to ready. */
@@ -55,8 +61,10 @@ export async function markOrder(
         `Order ${order.orderNo} is ${order.state} and cannot become ${mark.state}. Nothing was changed.`,
       );
     }
+    refuseOtherWay(order, mark.state);
     const marked = await updateOrder(tx, order.id, { state: mark.state, version: order.version + 1 });
     if (mark.state === 'missed') await tellMissed(tx, deps, marked);
+    if (mark.state === 'ready' && order.state === 'packed') await tellIfOnVan(tx, deps, marked);
     await recordAudit(tx, {
       byUserId: mark.byUserId,
       action: 'marked',
@@ -78,5 +86,27 @@ async function tellMissed(tx: Tx, deps: Deps, order: OrderRow): Promise<void> {
     orderId: order.id,
     to: order.email,
     ...missedCollectionMail(await readOrderFacts(deps, tx, order)),
+  });
+}
+
+/** Nothing that the van brings is collected, and nothing else is delivered. */
+function refuseOtherWay(order: OrderRow, state: OrderState): void {
+  const isDelivered = order.deliveryAddress !== null;
+  if ((state !== 'delivered' || isDelivered) && (state !== 'collected' || !isDelivered)) return;
+  throw new AppError(
+    'STATE_CHANGED',
+    `Order ${order.orderNo} is ${isDelivered ? 'brought by the van' : 'collected'} and cannot become ${state}. Nothing was changed.`,
+  );
+}
+
+/** Put on the van: the customer is told to expect it. */
+async function tellIfOnVan(tx: Tx, deps: Deps, order: OrderRow): Promise<void> {
+  if (!order.deliveryAddress) return;
+  await queueMail(tx, {
+    eventKey: `out for delivery ${order.id}`,
+    kind: 'out for delivery',
+    orderId: order.id,
+    to: order.email,
+    ...outForDeliveryMail(await readOrderFacts(deps, tx, order)),
   });
 }

@@ -151,6 +151,8 @@ export const RunSheetOrder = z.strictObject({
   name: z.string(),
   items: z.array(z.string()),
   packCount: z.int(),
+  /** Where the van brings it; null for what is collected. */
+  address: z.string().nullable(),
   state: z.string(),
   version: Version,
 });
@@ -170,6 +172,6 @@ export type RunSheet = z.infer<typeof RunSheet>;
 export const getRunSheetSchema = { params: DayId, answer: RunSheet };
 export const markOrderSchema = {
   params: z.strictObject({ orderId: Id }),
-  body: z.strictObject({ version: Version, state: z.enum(['ready', 'collected', 'missed']) }),
+  body: z.strictObject({ version: Version, state: z.enum(['ready', 'collected', 'delivered', 'missed']) }),
   answer: RunSheetOrder,
 };

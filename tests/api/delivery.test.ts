@@ -1,6 +1,6 @@
 import { eq } from 'drizzle-orm';
 import { afterAll, beforeAll, expect, test } from 'vitest';
-import { collectionSlot } from '#db/schema/orders.ts';
+import { collectionSlot, customerOrder } from '#db/schema/orders.ts';
 import { proveCounters } from '#server/orders/prove-counters.ts';
 import { londonDay } from '#shared/domain/day.ts';
 import type { DeliveryArea } from '#shared/contracts/delivery.ts';
@@ -17,7 +17,7 @@ const AREA = {
   name: 'The dale round',
   prefixes: ['ZZ1', 'ZZ12'],
   ...{ pricePence: 600, freeFromPence: 15_000, weekday: 5, startsAt: '13:00', endsAt: '17:00' },
-  ...{ capacity: 2, isActive: true },
+  ...{ capacity: 3, isActive: true },
 };
 
 beforeAll(async () => {
@@ -43,7 +43,7 @@ test('a postcode without its space, in small letters, is told the price, the day
   const answer = await ask('zz11aa');
   expect(answer.body).toMatchObject({
     postcode: 'ZZ1 1AA',
-    area: { name: 'The dale round', pricePence: 600, freeFromPence: 15_000, free: 2 },
+    area: { name: 'The dale round', pricePence: 600, freeFromPence: 15_000, free: 3 },
     nearest: null,
   });
   const { startsAt } = (answer.body as { area: { startsAt: string } }).area;
@@ -69,7 +69,7 @@ test('an order that the van brings, costs its delivery, takes a stop and says wh
     collection: { name: 'Your address', addressLines: ['2 Beck Row', 'Under Rigg', 'ZZ1 1AA'] },
   });
   const [round] = await world.db.select().from(collectionSlot).where(eq(collectionSlot.id, order.slotId));
-  expect(round).toMatchObject({ taken: 1, capacity: 2 });
+  expect(round).toMatchObject({ taken: 1, capacity: 3 });
   await world.runJobs();
   const mail = await world.mail.waitForMail('van@example.com');
   expect(mail.text).toContain('We bring it');
@@ -77,6 +77,30 @@ test('an order that the van brings, costs its delivery, takes a stop and says wh
   expect(mail.text).toContain('Delivery: £6.00');
   const points = await world.request().get(`/api/cutting-days/${stall.day.id}/collections`);
   expect((points.body as { points: { name: string }[] }).points.map((point) => point.name)).toEqual(['The farm gate']);
+});
+
+test('the owner marks an order that the van brings, and its customer is told once that it is on its way', async () => {
+  const order = await makeConfirmedOrder(world, stall, {
+    ...delivered('ZZ12 9XY', { email: 'road@example.com', lines: [{ offerId: stall.looseOffer.id, quantity: 1 }] }),
+  });
+  const packer = (await world.signIn('packer')).cookie;
+  await world.db.update(customerOrder).set({ state: 'packed' }).where(eq(customerOrder.id, order.id));
+  const mark = async (state: string) => {
+    const { version } = await getOrderRow(world, order.token);
+    return world.request(packer).post(`/api/office/orders/${order.id}/state`).send({ version, state });
+  };
+  expect((await mark('ready')).body).toMatchObject({ state: 'ready', address: '2 Beck Row, Under Rigg, ZZ12 9XY' });
+  expect((await mark('collected')).body).toMatchObject({ code: 'STATE_CHANGED' });
+  expect((await mark('delivered')).body).toMatchObject({ state: 'delivered' });
+  expect((await mark('ready')).status).toBe(200);
+  await mark('delivered');
+  await world.runJobs();
+  const isOut = (mail: { subject: string }) => mail.subject.startsWith(`Order ${order.orderNo} is on the van`);
+  const mail = await world.mail.waitForMail('road@example.com', isOut);
+  expect(mail.text).toContain('2 Beck Row');
+  expect(world.mail.messages().filter(isOut)).toHaveLength(1);
+  const mails = await world.request(owner).get(`/api/cutting-days/${stall.day.id}/collection-mails`);
+  expect((mails.body as { mails: { orderId: string }[] }).mails.map((each) => each.orderId)).not.toContain(order.id);
 });
 
 test('an order of the threshold and above, is brought for nothing', async () => {
@@ -98,7 +122,7 @@ test('a basket with neither a time nor an address, and one that names the van’
     .post('/api/orders')
     .send(basketFor(stall, { slotId: undefined }));
   expect(neither.body).toMatchObject({ fields: { slotId: expect.any(String) as unknown } });
-  const [round] = await world.db.select().from(collectionSlot).where(eq(collectionSlot.capacity, 2));
+  const [round] = await world.db.select().from(collectionSlot).where(eq(collectionSlot.capacity, 3));
   const van = await world
     .request()
     .post('/api/orders')

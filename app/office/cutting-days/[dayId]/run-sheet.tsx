@@ -33,11 +33,11 @@ function Sheet({ sheet }: { sheet: RunSheet }) {
   const me = useMe();
   const mark = useMarkOrder();
   const orders = sheet.slots.flatMap((slot) => slot.orders);
-  const collected = orders.filter((order) => order.state === 'collected').length;
+  const collected = orders.filter((order) => order.state === 'collected' || order.state === 'delivered').length;
   useTitle(`Run sheet ${formatDay(sheet.day)}`);
   return (
     <View style={css('w-stack-l')}>
-      <TitleBar title="Run sheet" above={`${formatDay(sheet.day)} · ${collected} of ${orders.length} collected`} />
+      <TitleBar title="Run sheet" above={`${formatDay(sheet.day)} · ${collected} of ${orders.length} handed over`} />
       <DayPlaces
         dayId={sheet.dayId}
         role={me.data?.user?.role ?? 'packer'}
