@@ -13,7 +13,7 @@ export function ComparisonTable({ caption, cuts }: { caption: string; cuts: read
       rowKey={({ id }) => id}
       empty="Nothing of it was weighed."
       columns={[
-        { id: 'name', title: 'Cut', cell: ({ name }) => name },
+        { id: 'name', title: 'Cut', cell: ({ id, name }) => (id.startsWith('primal:') ? `${name}, whole` : name) },
         { id: 'foreseen', title: 'Foreseen', align: 'end', cell: ({ estimatedGrams }) => formatGrams(estimatedGrams) },
         { id: 'weighed', title: 'Weighed', align: 'end', cell: ({ weighedGrams }) => formatGrams(weighedGrams) },
         {

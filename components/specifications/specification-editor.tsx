@@ -10,6 +10,7 @@ import type { SpecificationFault } from '#shared/engine/figures/check-specificat
 import type { Specification } from '#shared/engine/figures/specification.ts';
 import { copyWay, removeWay } from './edit-specification.ts';
 import { FaultList } from './fault-list.tsx';
+import { LineEditor } from './line-editor.tsx';
 import { PrimalEditor, QuarterEditor, SideEditor, type EditorProps } from './quarter-editor.tsx';
 import { isWrongAt, placeOfFault, totalOf, type Place } from './specification-sums.ts';
 import { SpecificationTree, TreeNode } from './specification-tree.tsx';
@@ -58,6 +59,7 @@ export function SpecificationEditor(props: SpecificationEditorProps) {
 }
 
 function placeAbove(place: Place, draft: Specification): Place | undefined {
+  if (place.kind === 'line') return { kind: 'way', choiceId: place.choiceId, id: place.wayId };
   if (place.kind === 'way') return { kind: 'choice', id: place.choiceId };
   if (place.kind !== 'primal') return undefined;
   const quarter = draft.quarters.find(({ primals }) => primals.some(({ id }) => id === place.id));
@@ -65,6 +67,7 @@ function placeAbove(place: Place, draft: Specification): Place | undefined {
 }
 
 function backWords(place: Place): string {
+  if (place.kind === 'line') return 'The whole way';
   if (place.kind === 'way') return 'All ways of this choice';
   return place.kind === 'primal' ? 'The whole quarter' : 'The whole side';
 }
@@ -76,6 +79,8 @@ function Chosen(props: ChosenProps) {
   if (place.kind === 'side') return <SideEditor {...props} />;
   if (place.kind === 'choice') return <ChoiceWays {...props} choiceId={place.id} />;
   if (place.kind === 'way') return <ChosenWay {...props} choiceId={place.choiceId} wayId={place.id} />;
+  if (place.kind === 'line')
+    return <ChosenWay {...props} choiceId={place.choiceId} wayId={place.wayId} lineId={place.id} />;
   const quarter = draft.quarters.find(({ id, primals }) =>
     place.kind === 'quarter' ? id === place.id : primals.some((primal) => primal.id === place.id),
   );
@@ -124,11 +129,15 @@ function ChoiceWays({ draft, faults, onGo, choiceId }: ChosenProps & { choiceId:
   );
 }
 
-function ChosenWay({ choiceId, wayId, ...props }: ChosenProps & { choiceId: string; wayId: string }) {
-  const { draft, faults, onEdit, onGo, isReadOnly } = props;
+type ChosenWayProps = ChosenProps & { choiceId: string; wayId: string; lineId?: string };
+
+function ChosenWay({ choiceId, wayId, lineId, ...props }: ChosenWayProps) {
+  const { draft, faults, onEdit, onGo, isReadOnly, isNarrow } = props;
   const choice = draft.choices.find(({ id }) => id === choiceId);
   const way = choice?.ways.find(({ id }) => id === wayId);
   if (!choice || !way) return null;
+  const line = way.lines.find(({ id }) => id === lineId);
+  if (isNarrow && line) return <LineEditor key={lineId} {...{ draft, onEdit, isReadOnly, choice, way, line }} />;
   const copy = () => {
     const made = copyWay(draft, { choiceId, wayId });
     if (!made) return;
@@ -148,6 +157,7 @@ function ChosenWay({ choiceId, wayId, ...props }: ChosenProps & { choiceId: stri
       choice={choice}
       way={way}
       faults={faults.filter(({ node }) => node === `${choiceId}/${wayId}` || node.startsWith(`${choiceId}/${wayId}/`))}
+      onLine={isNarrow ? (id) => onGo({ kind: 'line', choiceId, wayId, id }) : undefined}
       onCopy={copy}
       onRemove={choice.ways.length > 1 ? remove : undefined}
     />

@@ -31,13 +31,14 @@ export function sumWords(sumPpht: number, expectedPpht: number): string {
   return `${words}: ${gap} ${sumPpht < expectedPpht ? 'missing' : 'too much'}`;
 }
 
-/** Where in the editor somebody is: the side, a quarter, a primal, a choice or a way. */
+/** Where in the editor somebody is: the side, a quarter, a primal, a choice, a way, or on a phone one line of it. */
 export type Place =
   | { kind: 'side' }
   | { kind: 'quarter'; id: 'fore' | 'hind' }
   | { kind: 'primal'; id: string }
   | { kind: 'choice'; id: string }
-  | { kind: 'way'; choiceId: string; id: string };
+  | { kind: 'way'; choiceId: string; id: string }
+  | { kind: 'line'; choiceId: string; wayId: string; id: string };
 
 export const isSamePlace = (a: Place, b: Place) => JSON.stringify(a) === JSON.stringify(b);
 

@@ -8,7 +8,10 @@ const ORIGINS = {
   learned: 'learned from weights',
 } as const satisfies Record<SpecificationEdition['origin'], string>;
 
-export const originWords = ({ origin }: Pick<SpecificationEdition, 'origin'>) => ORIGINS[origin];
+/** A first edition that nobody copied came with the farm's first setting up. */
+export function originWords({ origin, edition }: Pick<SpecificationEdition, 'origin' | 'edition'>): string {
+  return origin === 'written' && edition === 1 ? 'as it came' : ORIGINS[origin];
+}
 
 /** How far a weight was from what was foreseen: `+ 2.4 %`, `− 0.8 %`; `as foreseen` when there is no difference. */
 export function differencePercent(weighedGrams: number, estimatedGrams: number): string {

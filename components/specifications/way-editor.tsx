@@ -12,6 +12,7 @@ import type { Choice, Tissue, Way, WayLine } from '#shared/engine/figures/specif
 import { TISSUES } from '#shared/engine/figures/tissues.ts';
 import { addLine, cutsToAdd, editWay, removeLine, setTake } from './edit-specification.ts';
 import { FaultList } from './fault-list.tsx';
+import { LineList, nameOfLine, nameOfPrimal } from './line-editor.tsx';
 import { titleOf, type EditorProps } from './quarter-editor.tsx';
 import { ShareField } from './share-field.tsx';
 import { sumOfTakes, sumWords, WHOLE_PPHT } from './specification-sums.ts';
@@ -21,29 +22,27 @@ type WayEditorProps = EditorProps & {
   way: Way;
   /** What is wrong with this way. */
   faults: readonly SpecificationFault[];
+  /** On a phone each line has a page of its own. */
+  onLine?: ((lineId: string) => void) | undefined;
   onCopy: () => void;
   /** Absent where it is the last way of its choice. */
   onRemove?: (() => void) | undefined;
 };
 
-const LINE_NAMES: Readonly<Record<string, string>> = { bone: 'Bone', fat: 'Fat', loss: 'Cutting loss' };
-
 /** One way of cutting: a table for each primal that it covers, its lines as shares of the primal's tissues. */
-export function WayEditor({ choice, way, faults, onCopy, onRemove, ...editor }: WayEditorProps) {
+export function WayEditor({ choice, way, faults, onLine, onCopy, onRemove, ...editor }: WayEditorProps) {
   const { draft, isReadOnly } = editor;
-  const primals = draft.quarters.flatMap((quarter) => quarter.primals);
   return (
     <View style={css('w-stack')}>
       <Heading level={2}>{`${choice.name}: ${way.name}`}</Heading>
       <WayFields choice={choice} way={way} {...editor} />
-      {choice.primalIds.map((primalId) => (
-        <PrimalShares
-          key={primalId}
-          primalId={primalId}
-          primalName={primals.find(({ id }) => id === primalId)?.name ?? primalId}
-          {...{ choice, way, ...editor }}
-        />
-      ))}
+      {onLine ? (
+        <LineList draft={draft} choice={choice} way={way} onLine={onLine} />
+      ) : (
+        choice.primalIds.map((primalId) => (
+          <PrimalShares key={primalId} primalId={primalId} {...{ choice, way, ...editor }} />
+        ))
+      )}
       <FaultList faults={faults} />
       {isReadOnly ? null : <Lines choice={choice} way={way} {...editor} />}
       {isReadOnly ? null : (
@@ -89,10 +88,9 @@ function WayFields({ choice, way, draft, onEdit, isReadOnly }: WayProps) {
   );
 }
 
-type PrimalSharesProps = WayProps & { primalId: string; primalName: string };
-
-function PrimalShares({ primalId, primalName, choice, way, draft, onEdit, isReadOnly }: PrimalSharesProps) {
-  const nameOf = (id: string) => LINE_NAMES[id] ?? draft.cuts.find((cut) => cut.id === id)?.name ?? id;
+function PrimalShares({ primalId, choice, way, draft, onEdit, isReadOnly }: WayProps & { primalId: string }) {
+  const primalName = nameOfPrimal(draft, primalId);
+  const nameOf = (id: string) => nameOfLine(draft, id);
   const shareOf = (line: WayLine, tissue: Tissue) =>
     line.takes.find((take) => take.primalId === primalId)?.[tissue] ?? 0;
   return (
@@ -135,7 +133,6 @@ function PrimalShares({ primalId, primalName, choice, way, draft, onEdit, isRead
 function Lines({ choice, way, draft, onEdit }: WayProps) {
   const place = { choiceId: choice.id, wayId: way.id };
   const products = way.lines.filter(({ kind }) => kind === 'cut' || kind === 'trim');
-  const nameOf = (id: string) => draft.cuts.find((cut) => cut.id === id)?.name ?? id;
   return (
     <View style={css('w-fields')}>
       <Select
@@ -152,7 +149,7 @@ function Lines({ choice, way, draft, onEdit }: WayProps) {
         optional
         value=""
         placeholder="Choose a cut"
-        options={products.map(({ id }) => ({ value: id, label: nameOf(id) }))}
+        options={products.map(({ id }) => ({ value: id, label: nameOfLine(draft, id) }))}
         onChange={(lineId) => onEdit(removeLine(draft, place, lineId))}
       />
     </View>

@@ -13,6 +13,6 @@ export async function compareCuttingDay(deps: Deps, dayId: string): Promise<DayC
     specificationId: day.specificationId,
     specificationName: day.specificationName,
     carcases: carcases.map(({ id, earTag, title, nodes }) => ({ id, earTag, title, cuts: compareCuts(nodes) })),
-    pooled: compareCuts(carcases.flatMap(({ nodes }) => nodes)),
+    pooled: compareCuts(...carcases.map(({ nodes }) => nodes)),
   };
 }

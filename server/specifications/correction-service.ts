@@ -44,7 +44,7 @@ async function workOut(db: Db | Tx, specificationId: string): Promise<Worked> {
     key: evidence.sides.length > 0 ? keyOf(latest.id, evidence.sides, correction) : null,
     sides: evidence.sides,
     skipped: evidence.skipped,
-    cuts: compareCuts(evidence.cuts.flatMap(({ nodes }) => nodes)),
+    cuts: compareCuts(...evidence.cuts.map(({ nodes }) => nodes)),
     caution: evidence.sides.length > 0 ? correction.caution : null,
     rows: correction.rows,
     changes: listChanges(specification, correction.specification),

@@ -1,8 +1,8 @@
 import type { CutoutNode } from './cutout-types.ts';
 
-/** Foreseen and weighed of one cut, trim, bone or fat, over the lines of it that were weighed; grams. */
+/** Foreseen and weighed of one cut, trim, bone or fat, or of a primal, over what was weighed of it; grams. */
 export type CutPair = {
-  /** A cut id; else `bone`, `fat` or `loss`. */
+  /** A cut id; else `bone`, `fat` or `loss`; `primal:brisket` for a primal of which no line was weighed. */
   id: string;
   name: string;
   lines: number;
@@ -10,15 +10,29 @@ export type CutPair = {
   weighedGrams: number;
 };
 
+/** Which row a node counts for: a line for its cut; a primal for itself where none of its lines was weighed. */
+function countsFor(node: CutoutNode, cutPaths: ReadonlySet<string | null>): string | null {
+  if (node.source !== 'weighed') return null;
+  if (node.level === 'line') return node.cutId ?? node.kind;
+  return node.level === 'primal' && !cutPaths.has(node.path) ? `primal:${node.path.split('/')[2]}` : null;
+}
+
+function listWeighed(nodes: readonly CutoutNode[]): { node: CutoutNode; id: string }[] {
+  const lines = nodes.filter(({ level, source }) => level === 'line' && source === 'weighed');
+  const cutPaths = new Set(lines.map(({ parentPath }) => parentPath));
+  return nodes.flatMap((node) => {
+    const id = countsFor(node, cutPaths);
+    return id === null ? [] : [{ node, id }];
+  });
+}
+
 /**
- * Estimated against weighed by cut, in the order in which the lines come. Lines that were not weighed are left out on both
- * sides. Give the nodes of one carcase, or those of several for all of them pooled.
+ * Estimated against weighed by cut, in the order in which the lines come. What was not weighed is left out on both sides.
+ * Give the nodes of one carcase, or those of several, each on its own, for all of them pooled.
  */
-export function compareCuts(nodes: readonly CutoutNode[]): CutPair[] {
+export function compareCuts(...carcases: (readonly CutoutNode[])[]): CutPair[] {
   const pairs = new Map<string, CutPair>();
-  for (const node of nodes) {
-    if (node.level !== 'line' || node.source !== 'weighed') continue;
-    const id = node.cutId ?? node.kind;
+  for (const { node, id } of carcases.flatMap(listWeighed)) {
     const before = pairs.get(id) ?? { id, name: node.name, lines: 0, estimatedGrams: 0, weighedGrams: 0 };
     pairs.set(id, {
       ...before,

@@ -41,7 +41,7 @@ describe('packs as the scales of a cutout', () => {
 describe('estimated against weighed by cut', () => {
   it('of two carcases pooled, adds up what each of them says, and leaves out what was not weighed', () => {
     const carcases = [9_500, 10_200].map((grams) => cutCarcase({ measured: { [LEFT]: grams } }).nodes);
-    const pooled = compareCuts(carcases.flat());
+    const pooled = compareCuts(...carcases);
     expect(pooled).toHaveLength(1);
     const each = carcases.map((nodes) => compareCuts(nodes)[0]);
     expect(pooled[0]).toEqual({
@@ -51,6 +51,15 @@ describe('estimated against weighed by cut', () => {
       estimatedGrams: each.reduce((sum, one) => sum + (one?.estimatedGrams ?? 0), 0),
       weighedGrams: 19_700,
     });
+  });
+
+  it('of a primal weighed before it was cut, shows the primal; of one whose lines were weighed, the lines', () => {
+    const measured = { 'left/fore/brisket': 15_000, 'left/hind/topside': 14_000, [LEFT]: 9_500 };
+    const rows = compareCuts(cutCarcase({ measured }).nodes);
+    expect(rows.map(({ id, weighedGrams }) => [id, weighedGrams])).toEqual([
+      ['primal:brisket', 15_000],
+      ['topside-joint', 9_500],
+    ]);
   });
 
   it('of nothing weighed, is empty', () => {
