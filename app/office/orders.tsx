@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import { View } from 'react-native';
 import { CancelForm } from '#components/office/cancel-form.tsx';
+import { FailedRefunds } from '#components/office/failed-refunds.tsx';
 import { OrderTable } from '#components/office/order-table.tsx';
 import { css } from '#components/theme/css.ts';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
@@ -11,6 +12,7 @@ import { StateView } from '#components/ui/state-view.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useCuttingDays } from '#hooks/carcases.ts';
 import { useCancelOrderByOwner, useOfficeOrders } from '#hooks/office-orders.ts';
+import { useFailedRefunds, useRetryRefund } from '#hooks/selling.ts';
 import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { OrderSummary } from '#shared/contracts/orders.ts';
@@ -46,6 +48,7 @@ export default function OrdersScreen() {
                 />
                 <Select label="State" value={state} options={states} onChange={setState} />
               </View>
+              <Refunds />
               <OrderTable orders={shown} onCancel={setCancelling} />
             </>
           );
@@ -59,6 +62,21 @@ export default function OrdersScreen() {
         {cancelling ? <Cancel order={cancelling} onDone={() => setCancelling(undefined)} /> : null}
       </Sheet>
     </View>
+  );
+}
+
+function Refunds() {
+  const refunds = useFailedRefunds();
+  const retry = useRetryRefund();
+  return (
+    <>
+      <FailedRefunds
+        refunds={refunds.data?.refunds ?? []}
+        onRetry={(refund) => retry.mutate(refund.paymentId)}
+        retryingId={retry.isPending ? retry.variables : undefined}
+      />
+      <ProblemNotice error={retry.error} title="The refund was not tried again." />
+    </>
   );
 }
 

@@ -8,6 +8,8 @@ const ownerPlaces: readonly NavItem[] = [
   { label: 'Herd', href: '/office/herd' },
   { label: 'Boxes', href: '/office/boxes' },
   { label: 'Specifications', href: '/office/specifications' },
+  { label: 'Delivery', href: '/office/delivery-areas' },
+  { label: 'Codes', href: '/office/promo-codes' },
   { label: 'Trade', href: '/office/trade' },
   { label: 'E-mail', href: '/office/mails' },
   { label: 'Settings', href: '/office/settings' },
