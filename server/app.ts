@@ -32,6 +32,7 @@ import { addReceiptRoutes } from './receipts/receipt-routes.ts';
 import { addPromoRoutes } from './promo/promo-routes.ts';
 import { addShopRoutes } from './shop/shop-routes.ts';
 import { addSpecificationRoutes } from './specifications/specification-routes.ts';
+import { addStandingRoutes } from './standing-orders/standing-routes.ts';
 import { addTradeRoutes } from './trade/trade-routes.ts';
 import { addWaitingRoutes } from './waiting-list/waiting-routes.ts';
 
@@ -72,6 +73,7 @@ export function createApp(deps: Deps, webRoot: string | null): App {
     addOfficeRoutes,
     addReceiptRoutes,
     addWaitingRoutes,
+    addStandingRoutes,
     addFeedbackRoutes,
     addAccountRoutes,
     addUnsubscribeRoutes,

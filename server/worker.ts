@@ -8,6 +8,7 @@ import { inviteAgain, tellCutOffs } from './mail/reminders.ts';
 import { takeBalance } from './payments/balance.ts';
 import { settleRefund, sweepHolds } from './payments/payment-service.ts';
 import type { Jobs } from './queue.ts';
+import { runStandingOrders } from './standing-orders/run-standing.ts';
 import { serveWaitingList } from './waiting-list/serve-waiting.ts';
 
 /** What the worker does for each kind of job; the tests run the same list. */
@@ -19,6 +20,7 @@ export function taskList(deps: Deps): TaskList {
     'replan-day': (payload) => replanDay(deps, (payload as Jobs['replan-day']).dayId),
     'explain-allocation': (payload) => explainAllocation(deps, (payload as Jobs['explain-allocation']).allocationId),
     'sweep-holds': () => sweepHolds(deps),
+    'run-standing-orders': () => runStandingOrders(deps),
     'serve-waiting-list': () => serveWaitingList(deps),
     'tell-cut-offs': () => tellCutOffs(deps),
     'invite-again': () => inviteAgain(deps),
@@ -38,6 +40,7 @@ const logger = new Logger(() => (level, message) => {
 const CRONTAB = [
   '* * * * * sweep-holds ?fill=2m',
   '* * * * * serve-waiting-list',
+  '*/10 * * * * run-standing-orders',
   '30 3 * * * prove-counters',
   '0 9 * * * tell-cut-offs ?fill=8h',
   '15 9 * * * invite-again ?fill=8h',

@@ -6,7 +6,15 @@ import { recordAudit } from '#server/farm/audit-queries.ts';
 import { listSettings, setSetting } from '#server/farm/farm-queries.ts';
 
 /** What holds until the owner sets something else. */
-const UNSET: CustomerSettings = { inviteAfterWeeks: 8, waitingHoldHours: 24 };
+const UNSET: CustomerSettings = {
+  inviteAfterWeeks: 8,
+  waitingHoldHours: 24,
+  standingFirstReminderDays: 7,
+  standingSecondReminderDays: 2,
+  standingChargeHours: 24,
+  standingTerms:
+    'Every so many weeks we keep your box on the next cutting day and charge your card the price of that day, shortly before orders for it close. We write twice before, with the price and the day, and you can skip that box with one press. You can pause or end the standing order in your account at any time, at no cost; what has not been charged is then not charged.',
+};
 const KEYS = Object.keys(UNSET) as (keyof CustomerSettings)[];
 
 /** The settings in force on a day. */

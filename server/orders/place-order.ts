@@ -21,7 +21,8 @@ import {
 } from './order-queries.ts';
 
 type Placed = Answer<typeof placeOrderSchema>;
-type Request = { basket: Checkout; caller: Caller | null };
+/** `keepsCard`: a standing order begins with this one. */
+type Request = { basket: Checkout; caller: Caller | null; keepsCard?: boolean };
 
 /** Presses that cross each other look again; more than this many would be no person. */
 const MOST_LOOKS = 5;
@@ -44,13 +45,14 @@ export async function placeOrder(deps: Deps, request: Request): Promise<Placed> 
 }
 
 /** Null: another press came first. */
-async function start(deps: Deps, { basket, caller }: Request): Promise<Placed | null> {
+async function start(deps: Deps, { basket, caller, keepsCard = false }: Request): Promise<Placed | null> {
   const order = await deps.db.transaction(async (tx) => {
     const place = await getPlaceInTime(tx, deps, basket);
     const order = await insertOrder(tx, {
       token: randomBytes(24).toString('base64url'),
       basketKey: basket.basketKey,
       userId: caller?.id ?? null,
+      keepsCard,
       ...detailsOf(basket),
       slotId: place.slotId,
       // The sum is known once the lines are taken, a moment later and in the same transaction.

@@ -31,6 +31,7 @@ export type PageOrder = {
   reachedPaymentAt: Date;
   deliveryPence: number;
   depositPence: number | null;
+  keepsCard: boolean;
   lines: (PageItem & { discountPence: number })[];
 };
 
@@ -48,7 +49,7 @@ export function createPaymentPage(deps: Deps, order: PageOrder): Promise<Stripe.
     items: itemsOf(order),
     from: order.reachedPaymentAt,
     back: { paid: 'paid', left: 'left' },
-    keepsCard: order.depositPence !== null,
+    keepsCard: order.depositPence !== null || order.keepsCard,
   });
 }
 

@@ -1,5 +1,6 @@
-import { and, asc, eq, lt } from 'drizzle-orm';
+import { and, asc, eq, lt, sql } from 'drizzle-orm';
 import { customerOrder, payment, webhookEvent } from '#db/schema/orders.ts';
+import { standingTurn } from '#db/schema/standing-orders.ts';
 import type { Db, Tx } from '#server/deps.ts';
 
 export type PaymentRow = typeof payment.$inferSelect;
@@ -113,12 +114,22 @@ export async function hasEvent(db: Db, eventId: string): Promise<boolean> {
   return rows.length > 0;
 }
 
-/** Holds that went to payment before `since`: their word may have been lost. */
+/**
+ * Holds that went to payment before `since`: their word may have been lost. A standing order's box is held without a
+ * page until its card is charged.
+ */
 export function listHeldOrders(db: Db, since: Date) {
   return db
     .select()
     .from(customerOrder)
-    .where(and(eq(customerOrder.isHeld, true), lt(customerOrder.reachedPaymentAt, since)))
+    .where(
+      and(
+        eq(customerOrder.isHeld, true),
+        lt(customerOrder.reachedPaymentAt, since),
+        sql`(${customerOrder.sessionId} is not null or not exists (select 1 from ${standingTurn}
+          where ${standingTurn.orderId} = ${customerOrder.id} and ${standingTurn.state} in ('planned', 'failed')))`,
+      ),
+    )
     .orderBy(asc(customerOrder.reachedPaymentAt))
     .limit(200);
 }

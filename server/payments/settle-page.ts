@@ -34,11 +34,22 @@ export async function settlePage(tx: Tx, deps: Deps, page: Stripe.Checkout.Sessi
     return;
   }
   const found = paidOn(page);
-  if (!found) return;
-  const { intentId, amountPence } = found;
+  if (found) await settlePayment(tx, deps, { ...found, order, isCurrent });
+}
+
+/**
+ * A payment of an order that has come in, from its page or from a kept card: sells what is held, takes it again, or gives
+ * the money back. A payment that is written down already changes nothing.
+ */
+export async function settlePayment(
+  tx: Tx,
+  deps: Deps,
+  found: PaidPage & { order: OrderRow; isCurrent: boolean },
+): Promise<void> {
+  const { order, isCurrent, intentId, amountPence } = found;
   const chargeId = await insertCharge(tx, { orderId: order.id, providerId: intentId, amountPence });
   if (!chargeId) return;
-  const paid = { ...found, order, chargeId };
+  const paid = { ...found, chargeId };
   const isDue =
     order.state === 'awaiting payment' && isCurrent && amountPence === (order.depositPence ?? order.totalPence);
   if (isDue && order.isHeld) {
