@@ -96,13 +96,14 @@ class Search {
     this.settle(this.wholeSums(node), { held: this.held(node) });
   }
 
-  /** Rounds sum after sum, the nearest first; where that is dear, the other side is looked at too. */
-  dive(root) {
+  /** Rounds sum after sum, the nearest first; where that is dear, the other side is looked at too. Of equals, one is first. */
+  dive(root, { isLastFirst }) {
     const { gap } = this.about;
     let node = root;
     for (let broken = this.broken(node); broken.length > 0; broken = this.broken(node)) {
       const distance = (index) => Math.abs(node.sums[index] - Math.round(node.sums[index]));
-      const index = broken.reduce((nearest, each) => (distance(each) < distance(nearest) ? each : nearest));
+      const order = isLastFirst ? broken.reverse() : broken;
+      const index = order.reduce((nearest, each) => (distance(each) < distance(nearest) ? each : nearest));
       const value = node.sums[index];
       const at = (whole) => this.relax({ ...node, limits: node.limits.with(index, [whole, whole]) });
       let next = at(Math.round(value));
@@ -201,7 +202,10 @@ class Search {
   begin(root) {
     this.open = [root];
     if (this.nodes.whole.length > MANY_WHOLE) this.settle(root, { held: this.held(root) });
-    if (this.isOpen(root.key)) this.dive(root);
+    for (const isLastFirst of [true, false]) {
+      if (!this.isOpen(root.key)) return;
+      this.dive(root, { isLastFirst });
+    }
     if (!this.isOpen(root.key)) return;
     this.open = [];
     this.plunge(root);

@@ -11,8 +11,8 @@ export function leadingSums(model: AllocationModel): string[][] {
     if (columns) columns.push(column);
     else sums.set(key, [column]);
   };
-  for (const { choice, way, column } of model.ways) add(`way ${choice.choiceId} ${way.wayId}`, column);
-  for (const { line, column } of model.units) add(`unit ${line.id}`, column);
   for (const { boxes } of model.boxes) add(`boxes ${boxes}`, boxes);
+  for (const { line, column } of model.units) add(`unit ${line.id}`, column);
+  for (const { choice, way, column } of model.ways) add(`way ${choice.choiceId} ${way.wayId}`, column);
   return [...sums.values()];
 }
