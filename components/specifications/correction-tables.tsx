@@ -1,3 +1,4 @@
+import { Disclosure } from '#components/ui/disclosure.tsx';
 import { Table } from '#components/ui/table.tsx';
 import { formatCount, formatDayTime, formatGrams, formatPercent } from '#shared/domain/words.ts';
 import type { CorrectionProposal, CorrectionRow } from '#shared/contracts/specifications.ts';
@@ -37,14 +38,35 @@ function nameOfRow({ path, name, isFromFewSides }: CorrectionRow): string {
   return isFromFewSides ? `${where} (fewer than three sides)` : where;
 }
 
-/** Every share that accepting would change. */
-export function ChangeTable({ changes }: Pick<CorrectionProposal, 'changes'>) {
+type Changes = Pick<CorrectionProposal, 'changes'>;
+
+/** A twentieth of a per cent; most changes below it only bring the whole back to 100 %. */
+const SMALL_PPHT = 50;
+
+/** Every share that accepting would change, the small ones folded away. */
+export function ChangeTables({ changes }: Changes) {
+  const isSmall = ({ fromPpht, toPpht }: Changes['changes'][number]) =>
+    Math.abs((toPpht ?? 0) - (fromPpht ?? 0)) < SMALL_PPHT;
+  const small = changes.filter(isSmall);
+  return (
+    <>
+      <ChangeTable caption="Shares that would change" changes={changes.filter((change) => !isSmall(change))} />
+      {small.length > 0 ? (
+        <Disclosure words={`${formatCount(small.length, 'change')} of less than ${formatPercent(SMALL_PPHT)}`}>
+          <ChangeTable caption="Shares that would change a little" changes={small} />
+        </Disclosure>
+      ) : null}
+    </>
+  );
+}
+
+function ChangeTable({ caption, changes }: Changes & { caption: string }) {
   return (
     <Table
-      caption="Shares that would change"
+      caption={caption}
       rows={changes}
       rowKey={({ node }) => node}
-      empty="No share would change."
+      empty="No share would change by that much."
       columns={[
         { id: 'name', title: 'Share', cell: ({ name }) => name },
         { id: 'now', title: 'Now', align: 'end', cell: ({ fromPpht }) => shareWords(fromPpht) },

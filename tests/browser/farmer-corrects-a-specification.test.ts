@@ -8,11 +8,12 @@ import {
   startBrowserWorld,
   WIDE,
 } from '#tests/support/browser.ts';
-import { makeFarm } from '#tests/support/make-farm.ts';
+import { makeCuttingDay, makeFarm } from '#tests/support/make-farm.ts';
 import { makeTraditionalCuts, makeTraditionalSide } from '#tests/support/make-specification.ts';
 import { makeWeighedDay } from '#tests/support/make-weighed-day.ts';
 import type { SpecificationEdition } from '#shared/contracts/specifications.ts';
 import { addDays } from '#shared/domain/day.ts';
+import { formatDay } from '#shared/domain/words.ts';
 import { traditionalSide } from '#shared/engine/figures/traditional-side.ts';
 
 let farm: BrowserWorld;
@@ -46,6 +47,13 @@ async function open(page: Page): Promise<void> {
   await page.goto('/office/specifications');
   await page.getByRole('link', { name: traditionalSide.name }).first().click();
   await page.getByText('Everything adds up to 100 %.', { exact: true }).waitFor();
+}
+
+/** A day that is planned and not on sale. */
+async function planDay() {
+  const { db, clock } = farm.world;
+  const [present] = await editions();
+  return makeCuttingDay(db, clock.today(), { specificationId: present?.id ?? '', state: 'planned' });
 }
 
 const meatOf = (name: string) => {
@@ -112,4 +120,27 @@ test('the farmer, with a phone, goes down to one way, takes a share out of it an
   await page.getByRole('button', { name: /^Boned and rolled.*does not add up$/ }).waitFor();
   await page.getByRole('button', { name: 'Undo all changes' }).click();
   await page.getByText('Everything adds up to 100 %.', { exact: true }).waitFor();
+});
+
+test('the farmer copies a specification that came with the program, and cuts a planned day by it', async () => {
+  const { id: dayId, day } = await planDay();
+  const page = await farm.openPage(WIDE);
+  await enterAs(page, farm.world.origin, owner);
+  await page.goto('/office/specifications');
+  const form = page.getByRole('form', { name: 'A specification of your own' });
+  await form.getByLabel('Start from').selectOption({ label: 'Seam-butchery side, steak-led, as it came' });
+  await form.getByLabel('Its name').fill('Our seam side');
+  await form.getByRole('button', { name: 'Make this specification' }).click();
+  await page.getByRole('heading', { name: 'Our seam side', level: 1 }).waitFor();
+  await page.getByText('Edition 1 of 1, a copy').waitFor();
+
+  await page.goto(`/office/cutting-days/${dayId}`);
+  await page.getByRole('heading', { name: formatDay(day), level: 1 }).waitFor();
+  await page.getByText('Cut by another specification').click();
+  await page.getByLabel('Cutting specification').selectOption({ label: 'Our seam side, edition 1' });
+  await expectAccessible(page);
+  await page.getByRole('button', { name: 'Cut the day by this one' }).click();
+  await page.getByText('Cut by “Our seam side, edition 1”.').waitFor();
+  const answer = await farm.world.request(owner.cookie).get(`/api/cutting-days/${dayId}`);
+  expect(answer.body).toMatchObject({ specificationName: 'Our seam side, edition 1', figuresVersion: 2 });
 });

@@ -1,7 +1,7 @@
 import { useLocalSearchParams } from 'expo-router';
 import { View } from 'react-native';
 import { ComparisonTable } from '#components/specifications/comparison-table.tsx';
-import { ChangeTable, DecisionTable, WorkingTable } from '#components/specifications/correction-tables.tsx';
+import { ChangeTables, DecisionTable, WorkingTable } from '#components/specifications/correction-tables.tsx';
 import { css } from '#components/theme/css.ts';
 import { Button } from '#components/ui/button.tsx';
 import { Disclosure } from '#components/ui/disclosure.tsx';
@@ -102,7 +102,7 @@ function Proposed({ proposal }: { proposal: CorrectionProposal }) {
       <ComparisonTable caption="Foreseen by this edition, and weighed" cuts={cuts} />
       <View style={css('w-stack')}>
         <Heading level={2}>Shares that would change</Heading>
-        <ChangeTable changes={changes} />
+        <ChangeTables changes={changes} />
       </View>
       <Disclosure words="How the proposal is reached" ruled>
         <View style={css('w-stack')}>
