@@ -29,7 +29,7 @@ async function plan(input: AllocationInput, solver: Solver): Promise<Timed> {
 }
 
 async function timeOther(solve: OtherSolver, lpText: string, seconds: number): Promise<string> {
-  const answer = await solve(lpText, { gap: GAP, seconds: PATIENCE_SECONDS });
+  const answer = await solve({ lp: lpText }, { gap: GAP, seconds: PATIENCE_SECONDS });
   const ratio = (answer.seconds / seconds).toFixed(1);
   return answer.isProven ? `${answer.seconds.toFixed(1)} s (${ratio}x)` : `over ${PATIENCE_SECONDS} s (>${ratio}x)`;
 }

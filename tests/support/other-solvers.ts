@@ -8,16 +8,19 @@ import { promisify } from 'node:util';
 const run = promisify(execFile);
 
 export type Answer = { objective: number; seconds: number; isProven: boolean };
-export type OtherSolver = (lpText: string, about: { gap: number; seconds: number }) => Promise<Answer>;
+/** A model as LP or MPS text. MPS seeks the least, with the sign of what we seek the greatest of turned. */
+export type ModelText = { lp: string } | { mps: string };
+export type OtherSolver = (model: ModelText, about: { gap: number; seconds: number }) => Promise<Answer>;
 
 async function withModel<Result>(
-  lpText: string,
+  model: ModelText,
   act: (file: string, folder: string) => Promise<Result>,
 ): Promise<Result> {
   const folder = await mkdtemp(path.join(os.tmpdir(), 'wholeside-model-'));
   try {
-    const file = path.join(folder, 'model.lp');
-    await writeFile(file, lpText);
+    const [ending, text] = 'lp' in model ? ['lp', model.lp] : ['mps', model.mps];
+    const file = path.join(folder, `model.${ending}`);
+    await writeFile(file, text);
     return await act(file, folder);
   } finally {
     await rm(folder, { recursive: true });
@@ -37,15 +40,25 @@ async function start(command: string, args: string[], seconds: number): Promise<
 }
 
 /** GLPK's stand-alone solver (Debian package glpk-utils). */
-export const solveWithGlpk: OtherSolver = (lpText, { gap, seconds }) =>
-  withModel(lpText, async (file, folder) => {
+export const solveWithGlpk: OtherSolver = (model, { gap, seconds }) =>
+  withModel(model, async (file, folder) => {
     const startedAt = performance.now();
     const output = path.join(folder, 'answer.txt');
-    const args = ['--lp', file, '--mipgap', String(gap), '--tmlim', String(seconds), '--cuts', '-o', output];
+    const args = [
+      'lp' in model ? '--lp' : '--freemps',
+      file,
+      '--mipgap',
+      String(gap),
+      '--tmlim',
+      String(seconds),
+      '--cuts',
+      '-o',
+      output,
+    ];
     const said = await start('glpsol', args, seconds);
     const text = existsSync(output) ? await readFile(output, 'utf8') : '';
     return {
-      objective: Number(/Objective:\s+\S+ = (\S+)/.exec(text)?.[1]),
+      objective: Math.abs(Number(/Objective:\s+\S+ = (\S+)/.exec(text)?.[1])),
       seconds: (performance.now() - startedAt) / 1000,
       // Stopped by the gap, it calls its answer non-optimal in the file and says why on the way.
       isProven: /Status:\s+(INTEGER )?OPTIMAL/.test(text) || said.includes('GAP TOLERANCE REACHED'),
@@ -53,8 +66,8 @@ export const solveWithGlpk: OtherSolver = (lpText, { gap, seconds }) =>
   });
 
 /** COIN-OR's branch and cut (Debian package coinor-cbc). It minimises what it reads and prints the sign so. */
-export const solveWithCbc: OtherSolver = (lpText, { gap, seconds }) =>
-  withModel(lpText, async (file) => {
+export const solveWithCbc: OtherSolver = (model, { gap, seconds }) =>
+  withModel(model, async (file) => {
     const startedAt = performance.now();
     const args = [file, 'timeMode', 'elapsed', 'ratio', String(gap), 'sec', String(seconds), 'solve'];
     const text = await start('cbc', args, seconds);

@@ -2,6 +2,7 @@ import { afterAll, describe, expect, test } from 'vitest';
 import { makeAllocationInstance } from '#scripts/bench/allocation-instances.ts';
 import { createSolver } from '#server/allocation/solver/solver-pool.ts';
 import { allocate } from '#shared/engine/allocation/allocate.ts';
+import { lpToMps } from '#shared/engine/linear/lp-to-mps.ts';
 import { LpModel, type Term } from '#shared/engine/linear/lp-model.ts';
 import { solveWithCbc, solveWithGlpk } from '#tests/support/other-solvers.ts';
 
@@ -77,7 +78,7 @@ describe('the solver against the outside', () => {
       const input = makeAllocationInstance({ carcases, seed, boxes: 2, loose: 3, trade: 5 });
       const plan = await allocate(input, solver);
       const optimum = plan.contributionPence + plan.wholePackPence;
-      const other = await solveWithCbc(plan.lpText, { gap: 0.0001, seconds: 50 });
+      const other = await solveWithCbc({ lp: plan.lpText }, { gap: 0.0001, seconds: 50 });
       expect(other.isProven).toBe(true);
       expect(Math.abs(other.objective - optimum)).toBeLessThanOrEqual(optimum * 0.0002 + 1);
     },
@@ -90,9 +91,24 @@ describe('the solver against the outside', () => {
       const input = makeAllocationInstance({ carcases, seed, boxes: 1, loose: 2, trade: 4 });
       const plan = await allocate(input, solver);
       const optimum = plan.contributionPence + plan.wholePackPence;
-      const other = await solveWithGlpk(plan.lpText, { gap: 0.0001, seconds: 50 });
+      const other = await solveWithGlpk({ lp: plan.lpText }, { gap: 0.0001, seconds: 50 });
       expect(other.isProven).toBe(true);
       expect(Math.abs(other.objective - optimum)).toBeLessThanOrEqual(optimum * 0.0002 + 1);
+    },
+    PATIENCE,
+  );
+
+  test.each(days.filter(({ carcases }) => carcases === 1).slice(0, 3))(
+    'the optimum of day $seed, is the same from the MPS file under CBC and GLPK',
+    async ({ seed, carcases }) => {
+      const input = makeAllocationInstance({ carcases, seed, boxes: 1, loose: 2, trade: 4 });
+      const plan = await allocate(input, solver);
+      const optimum = plan.contributionPence + plan.wholePackPence;
+      for (const solveElsewhere of [solveWithCbc, solveWithGlpk]) {
+        const other = await solveElsewhere({ mps: lpToMps(plan.lpText) }, { gap: 0.0001, seconds: 50 });
+        expect(other.isProven).toBe(true);
+        expect(Math.abs(other.objective - optimum)).toBeLessThanOrEqual(optimum * 0.0002 + 1);
+      }
     },
     PATIENCE,
   );
