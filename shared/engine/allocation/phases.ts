@@ -104,6 +104,7 @@ export async function solvePhases(session: Session, hoped: ReadonlyMap<Priority,
     session.fixed.push(...rows);
     return hopeful;
   }
+  if (hopeful.solution.status === 'limit') throw failed('No plan was found in time.');
   await fixShortfalls(session);
   return await solve(session, { title: TITLE }, options);
 }

@@ -41,11 +41,11 @@ test('planning a day that sold too much, tells that it looks for the least short
 });
 
 test(
-  'planning a large day with no time, gives the best so far with its gap and no proof',
+  'planning without the time for a proof, gives the best so far with its gap',
   async () => {
-    const plan = await allocate(makeAllocationInstance({ carcases: 40, seed: 2 }), solver, {
+    const plan = await allocate(makeAllocationInstance({ carcases: 8, seed: 2 }), solver, {
       gap: 0,
-      timeLimitSeconds: 1,
+      timeLimitSeconds: 5,
     });
     expect(plan.isProven).toBe(false);
     expect(plan.gap).toBeGreaterThan(0);
