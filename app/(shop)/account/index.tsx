@@ -73,9 +73,14 @@ function Account({ name, email }: { name: string; email: string }) {
         lead={email}
         actions={<Button kind="quiet" small label="Sign out" busy={isLeaving} onPress={signOut} />}
       />
-      <TextLink href="/account/details" place="alone" icon="forward">
-        Details, news and your data
-      </TextLink>
+      <View>
+        <TextLink href="/account/details" place="alone" icon="forward">
+          Details, news and your data
+        </TextLink>
+        <TextLink href="/account/standing" place="alone" icon="forward">
+          Standing orders
+        </TextLink>
+      </View>
       <View style={css('w-section')}>
         <Heading level={2}>Your orders</Heading>
         <StateView query={orders} what="your orders" waiting={<Skeleton shape="rows" count={3} />}>
