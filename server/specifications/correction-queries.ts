@@ -1,7 +1,7 @@
-import { and, asc, count, desc, eq, inArray } from 'drizzle-orm';
+import { and, asc, count, desc, eq, inArray, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/pg-core';
 import { user } from '#db/schema/auth.ts';
-import { cuttingDay, cuttingSpecification } from '#db/schema/carcases.ts';
+import { carcase, cuttingDay, cuttingSpecification } from '#db/schema/carcases.ts';
 import { specificationCorrection, specificationCorrectionSide } from '#db/schema/corrections.ts';
 import type { Db, Tx } from '#server/deps.ts';
 import type { SideName } from '#shared/engine/cutout/cutout-types.ts';
@@ -17,13 +17,15 @@ export async function lockEdition(tx: Tx, specificationId: string): Promise<void
     .for('no key update');
 }
 
-/** Closed days that were cut by any edition of the name, the earliest first. */
-export async function listClosedDays(db: Db | Tx, name: string): Promise<string[]> {
+/** Closed days that were cut by any edition of the name and have a side to decide on, the earliest first. */
+export async function listUndecidedDays(db: Db | Tx, name: string): Promise<string[]> {
+  const decided = sql`select count(*) from ${specificationCorrectionSide} where ${specificationCorrectionSide.carcaseId} = ${carcase.id}`;
+  const hasOpenSide = sql`exists (select 1 from ${carcase} where ${carcase.cuttingDayId} = ${cuttingDay.id} and (${decided}) < 2)`;
   const rows = await db
     .select({ id: cuttingDay.id })
     .from(cuttingDay)
     .innerJoin(cuttingSpecification, eq(cuttingSpecification.id, cuttingDay.specificationId))
-    .where(and(eq(cuttingSpecification.name, name), eq(cuttingDay.state, 'closed')))
+    .where(and(eq(cuttingSpecification.name, name), eq(cuttingDay.state, 'closed'), hasOpenSide))
     .orderBy(asc(cuttingDay.day));
   return rows.map(({ id }) => id);
 }

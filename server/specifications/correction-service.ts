@@ -12,9 +12,9 @@ import { recordAudit } from '#server/farm/audit-queries.ts';
 import {
   findCorrectionByKey,
   insertCorrection,
-  listClosedDays,
   listCorrections,
   listDecidedSides,
+  listUndecidedDays,
   lockEdition,
 } from './correction-queries.ts';
 import { findLatestEdition, lastRestoredEdition } from './specification-queries.ts';
@@ -60,7 +60,7 @@ async function readEvidence(
   specification: Awaited<ReturnType<typeof readSpecification>>,
 ): Promise<Evidence> {
   const evidence: Evidence = { sides: [], skipped: [], cuts: [] };
-  for (const dayId of await listClosedDays(db, name)) {
+  for (const dayId of await listUndecidedDays(db, name)) {
     const { day, carcases } = await loadWeighedDay(db, dayId, specification);
     const decided = await listDecidedSides(
       db,

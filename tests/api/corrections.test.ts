@@ -138,6 +138,17 @@ describe('a proposal', () => {
     expect(brisket).toMatchObject({ sides: 4, priorSides: 10 });
   });
 
+  test('after going back to the shipped figures, starts afresh: what is foreseen counts six sides again', async () => {
+    const { id } = await aSpecification('Afresh');
+    await aDay(id);
+    await decide(id, (await propose(id)).key, 'accepted').expect(200);
+    await owner.post(`/api/specifications/${id}/restore`).send({ basedOnEdition: 2 }).expect(200);
+    expect(await propose(id)).toMatchObject({ key: null, edition: 3, sides: [] });
+    await aDay(id);
+    const brisket = (await propose(id)).rows.find(({ path }) => path === 'brisket');
+    expect(brisket).toMatchObject({ sides: 4, priorSides: 6 });
+  });
+
   test('answered twice alike, is one decision; answered otherwise, is refused', async () => {
     const { id, name } = await aSpecification('Twice');
     await aDay(id);
