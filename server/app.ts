@@ -2,6 +2,7 @@ import { toNodeHandler } from 'better-auth/node';
 import compression from 'compression';
 import express, { type Express, Router } from 'express';
 import helmet from 'helmet';
+import { PHOTOGRAPH_TYPES } from '#shared/domain/photograph.ts';
 import { AppError } from '#shared/errors.ts';
 import { addAccountRoutes } from './account/account-routes.ts';
 import { addCustomerSettingsRoutes } from './account/customer-settings-routes.ts';
@@ -28,6 +29,7 @@ import { addOrderChangeRoutes } from './orders/order-change-routes.ts';
 import { addOrderRoutes } from './orders/order-routes.ts';
 import { addPackRoutes } from './packs/pack-routes.ts';
 import { paymentWebhook } from './payments/webhook.ts';
+import { addPhotographRoutes } from './photographs/photograph-routes.ts';
 import { addReceiptRoutes } from './receipts/receipt-routes.ts';
 import { addPromoRoutes } from './promo/promo-routes.ts';
 import { addShopRoutes } from './shop/shop-routes.ts';
@@ -73,6 +75,7 @@ export function createApp(deps: Deps, webRoot: string | null): App {
     addOfficeRoutes,
     addReceiptRoutes,
     addWaitingRoutes,
+    addPhotographRoutes,
     addStandingRoutes,
     addFeedbackRoutes,
     addAccountRoutes,
@@ -82,7 +85,8 @@ export function createApp(deps: Deps, webRoot: string | null): App {
     add(api, deps);
   }
   app.post(COSTLY_POSTS, limitCostly(deps.costlyPostsPerMinute));
-  app.use(sameOrigin, express.json({ limit: '256kb' }), api.router);
+  app.use(sameOrigin, express.raw({ type: [...PHOTOGRAPH_TYPES], limit: '3mb' }));
+  app.use(express.json({ limit: '256kb' }), api.router);
   app.use('/api', () => {
     throw new AppError('NOT_FOUND', 'There is no such address in the API.');
   });

@@ -12,7 +12,12 @@ export type Caller = { id: string; name: string; email: string; role: Role };
 /** The routes of the API and, beside them, the table of who may call what. */
 export type Api = { router: Router; endpoints: Endpoint<EndpointSchema>[]; auth: Auth };
 
-export type Download = { contentType: string; filename: string; body: string | Buffer | Readable };
+export type Download = {
+  contentType: string;
+  filename: string;
+  body: string | Buffer | Readable;
+  isImmutable?: boolean;
+};
 
 type Handler<S extends EndpointSchema, R> = (input: Input<S>, caller: Caller | null) => Promise<R>;
 
@@ -39,7 +44,9 @@ export function download<S extends EndpointSchema>(
     const caller = await admit(api.auth, endpoint, request);
     const file = await handle(readInput(schema, request), caller);
     response.setHeader('Content-Type', file.contentType);
-    response.setHeader('Content-Disposition', `attachment; filename="${file.filename}"`);
+    // Named by what is in it: nobody needs to ask for it twice, and it is shown in the page rather than saved.
+    if (file.isImmutable) response.setHeader('Cache-Control', 'public, max-age=31536000, immutable');
+    else response.setHeader('Content-Disposition', `attachment; filename="${file.filename}"`);
     if (file.body instanceof Readable) await pipeline(file.body, response);
     else response.send(file.body);
   });
