@@ -39,7 +39,8 @@ export function pathOf(endpoint: { path: string }, { params }: { params?: Record
   return endpoint.path.replace(/:(\w+)/g, (_whole, name: string) => encodeURIComponent(params?.[name] ?? ''));
 }
 
-async function readProblem(response: Response): Promise<Error> {
+/** What a refused answer says. */
+export async function readProblem(response: Response): Promise<Error> {
   if (!response.headers.get('content-type')?.includes('application/problem+json')) return new ConnectionLost();
   const problem = (await response.json()) as Problem;
   return new AppError(problem.code, problem.detail, {

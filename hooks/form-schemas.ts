@@ -7,6 +7,7 @@ export * as account from '#shared/contracts/account-schema.ts';
 export * as carcases from '#shared/contracts/carcases-schema.ts';
 export * as checkout from '#shared/contracts/checkout-form-schema.ts';
 export * as delivery from '#shared/contracts/delivery-schema.ts';
+export * as customers from '#shared/contracts/customers-schema.ts';
 export * as herd from '#shared/contracts/herd-schema.ts';
 export * as margin from '#shared/contracts/margin-schema.ts';
 export * as office from '#shared/contracts/office-schema.ts';

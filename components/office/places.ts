@@ -10,6 +10,7 @@ const ownerPlaces: readonly NavItem[] = [
   { label: 'Specifications', href: '/office/specifications' },
   { label: 'Delivery', href: '/office/delivery-areas' },
   { label: 'Codes', href: '/office/promo-codes' },
+  { label: 'Customers', href: '/office/customers' },
   { label: 'Trade', href: '/office/trade' },
   { label: 'E-mail', href: '/office/mails' },
   { label: 'Settings', href: '/office/settings' },

@@ -8,6 +8,7 @@ import { BoxHead } from '#components/boxes/box-head.tsx';
 import { BoxJsonLd } from '#components/boxes/box-json-ld.tsx';
 import { SwapChoice } from '#components/boxes/swap-choice.tsx';
 import { BoxWaiting } from '#components/boxes/box-waiting.tsx';
+import { BoxPhotographs } from '#components/photographs/box-photographs.tsx';
 import { DistanceFacts } from '#components/shop/distance-facts.tsx';
 import { KeepingAdvice } from '#components/shop/keeping-advice.tsx';
 import { LoadedView } from '#components/shop/loaded-view.tsx';
@@ -18,16 +19,18 @@ import { JoinForm } from '#components/waiting-list/join-form.tsx';
 import { ButtonLink } from '#components/ui/button-link.tsx';
 import { loadFarm, type Farm } from '#hooks/farm.ts';
 import { load, type Loaded } from '#hooks/loaded.ts';
+import { loadPhotographs } from '#hooks/photographs.ts';
 import { pageMetadata } from '#hooks/page-metadata.ts';
 import { useBox } from '#hooks/shop.ts';
 import { chooseDay, quantityOf, setQuantity, useBasket } from '#hooks/use-basket.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import { useJoinWaitingList } from '#hooks/waiting-list.ts';
+import type { Photograph } from '#shared/contracts/photographs.ts';
 import { getBox, type Box } from '#shared/contracts/shop.ts';
 import { formatMoney, formatWeight } from '#shared/domain/words.ts';
 import { AppError } from '#shared/errors.ts';
 
-type Page = { farm: Farm | null; box: Loaded<Box> };
+type Page = { farm: Farm | null; box: Loaded<Box>; photographs: Photograph[] };
 
 export const generateMetadata: GenerateMetadataFunction = async (request, params) => {
   const box = await load(getBox, { params: { slug: String(params.slug) } });
@@ -36,8 +39,13 @@ export const generateMetadata: GenerateMetadataFunction = async (request, params
 };
 
 export const loader: LoaderFunction<Page> = async (_request, params) => {
-  const [farm, box] = await Promise.all([loadFarm(), load(getBox, { params: { slug: String(params.slug) } })]);
-  return { farm, box };
+  const slug = String(params.slug);
+  const [farm, box, photographs] = await Promise.all([
+    loadFarm(),
+    load(getBox, { params: { slug } }),
+    loadPhotographs(slug),
+  ]);
+  return { farm, box, photographs };
 };
 
 function titleOf(box: Box): string {
@@ -66,13 +74,13 @@ export default function BoxScreen() {
           children: <ButtonLink href="/" label="See the boxes" />,
         }}
       >
-        {(box) => <BoxPage box={box} farm={page.farm} />}
+        {(box) => <BoxPage box={box} page={page} />}
       </LoadedView>
     </ShopPage>
   );
 }
 
-function BoxPage({ box, farm }: { box: Box; farm: Farm | null }) {
+function BoxPage({ box, page: { farm, photographs } }: { box: Box; page: Page }) {
   const basket = useBasket();
   const [chosenId, setChosenId] = useState<string>();
   const [slug, setSlug] = useState(box.slug);
@@ -88,6 +96,7 @@ function BoxPage({ box, farm }: { box: Box; farm: Farm | null }) {
       <View style={css('w-columns', 'w-columns-side')}>
         <View style={css('w-section')}>
           <BoxHead box={box} />
+          <BoxPhotographs photographs={photographs} />
           <BoxContents lines={box.lines} />
         </View>
         <View style={css('w-stay')}>

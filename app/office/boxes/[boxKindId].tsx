@@ -34,6 +34,9 @@ export default function BoxKindScreen() {
                 Boxes
               </TextLink>
               <TitleBar title={box.name} above={`Box of ${formatWeight(box.guaranteedGrams)}`} />
+              <TextLink href={`/office/photographs/${box.id}`} place="alone" icon="forward">
+                Photographs
+              </TextLink>
             </View>
             {round > 0 ? <Notice kind="good" spoken title="This is what is recorded now." /> : null}
             <Edit key={`${box.id} ${round}`} box={box} cuts={data.cuts} afresh={() => setRound(round + 1)} />
