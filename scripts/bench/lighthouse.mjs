@@ -59,7 +59,7 @@ export async function measureLighthouse(shop) {
     const visits = await visitInTurns(chrome.port, {
       'one heading': empty.url,
       'first page': shop,
-      box: `${shop}/boxes/hearth`,
+      box: `${shop}/boxes/table`,
     });
     const floor = visits.get('one heading');
     return Object.fromEntries([...visits].map(([name, of]) => [name, summarise(of, floor)]));
