@@ -8,7 +8,13 @@ import { TextLink } from '#components/ui/text-link.tsx';
 import type { TodayItem } from '#shared/contracts/office.ts';
 
 /** What may go wrong for a customer when it is left lying. */
-const PRESSING = new Set<TodayItem['kind']>(['mail failed', 'refund failed', 'shortfall', 'out of date']);
+const PRESSING = new Set<TodayItem['kind']>([
+  'mail failed',
+  'refund failed',
+  'balance failed',
+  'shortfall',
+  'out of date',
+]);
 
 /** What needs doing, each with the way there. */
 export function TodayList({ items }: { items: readonly TodayItem[] }) {

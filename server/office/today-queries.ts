@@ -152,6 +152,23 @@ export function listUndeliveredMails(db: Db, limit: number) {
     .limit(limit);
 }
 
+/** Rests of packed orders that the saved card was not charged with: their customers have a link to pay. */
+export function listFailedBalances(db: Db) {
+  return db
+    .select({ orderNo: customerOrder.orderNo, name: customerOrder.name, amountPence: payment.amountPence })
+    .from(payment)
+    .innerJoin(customerOrder, eq(customerOrder.id, payment.orderId))
+    .where(
+      and(
+        eq(payment.kind, 'charge'),
+        eq(payment.reason, 'balance'),
+        eq(payment.state, 'failed'),
+        ne(customerOrder.state, 'cancelled'),
+      ),
+    )
+    .orderBy(asc(customerOrder.orderNo));
+}
+
 export function listFailedRefunds(db: Db) {
   return db
     .select({

@@ -64,7 +64,13 @@ async function troubleItems({ db }: Deps): Promise<TodayItem[]> {
     detail: `${mail.subject}. ${mail.lastError ?? 'The mail server gave no reason.'}`,
     href: '/office/mails',
   }));
-  return [...refunds, ...mails];
+  const balances = (await queries.listFailedBalances(db)).map((balance): TodayItem => ({
+    kind: 'balance failed',
+    title: `${formatMoney(balance.amountPence)} of ${balance.name} is still open`,
+    detail: `Order ${balance.orderNo} is packed, and the card for its rest refused. The customer has a link to pay.`,
+    href: '/office/orders',
+  }));
+  return [...refunds, ...balances, ...mails];
 }
 
 async function killSheetItems(deps: Deps): Promise<TodayItem[]> {

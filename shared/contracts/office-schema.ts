@@ -22,6 +22,7 @@ export const TodayItem = z.strictObject({
     'collection mails',
     'mail failed',
     'refund failed',
+    'balance failed',
     'shortfall',
   ]),
   title: z.string(),

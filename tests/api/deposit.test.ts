@@ -119,6 +119,13 @@ describe('a rest that the card refuses', () => {
     expect((await seen(order.token)).deposit?.rest).toBe('failed');
     const [mail] = await mailsOf(order.id, 'balance failed');
     expect(mail?.text).toContain(`/orders/${order.token}/pay`);
+    const today = await world.request(bench.owner).get('/api/today');
+    expect((today.body as { items: { kind: string; detail: string }[] }).items).toContainEqual(
+      expect.objectContaining({
+        kind: 'balance failed',
+        detail: expect.stringContaining(`Order ${order.orderNo}`) as unknown,
+      }),
+    );
     const about = await world.request().get(`/api/orders/${order.token}/balance`);
     expect(about.body).toMatchObject({ hasCard: true, publishableKey: 'pk_test_of_the_tests' });
     const presses = await Promise.all([1, 2].map(() => world.request().post(`/api/orders/${order.token}/balance`)));
