@@ -9,6 +9,11 @@ import { Notice } from '#components/ui/notice.tsx';
 import { Sheet } from '#components/ui/sheet.tsx';
 import { Text } from '#components/ui/text.tsx';
 
+/** Of a deposit order the rest has not been taken yet. */
+function paidPence({ totalPence, deposit }: Order): number {
+  return deposit?.rest === 'later' ? totalPence - deposit.restPence : totalPence;
+}
+
 type CancelOrderProps = {
   order: Order;
   onCancel: () => void;
@@ -50,7 +55,7 @@ export function CancelOrder({ order, onCancel, isCancelling, refusal }: CancelOr
           </>
         }
       >
-        <Text>{`${formatMoney(order.totalPence)} goes back to the card that paid, and what was kept for you goes back on the counter.`}</Text>
+        <Text>{`${formatMoney(paidPence(order))} goes back to the card that paid, and what was kept for you goes back on the counter.`}</Text>
       </Sheet>
     </View>
   );

@@ -15,7 +15,7 @@ export function OrderWay({ order }: { order: Order }) {
   const stops = [
     { title: 'Ordered', words: `Order ${order.orderNo}` },
     {
-      title: 'Paid and kept for you',
+      title: order.deposit?.rest === 'later' ? 'Deposit paid, and kept for you' : 'Paid and kept for you',
       words: at > 0 ? `A confirmation went to ${order.email}` : 'Waiting for the payment',
     },
     { title: 'Cut, weighed and packed', words: formatDay(order.day) },

@@ -82,8 +82,9 @@ function waitingFor(order: Order, hasLeft: boolean): Standing {
   };
 }
 
-function refundWords({ paymentState, refundedPence, totalPence }: Order): string {
+function refundWords({ paymentState, refundedPence, totalPence, deposit }: Order): string {
   if (refundedPence > 0) return `${formatMoney(refundedPence)} went back to the card that paid.`;
   if (paymentState === 'unpaid') return 'Nothing was charged.';
-  return `${formatMoney(totalPence)} is on its way back to the card that paid. Banks take a few days to show it.`;
+  const paidPence = deposit && deposit.rest !== 'paid' ? totalPence - deposit.restPence : totalPence;
+  return `${formatMoney(paidPence)} is on its way back to the card that paid. Banks take a few days to show it.`;
 }

@@ -99,7 +99,7 @@ function BoxPage({ box, page: { farm, photographs } }: { box: Box; page: Page })
           <BoxPhotographs photographs={photographs} />
           <BoxContents lines={box.lines} />
         </View>
-        <View style={css('w-stay')}>
+        <View style={css('w-stay', 'w-stack')}>
           <SwapChoice box={box} dayId={dayId} slug={slug} onSlug={setSlug} />
           <BoxBuy
             box={chosen}
