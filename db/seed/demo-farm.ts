@@ -1,6 +1,8 @@
 import type { Tx } from '#db/client.ts';
+import { deliveryArea } from '#db/schema/delivery.ts';
 import { datedSetting, farm } from '#db/schema/farm.ts';
 import { collectionPoint } from '#db/schema/orders.ts';
+import { promoCode } from '#db/schema/promo.ts';
 import type { Day } from '#shared/domain/day.ts';
 
 /** Everything about the farm is invented: the dale, the people, the premises and their numbers. */
@@ -37,15 +39,25 @@ const POINTS = [
     directions: 'The side door, next to the bus stop. We stand there with the white van.',
     bring: BRING,
   },
-  {
-    name: 'Van round, Hollin Cross and Thornwick',
-    addressLines: ['Your own door', 'ZZ3 and ZZ4 postcodes'],
-    directions: 'Write your address in the note. The van comes within the hour that you choose.',
-    bring: 'Somebody at home, and room in the fridge: we hand chilled beef to people, not to porches.',
-  },
 ] as const;
 
-export type DemoPoints = { gate: string; chapel: string; van: string };
+const VAN = {
+  name: 'Van round, Hollin Cross and Thornwick',
+  addressLines: [],
+  directions: 'The van comes in the afternoon and rings before it turns into your lane.',
+  bring: 'Somebody at home, and room in the fridge: we hand chilled beef to people, not to porches.',
+  kind: 'van' as const,
+};
+
+const AREA = {
+  name: VAN.name,
+  prefixes: ['ZZ3', 'ZZ4'],
+  ...{ pricePence: 500, freeFromPence: 15_000, weekday: 6, startsAt: '12:00', endsAt: '17:00', capacity: 14 },
+};
+
+const CODE = { code: 'DALE10', percent: 10, minimumPence: 5_000, usageLimit: 100 };
+
+export type DemoPoints = { gate: string; chapel: string };
 
 export async function insertFarm(tx: Tx, validFrom: Day): Promise<DemoPoints> {
   await tx.insert(farm).values(FARM);
@@ -64,6 +76,9 @@ export async function insertFarm(tx: Tx, validFrom: Day): Promise<DemoPoints> {
       .returning({ id: collectionPoint.id });
     if (row) ids.push(row.id);
   }
-  const [gate = '', chapel = '', van = ''] = ids;
-  return { gate, chapel, van };
+  const [van] = await tx.insert(collectionPoint).values(VAN).returning({ id: collectionPoint.id });
+  await tx.insert(deliveryArea).values({ ...AREA, pointId: van?.id ?? '' });
+  await tx.insert(promoCode).values(CODE);
+  const [gate = '', chapel = ''] = ids;
+  return { gate, chapel };
 }

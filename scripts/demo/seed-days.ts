@@ -55,7 +55,6 @@ async function seedDay(deps: Deps, ground: Ground, key: keyof DemoDays): Promise
     collections: [
       { pointId: points.gate, day: friday, from: '14:00', to: '18:30', slotMinutes: 30, capacity: 6 },
       { pointId: points.chapel, day: saturday, from: '09:00', to: '11:30', slotMinutes: 30, capacity: 6 },
-      { pointId: points.van, day: saturday, from: '12:00', to: '17:00', slotMinutes: 60, capacity: 5 },
     ],
   });
   const booking = { animalIds: herd[key], killDay: when.killDay, cuttingDayId: id };

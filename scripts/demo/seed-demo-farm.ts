@@ -59,6 +59,7 @@ async function sellDays(deps: Deps, chance: Chance, { seeded, people }: Sellers)
     day: next,
     people: [...early, ...customers.slice(4, 30)],
     from: 7,
+    byVan: true,
   });
   await seedOrders(yesterday, chance, { day: second, people: customers.slice(30, 38), from: 1 });
   if (first) await sendConfirmation(deps, first.id);

@@ -4,6 +4,7 @@ import type { Chance } from '#db/seed/chance.ts';
 import type { Person } from '#db/seed/demo-people.ts';
 import { collectionSlot, customerOrder } from '#db/schema/orders.ts';
 import { listOffers, type OfferRow } from '#server/allocation/allocation-queries.ts';
+import { getRound } from '#server/delivery/delivery-service.ts';
 import type { Deps, Tx } from '#server/deps.ts';
 import { orderConfirmedMail } from '#server/mail/order-confirmed.ts';
 import { queueMail } from '#server/mail/outbox.ts';
@@ -13,9 +14,20 @@ import { readOrderFacts } from '#server/orders/read-order.ts';
 import { insertCharge } from '#server/payments/payment-queries.ts';
 import type { BasketLine } from '#shared/contracts/orders.ts';
 import { addDays, londonInstant } from '#shared/domain/day.ts';
+import { deliveryPenceOf } from '#shared/domain/delivery.ts';
 import type { SeededDay } from './seed-days.ts';
 
-type Sale = { day: SeededDay; people: readonly Person[]; from: number };
+type Sale = {
+  day: SeededDay;
+  people: readonly Person[];
+  from: number;
+  /** Some of them have it brought. */
+  byVan?: boolean;
+};
+
+/** Every so many orders the van brings one. */
+const VAN_EVERY = 6;
+const DOORS = ['4 Hollin Cross', 'Thornwick Mill', '11 Chapel Row', 'Low Garth', '2 Smithy Fold'];
 
 const NOTES = ['', '', '', '', 'Please pack the steaks on top.', 'I come by bicycle: two bags, please.'];
 
@@ -27,12 +39,15 @@ export async function seedOrders(deps: Deps, chance: Chance, sale: Sale): Promis
     const lines = fillBasket(chance, await listOffers(deps.db, sale.day.id));
     const open = slots.filter((slot) => slot.taken < slot.capacity);
     if (lines.length === 0 || open.length === 0) continue;
+    const isBrought = sale.byVan === true && index % VAN_EVERY === VAN_EVERY - 1;
     const slot = chance.pick(open);
-    slot.taken += 1;
+    if (!isBrought) slot.taken += 1;
     const daysBefore = Math.round((sale.from * (sale.people.length - index)) / sale.people.length);
     const day = addDays(deps.clock.today(), -daysBefore);
     const at = londonInstant(day, `${chance.between(8, 11)}:${chance.between(10, 59)}`.padStart(5, '0'));
-    orders.push(await placePaidOrder(deps, { sale, person, lines, slotId: slot.id, at, note: chance.pick(NOTES) }));
+    const note = chance.pick(NOTES);
+    const delivery = isBrought ? { door: chance.pick(DOORS), postcode: 'ZZ3 2AB' } : null;
+    orders.push(await placePaidOrder(deps, { sale, person, lines, slotId: slot.id, at, note, delivery }));
   }
   return orders;
 }
@@ -57,7 +72,15 @@ function repeat(offer: OfferRow): OfferRow[] {
   return Array.from({ length: offer.offered }, () => offer);
 }
 
-type Placement = { sale: Sale; person: Person; lines: BasketLine[]; slotId: string; at: Date; note: string };
+type Placement = {
+  sale: Sale;
+  person: Person;
+  lines: BasketLine[];
+  slotId: string;
+  at: Date;
+  note: string;
+  delivery: { door: string; postcode: string } | null;
+};
 
 /** The end of a checkout without its page: stock sold, money taken by the payment company, the charge written down. */
 async function placePaidOrder(deps: Deps, placement: Placement): Promise<OrderRow> {
@@ -75,8 +98,10 @@ async function placePaidOrder(deps: Deps, placement: Placement): Promise<OrderRo
 }
 
 async function insertSoldOrder(tx: Tx, placement: Placement): Promise<OrderRow> {
-  const { sale, person, slotId, at, note } = placement;
+  const { sale, person, at, note, delivery } = placement;
   const { id: dayId, day } = sale.day;
+  const round = delivery && (await getRound(tx, { id: dayId, day }, delivery));
+  const slotId = round?.slotId ?? placement.slotId;
   const order = await insertOrder(tx, {
     token: randomBytes(24).toString('base64url'),
     basketKey: randomUUID(),
@@ -87,6 +112,8 @@ async function insertSoldOrder(tx: Tx, placement: Placement): Promise<OrderRow> 
     email: person.email,
     phone: person.phone,
     note,
+    deliveryAddress: delivery && [delivery.door],
+    deliveryPostcode: delivery?.postcode ?? null,
     state: 'confirmed',
     paymentState: 'paid',
     isHeld: false,
@@ -97,8 +124,9 @@ async function insertSoldOrder(tx: Tx, placement: Placement): Promise<OrderRow> 
   if (!order) throw new Error('An order was not kept.');
   const lines = await take(tx, { day: { id: dayId, day }, lines: placement.lines, slotId }, 'sold');
   await replaceLines(tx, order.id, lines);
-  const totalPence = lines.reduce((sum, line) => sum + line.quantity * line.unitPricePence, 0);
-  return updateOrder(tx, order.id, { totalPence });
+  const goodsPence = lines.reduce((sum, line) => sum + line.quantity * line.unitPricePence, 0);
+  const deliveryPence = round ? deliveryPenceOf(round.area, goodsPence) : 0;
+  return updateOrder(tx, order.id, { totalPence: goodsPence + deliveryPence, deliveryPence });
 }
 
 /** The mail that goes out when an order is confirmed; it leaves as soon as the server runs. */

@@ -59,6 +59,18 @@ describe('the demo farm', () => {
     expect(loose.filter((row) => row.kind === 'box' && row.offered > 0)).toHaveLength(6);
   });
 
+  test('has orders that the van brings, on a round of the next day', async () => {
+    const [, next] = await listDays();
+    const orders = await world.db
+      .select()
+      .from(customerOrder)
+      .where(eq(customerOrder.cuttingDayId, next?.id ?? ''));
+    const brought = orders.filter((order) => order.deliveryAddress !== null);
+    expect(brought.length).toBeGreaterThanOrEqual(3);
+    expect(new Set(brought.map((order) => order.slotId)).size).toBe(1);
+    expect(brought.every((order) => order.deliveryPostcode?.startsWith('ZZ'))).toBe(true);
+  });
+
   test('sells what its carcases give: boxes, loose packs and trade lines add up to it within 2 per cent', async () => {
     for (const day of await listDays()) {
       const published = await findPublishedAllocation(world.db, day.id);
