@@ -1,6 +1,6 @@
 import type { Settings } from '#shared/contracts/office.ts';
 import type { AllocationQuestion } from '#shared/domain/allocation-record.ts';
-import type { WayLock } from '#shared/engine/allocation/allocation-input.ts';
+import type { StockItem, WayLock } from '#shared/engine/allocation/allocation-input.ts';
 import { shortEarTag } from '#shared/domain/ear-tag.ts';
 import { judgeMince, type MinceVerdict } from '#shared/domain/mince-age.ts';
 import { defaultSpread, WEIGHED_SPREAD } from '#shared/engine/promise/spread.ts';
@@ -20,6 +20,7 @@ import {
   type ReservedLine,
 } from './allocation-queries.ts';
 import { buildDayInput } from './day-input.ts';
+import { readFrozenStock } from './frozen-stock.ts';
 
 /** All that a day's question is made of, as it stands now. */
 export type DayFacts = {
@@ -29,6 +30,8 @@ export type DayFacts = {
   kinds: BoxKindRow[];
   offers: OfferRow[];
   reserved: ReservedLine[];
+  /** Out of the freezer, from earlier days. */
+  stock: StockItem[];
 };
 
 /** Refuses a day that is closed, and with NOT_FILLABLE one that has no carcase. */
@@ -47,6 +50,7 @@ export async function loadDayFacts(db: Db | Tx, dayId: string): Promise<DayFacts
     kinds: await listBoxKinds(db),
     offers: await listOffers(db, dayId),
     reserved: await listConfirmedLines(db, dayId),
+    stock: await readFrozenStock(db, dayId),
   };
 }
 
@@ -54,9 +58,9 @@ type Wishes = { locks: readonly WayLock[]; asked?: readonly ReservedLine[] };
 
 /** The engine's question about a day, with the owner's locks. */
 export function askAbout(facts: DayFacts, { locks, asked = [] }: Wishes): Omit<AllocationQuestion, 'lpText'> {
-  const { figures, settings, cuts, kinds, offers, reserved } = facts;
+  const { figures, settings, cuts, kinds, offers, reserved, stock } = facts;
   const input = buildDayInput({
-    ...{ cuts, kinds, offers, reserved, asked, locks },
+    ...{ cuts, kinds, offers, reserved, asked, locks, stock },
     sides: figures.sides,
     specification: figures.specification,
     butcheryTenthPencePerKg: settings.butcheryTenthPencePerKg,

@@ -3,6 +3,7 @@ import type {
   BoxVariant,
   LooseDemand,
   Priority,
+  StockItem,
   TradeLine,
   WayLock,
 } from '#shared/engine/allocation/allocation-input.ts';
@@ -33,6 +34,7 @@ export type DayRows = {
   /** Wished for, not promised: whatever is promised comes first. */
   asked: readonly ReservedLine[];
   locks: readonly WayLock[];
+  stock: readonly StockItem[];
   /** Plain boning and cutting, in tenths of a penny per kg of primal. */
   butcheryTenthPencePerKg: number;
   /** Why meat of this day may not be minced, or null. */
@@ -47,7 +49,7 @@ export function buildDayInput(rows: DayRows): AllocationInput {
   return {
     sides: rows.sides.map((side) => addBoning(side, rows.butcheryTenthPencePerKg)),
     cuts,
-    stock: [],
+    stock: rows.stock.filter(({ cutId }) => known.has(cutId)),
     boxes: rows.kinds.map((kind) => toVariant(kind, known, takenOf(rows.offers, `box:${kind.id}`))).filter(isWanted),
     loose: cuts
       .filter((cut) => cut.isSoldLoose)

@@ -51,8 +51,11 @@ export function describeAllocation(row: AllocationRow, facts: AllocationFacts): 
     sides,
     ...describeGoods(row, facts.offers),
     trade: describeTrade(row, facts.reserved),
-    cuts: plan.cuts.filter(hasWeight).map(({ stockGrams: _stock, ...cut }) => ({
+    cuts: plan.cuts.filter(hasWeight).map(({ leftStockGrams = 0, ...cut }) => ({
       ...cut,
+      stockUsedGrams: cut.stockGrams - leftStockGrams,
+      // What stays in the freezer is no leftover of this day.
+      leftGrams: cut.leftGrams - leftStockGrams,
       name: cutName(cut.cutId),
       worthPencePerKg: explanation?.worths.find((worth) => worth.cutId === cut.cutId)?.pencePerKg ?? null,
     })),

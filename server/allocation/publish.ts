@@ -12,9 +12,11 @@ import {
   withdrawOffers,
 } from './allocation-queries.ts';
 import type { Tx } from '#server/deps.ts';
+import type { StockItem } from '#shared/engine/allocation/allocation-input.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
-import { formatCount } from '#shared/domain/words.ts';
+import { formatCount, formatWeight } from '#shared/domain/words.ts';
 import { AppError } from '#shared/errors.ts';
+import { frozenUse, readFrozenStock } from './frozen-stock.ts';
 import { goodsOnOffer, sideOf, tradeOnOffer } from './offers-of-plan.ts';
 
 export type Publication = { row: AllocationRow; day: CuttingDayRow; at: Date; byUserId: string | null };
@@ -26,6 +28,7 @@ export type Publication = { row: AllocationRow; day: CuttingDayRow; at: Date; by
 export async function publish(tx: Tx, publication: Publication): Promise<void> {
   const { row, day, at, byUserId } = publication;
   const reserved = await refuseIfStale(tx, row, day);
+  refuseUnlessFrozen(row, await readFrozenStock(tx, day.id));
   const offers = await lockOffers(tx, day.id);
   const wanted = goodsOnOffer(row);
   refuseUnlessCovered(offers, wanted);
@@ -103,6 +106,20 @@ function refuseUnlessSameReservations(row: AllocationRow, reserved: readonly Res
     throw new AppError(
       'STATE_CHANGED',
       'A reservation came or went since this allocation was worked out. Nothing was published; allocate again.',
+    );
+  }
+}
+
+/** Another day, or somebody's dinner, may have taken out of the freezer what this plan counts on. */
+function refuseUnlessFrozen(row: AllocationRow, stock: readonly StockItem[]): void {
+  for (const [cutId, usedGrams] of frozenUse(row)) {
+    const lyingGrams = stock.find((item) => item.cutId === cutId)?.grams ?? 0;
+    if (usedGrams <= lyingGrams) continue;
+    const name = row.input.input.cuts.find(({ id }) => id === cutId)?.name ?? cutId;
+    throw new AppError(
+      'STATE_CHANGED',
+      `This plan counts on ${formatWeight(usedGrams)} of frozen ${name}, and only ${formatWeight(lyingGrams)} lie free. Nothing was published; allocate again.`,
+      { figures: { usedGrams, lyingGrams } },
     );
   }
 }

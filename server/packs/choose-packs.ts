@@ -12,7 +12,12 @@ export function choosePacks(jobs: readonly Job[], free: readonly WeighedPack[]):
     const ofCut = [...left]
       .filter((pack) => pack.cutId === job.cutId)
       .sort((a, b) => b.grams - a.grams || (a.id < b.id ? -1 : 1));
-    const packs = job.kind === 'trade' ? forWeight(ofCut, job.grams - gramsIn(job)) : forOne(ofCut, job.upperGrams);
+    const fresh = ofCut.filter((pack) => pack.state === 'fresh');
+    // Butchers reserve fresh beef; a loose pack may be frozen where no fresh one is left.
+    const packs =
+      job.kind === 'trade'
+        ? forWeight(fresh, job.grams - gramsIn(job))
+        : forOne(fresh.length > 0 ? fresh : ofCut, job.upperGrams);
     for (const pack of packs) {
       left.delete(pack);
       chosen.push({ pack, job });

@@ -50,11 +50,11 @@ export async function takeApart(tx: Tx, byUserId: string, { jobs, packs }: Packi
   const back = packs.filter((pack) => ids.includes(pack.id) && pack.place === 'order');
   await recordMovements(
     tx,
-    back.map(({ id, carcaseId, grams }) => ({
+    back.map(({ id, carcaseId, grams, isFrozen }) => ({
       carcaseId,
       packId: id,
       fromPlace: 'order' as const,
-      toPlace: 'chiller' as const,
+      toPlace: storeOf({ isFrozen }),
       grams,
       reason: 'box filled again',
       byUserId,
@@ -62,11 +62,16 @@ export async function takeApart(tx: Tx, byUserId: string, { jobs, packs }: Packi
   );
 }
 
-/** Packs in the chiller that nobody has; a butcher's wait there too, in his name. */
+/** Packs in the chiller that nobody has, a butcher's waiting there in his name; and the freezer's from earlier days. */
 export function freePacks(packs: PackingWork['packs']): WeighedPack[] {
   return packs
-    .filter((pack) => pack.place === 'chiller' && !pack.isAssigned)
-    .map(({ id, cutId, grams }) => ({ id, cutId, grams, state: 'fresh' }));
+    .filter(({ place, isAssigned, isFrozen }) => !isAssigned && place === storeOf({ isFrozen }))
+    .map(({ id, cutId, grams, isFrozen }) => ({ id, cutId, grams, state: isFrozen ? 'frozen' : 'fresh' }));
+}
+
+/** Where a pack waits that is in no order: what was frozen goes back into the freezer. */
+export function storeOf({ isFrozen }: { isFrozen: boolean }): 'freezer' | 'chiller' {
+  return isFrozen ? 'freezer' : 'chiller';
 }
 
 export function planPlacements({ jobs, packs }: PackingWork): Placement[] {
@@ -109,9 +114,7 @@ export async function place(tx: Tx, byUserId: string, { work, placements }: Plac
       // A butcher's packs wait in the chiller until they are dispatched.
       if (!row || job.kind === 'trade') return [];
       const movement = { carcaseId: row.carcaseId, packId: pack.id, grams: pack.grams, byUserId };
-      return [
-        { ...movement, fromPlace: 'chiller' as const, toPlace: 'order' as const, reason: `order ${job.orderNo}` },
-      ];
+      return [{ ...movement, fromPlace: storeOf(row), toPlace: 'order' as const, reason: `order ${job.orderNo}` }];
     }),
   );
 }

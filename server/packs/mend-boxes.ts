@@ -1,7 +1,7 @@
 import { repairFill } from '#shared/engine/box-fill/repair-fill.ts';
 import { recordMovements, type Place } from '#server/carcases/ledger-queries.ts';
 import type { Tx } from '#server/deps.ts';
-import { freePacks, SEED } from './fill-service.ts';
+import { freePacks, SEED, storeOf } from './fill-service.ts';
 import { describeFill, placedPacks, type Job } from './fill-work.ts';
 import { endAssignments, insertAssignments } from './pack-queries.ts';
 import type { PackingWork } from './packing-day.ts';
@@ -49,14 +49,15 @@ type Moves = { work: PackingWork; out: string[]; in: string[] };
 
 /** A pack that changes from one box to another stays among the orders. */
 async function movePacks(tx: Tx, byUserId: string, { work, ...moves }: Moves): Promise<void> {
-  const move = (ids: string[], places: { fromPlace: Place; toPlace: Place }) =>
+  const move = (ids: string[], placesOf: (store: Place) => { fromPlace: Place; toPlace: Place }) =>
     ids.flatMap((packId) => {
       const pack = work.packs.find((each) => each.id === packId);
       if (!pack) return [];
-      return [{ ...places, packId, carcaseId: pack.carcaseId, grams: pack.grams, reason: 'box mended', byUserId }];
+      const { carcaseId, grams } = pack;
+      return [{ ...placesOf(storeOf(pack)), packId, carcaseId, grams, reason: 'box mended', byUserId }];
     });
   await recordMovements(tx, [
-    ...move(moves.out, { fromPlace: 'order', toPlace: 'chiller' }),
-    ...move(moves.in, { fromPlace: 'chiller', toPlace: 'order' }),
+    ...move(moves.out, (store) => ({ fromPlace: 'order', toPlace: store })),
+    ...move(moves.in, (store) => ({ fromPlace: store, toPlace: 'order' })),
   ]);
 }

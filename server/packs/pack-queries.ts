@@ -1,4 +1,4 @@
-import { and, asc, desc, eq, inArray, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, exists, inArray, ne, sql } from 'drizzle-orm';
 import { offer } from '#db/schema/allocations.ts';
 import { carcase } from '#db/schema/carcases.ts';
 import { animal } from '#db/schema/herd.ts';
@@ -27,6 +27,46 @@ function selectPacks(db: Db | Tx) {
 export async function listPacks(db: Db | Tx, dayId: string): Promise<PackRow[]> {
   const rows = await selectPacks(db).where(eq(pack.cuttingDayId, dayId)).orderBy(desc(pack.createdAt), asc(pack.code));
   return rows.map(({ pack: row, ...names }) => ({ ...row, ...names }));
+}
+
+/** Packs of other days that were ever put into the freezer. */
+export async function listFrozenPacks(db: Db | Tx, dayId: string): Promise<PackRow[]> {
+  const rows = await selectPacks(db)
+    .where(
+      and(
+        ne(pack.cuttingDayId, dayId),
+        exists(
+          db
+            .select({ one: sql`1` })
+            .from(stockMovement)
+            .where(and(eq(stockMovement.packId, pack.id), eq(stockMovement.toPlace, 'freezer'))),
+        ),
+      ),
+    )
+    .orderBy(asc(pack.packedOn), asc(pack.code));
+  return rows.map(({ pack: row, ...names }) => ({ ...row, ...names }));
+}
+
+/** Which of the packs were ever put into the freezer. */
+export async function readFrozen(db: Db | Tx, packIds: readonly string[]): Promise<Set<string>> {
+  const rows = await db
+    .selectDistinct({ packId: stockMovement.packId })
+    .from(stockMovement)
+    .where(and(inArray(stockMovement.packId, [...packIds]), eq(stockMovement.toPlace, 'freezer')));
+  return new Set(rows.flatMap(({ packId }) => packId ?? []));
+}
+
+/** The day whose order or reservation a pack lies in; null when it lies in none. */
+export async function findDayOfUse(db: Db | Tx, packId: string): Promise<string | null> {
+  const rows = await db
+    .select({ ofOrder: customerOrder.cuttingDayId, ofReservation: reservation.cuttingDayId })
+    .from(packAssignment)
+    .leftJoin(orderLine, eq(orderLine.id, packAssignment.orderLineId))
+    .leftJoin(customerOrder, eq(customerOrder.id, orderLine.orderId))
+    .leftJoin(reservationLine, eq(reservationLine.id, packAssignment.reservationLineId))
+    .leftJoin(reservation, eq(reservation.id, reservationLine.reservationId))
+    .where(and(eq(packAssignment.packId, packId), eq(packAssignment.isLive, true)));
+  return rows[0]?.ofOrder ?? rows[0]?.ofReservation ?? null;
 }
 
 export async function findPack(db: Db | Tx, packId: string): Promise<PackRow | null> {

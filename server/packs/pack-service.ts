@@ -10,6 +10,7 @@ import { recordAudit } from '#server/farm/audit-queries.ts';
 import { enterLedger, refuseTooMuch } from './carcase-ledger.ts';
 import {
   endAssignments,
+  findDayOfUse,
   findPack,
   insertPacks,
   markCut,
@@ -99,7 +100,10 @@ export type Reweighing = { packId: string; grams: number };
 /** A pack that lies in an order stays there. If its box no longer fits, the order is open again and the next fill mends it. */
 export async function reweighPack(deps: Deps, byUserId: string, { packId, grams }: Reweighing): Promise<Pack> {
   return deps.db.transaction(async (tx) => {
-    const { pack, place, lastMovementId } = await lockPack(tx, packId);
+    const { pack, place, lastMovementId, dayId } = await lockPack(tx, packId);
+    if (dayId !== pack.cuttingDayId) {
+      throw new AppError('STATE_CHANGED', `Pack ${pack.code} is frozen and keeps the weight on its label.`);
+    }
     await correctLedger(tx, { pack, place, grams, lastMovementId, byUserId });
     await setPackGrams(tx, packId, grams);
     const detail = { from: pack.grams, to: grams };
@@ -121,14 +125,16 @@ const GONE: readonly Place[] = ['waste', 'own use', 'trade', 'carcase'];
 async function lockPack(tx: Tx, packId: string) {
   const known = await findPack(tx, packId);
   if (!known) throw noSuchPack();
-  await lockOpenDay(tx, known.cuttingDayId);
+  // A frozen pack is worked with on the day whose order it lies in; its own is long closed.
+  const dayId = (await findDayOfUse(tx, packId)) ?? known.cuttingDayId;
+  await lockOpenDay(tx, dayId);
   const pack = await findPack(tx, packId);
   const last = (await readPlaces(tx, [packId])).get(packId);
   if (!pack || !last) throw noSuchPack();
   if (GONE.includes(last.place)) {
     throw new AppError('STATE_CHANGED', `Pack ${pack.code} has been booked out already. Nothing was changed.`);
   }
-  return { pack, place: last.place, lastMovementId: last.id };
+  return { pack, place: last.place, lastMovementId: last.id, dayId };
 }
 
 export type Loss = { packId: string; reason: 'dropped' | 'torn' | 'weighed twice' | 'own use' };
@@ -144,8 +150,8 @@ const DESTINATION: Record<Loss['reason'], Place> = {
 /** Books a pack out. The order that it lay in is open again until the next fill. */
 export async function losePack(deps: Deps, byUserId: string, { packId, reason }: Loss): Promise<PackingDay> {
   return deps.db.transaction(async (tx) => {
-    const { pack, place } = await lockPack(tx, packId);
-    const { jobs } = await loadWork(tx, pack.cuttingDayId);
+    const { pack, place, dayId } = await lockPack(tx, packId);
+    const { jobs } = await loadWork(tx, dayId);
     const job = jobs.find((candidate) => candidate.packs.some((each) => each.id === packId));
     if (job?.isDone) {
       throw new AppError('STATE_CHANGED', `Pack ${pack.code} lies in an order that is ready. Nothing was changed.`);
@@ -156,6 +162,6 @@ export async function losePack(deps: Deps, byUserId: string, { packId, reason }:
     const toPlace = DESTINATION[reason];
     await recordMovements(tx, [{ carcaseId, packId, fromPlace: place, toPlace, grams, reason, byUserId }]);
     await recordAudit(tx, { byUserId, action: 'booked out', subject: 'pack', subjectId: packId, detail: { reason } });
-    return readPackingDay(tx, pack.cuttingDayId);
+    return readPackingDay(tx, dayId);
   });
 }

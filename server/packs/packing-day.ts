@@ -7,14 +7,29 @@ import { loadDayCutouts, type CarcaseFigures, type DayCutouts } from '#server/ca
 import { readPublishedWays } from '#server/carcases/published-plan.ts';
 import type { Db, Tx } from '#server/deps.ts';
 import { describeFill, listJobs, type Job } from './fill-work.ts';
-import { listAssignments, listOrderWork, listPacks, listTradeWork, readPlaces, type PackRow } from './pack-queries.ts';
+import {
+  listAssignments,
+  listFrozenPacks,
+  listOrderWork,
+  listPacks,
+  listTradeWork,
+  readPlaces,
+  type PackRow,
+} from './pack-queries.ts';
 
-export type PackingWork = { jobs: Job[]; packs: (PackRow & { place: string; isAssigned: boolean })[] };
+/** `isFrozen`: out of the freezer, where it was put on an earlier day. */
+export type WorkPack = PackRow & { place: string; isAssigned: boolean; isFrozen: boolean };
+export type PackingWork = { jobs: Job[]; packs: WorkPack[] };
 
-/** All packs of a day, where they lie, and all that they must fill. */
+/**
+ * All packs of a day and the frozen ones of earlier days that nobody has or that lie in an order of this day, where they
+ * lie, and all that they must fill.
+ */
 export async function loadWork(db: Db | Tx, dayId: string): Promise<PackingWork> {
   const published = await findPublishedAllocation(db, dayId);
-  const packs = await listPacks(db, dayId);
+  const frozen = await listFrozenPacks(db, dayId);
+  const frozenIds = new Set(frozen.map((pack) => pack.id));
+  const packs = [...(await listPacks(db, dayId)), ...frozen];
   const ids = packs.map((pack) => pack.id);
   const assignments = ids.length > 0 ? await listAssignments(db, ids) : [];
   const places = ids.length > 0 ? await readPlaces(db, ids) : new Map<string, { place: string }>();
@@ -26,12 +41,16 @@ export async function loadWork(db: Db | Tx, dayId: string): Promise<PackingWork>
     recipes: recipesOf(published),
   });
   const assigned = new Set(assignments.map((row) => row.packId));
+  const inJobs = new Set(jobs.flatMap((job) => job.packs.map((pack) => pack.id)));
   const placed = packs.map((pack) => ({
     ...pack,
     place: places.get(pack.id)?.place ?? 'chiller',
     isAssigned: assigned.has(pack.id),
+    isFrozen: frozenIds.has(pack.id),
   }));
-  return { jobs, packs: placed };
+  const isHere = ({ id, place, isFrozen, isAssigned }: WorkPack) =>
+    !isFrozen || inJobs.has(id) || (place === 'freezer' && !isAssigned);
+  return { jobs, packs: placed.filter(isHere) };
 }
 
 function recipesOf(published: AllocationRow | null): Map<string, Recipe> {
@@ -52,7 +71,8 @@ export async function readPackingDay(db: Db | Tx, dayId: string): Promise<Packin
       state: row.state,
     })),
     cuttingList: figures.carcases.flatMap((carcase) => listCuts(carcase, { figures, published, packs })),
-    packs: packs.map((pack) => describePack(pack, jobs)),
+    // What lies in the freezer unasked for is no pack of this day.
+    packs: packs.filter((pack) => !pack.isFrozen || pack.isAssigned).map((pack) => describePack(pack, jobs)),
     fills: jobs.map(describeFill),
   };
 }

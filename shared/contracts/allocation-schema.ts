@@ -100,6 +100,9 @@ export const Allocation = z.strictObject({
       cutId: z.string(),
       name: z.string(),
       madeGrams: z.int(),
+      /** Frozen stock at hand, and what of it the plan uses. */
+      stockGrams: z.int(),
+      stockUsedGrams: z.int(),
       boxGrams: z.int(),
       looseGrams: z.int(),
       tradeGrams: z.int(),

@@ -91,6 +91,8 @@ export function makeAllocation(more: Partial<Allocation> = {}): Allocation {
       {
         cutId: 'mince',
         name: 'Mince',
+        stockGrams: 0,
+        stockUsedGrams: 0,
         madeGrams: 60_000,
         boxGrams: 40_000,
         looseGrams: 10_000,

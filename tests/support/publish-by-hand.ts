@@ -55,7 +55,7 @@ export async function publishByHand({ db, deps }: World, dayId: string, each = 1
     kinds: await listBoxKinds(db),
     offers: await listOffers(db, dayId),
     reserved: await listConfirmedLines(db, dayId),
-    ...{ asked: [], locks: [], butcheryTenthPencePerKg: 0, minceClosedReason: null },
+    ...{ asked: [], locks: [], stock: [], butcheryTenthPencePerKg: 0, minceClosedReason: null },
   });
   const promise = { boxes: [], loose: [], jointConfidence: 1, safeSharePpht: 100_000, isFloorAtRisk: false };
   const plan = planByHand(input, each);

@@ -50,6 +50,8 @@ export type CutBalance = {
   tradeGrams: number;
   mincedGrams: number;
   leftGrams: number;
+  /** Of what is left, frozen stock that nothing took; plans of earlier days do not say. */
+  leftStockGrams?: number;
 };
 
 export type Shortfall = {

@@ -218,7 +218,9 @@ function readLeft(reading: Reading): number {
   let pence = 0;
   for (const { cutId, state } of reading.model.left) {
     const grams = reading.heaps.get(cutId, state);
-    balanceOf(reading, cutId).leftGrams += grams;
+    const balance = balanceOf(reading, cutId);
+    balance.leftGrams += grams;
+    if (state === 'frozen') balance.leftStockGrams = (balance.leftStockGrams ?? 0) + grams;
     pence += priceForWeight(grams, getCut(reading.model, cutId).clearanceTenthPencePerKg);
   }
   return pence;

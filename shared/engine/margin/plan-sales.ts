@@ -26,7 +26,8 @@ type Use = Omit<Sale, 'carcaseId'> & { channel: Channel; cutId: string };
  * A plan as sales, before kill, butchery and deadweight value are shared. A box's income and packaging are split over its
  * cuts by what they would bring loose; a cut's over the carcases by what each gives of it, mince taken back to the cuts
  * that were minced. The card fee is reckoned on one box an order and on loose packs that ride along with a box; butchers
- * pay by transfer. To the penny: sales add up to the plan's income, their costs to its packaging, packing and mincing.
+ * pay by transfer. To the penny: sales add up to the plan's income less
+ * what frozen stock that stays would fetch, their costs to its packaging, packing and mincing.
  */
 export function planSales(input: AllocationInput, plan: SoldPlan, fee: CardFee): Sale[] {
   const supply = supplyOf(input, plan);
@@ -77,7 +78,9 @@ function supplyOf(input: AllocationInput, plan: SoldPlan): Supply {
     if (!productCutId || mincedGrams === 0 || !from) continue;
     for (const [holder, grams] of shareOver(mincedGrams, from)) add(productCutId, holder, grams);
   }
-  for (const { cutId, grams } of input.stock) add(cutId, STOCK, grams);
+  for (const { cutId, stockGrams, leftStockGrams = 0 } of plan.cuts) {
+    if (stockGrams > leftStockGrams) add(cutId, STOCK, stockGrams - leftStockGrams);
+  }
   return supply;
 }
 
@@ -144,23 +147,15 @@ function packedUses(input: AllocationInput, plan: SoldPlan, { ratePpht }: CardFe
   return uses.map((use, at) => ({ ...use, costs: { ...use.costs, packingPence: packing.get(String(at)) ?? 0 } }));
 }
 
-/** What nothing took, at its clearance price. */
+/** What nothing took, at its clearance price; what stays in the freezer is no sale of this day. */
 function leftUses(input: AllocationInput, plan: SoldPlan): Use[] {
-  const left = plan.cuts.filter(({ leftGrams }) => leftGrams > 0);
-  const worth = left.map(({ cutId, leftGrams }) => {
+  return plan.cuts.flatMap(({ cutId, leftGrams, leftStockGrams = 0 }): Use[] => {
+    const grams = leftGrams - leftStockGrams;
+    if (grams <= 0) return [];
     const cut = input.cuts.find(({ id }) => id === cutId);
-    return [cutId, priceForWeight(leftGrams, cut?.clearanceTenthPencePerKg ?? 0)] as const;
+    const incomePence = priceForWeight(grams, cut?.clearanceTenthPencePerKg ?? 0);
+    return [{ channel: 'left over', boxKindId: null, cutId, grams, incomePence, costs: {} }];
   });
-  const isWorthless = worth.every(([, pence]) => pence === 0);
-  const income = isWorthless ? new Map<string, number>() : shareOver(plan.money.clearancePence, new Map(worth));
-  return left.map(({ cutId, leftGrams }) => ({
-    channel: 'left over',
-    boxKindId: null,
-    cutId,
-    grams: leftGrams,
-    incomePence: income.get(cutId) ?? 0,
-    costs: {},
-  }));
 }
 
 /** Mincing falls on mince, wherever it goes; it stands with the packing. */
