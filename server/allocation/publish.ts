@@ -15,6 +15,7 @@ import type { Tx } from '#server/deps.ts';
 import type { StockItem } from '#shared/engine/allocation/allocation-input.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
 import { formatCount, formatWeight } from '#shared/domain/words.ts';
+import { refuseShortfall } from '#shared/engine/allocation/refuse-shortfall.ts';
 import { AppError } from '#shared/errors.ts';
 import { frozenUse, readFrozenStock } from './frozen-stock.ts';
 import { goodsOnOffer, sideOf, tradeOnOffer } from './offers-of-plan.ts';
@@ -89,14 +90,7 @@ function refuseUnlessFit(row: AllocationRow, day: CuttingDayRow): void {
       `Whole packs do not come out for the line '${unfillable.name}' of a box. Nothing was published; widen that line.`,
     );
   }
-  const short = row.plan.plan.shortfalls[0];
-  if (short) {
-    throw new AppError(
-      'NOT_FILLABLE',
-      `${short.name} is ${short.short} ${short.unit} short. Nothing was published; settle that order first.`,
-      { figures: { short: short.short, unit: short.unit } },
-    );
-  }
+  refuseShortfall(row.plan.plan.shortfalls);
 }
 
 function refuseUnlessSameReservations(row: AllocationRow, reserved: readonly ReservedLine[]): void {

@@ -1,6 +1,8 @@
 import { afterAll, expect, test } from 'vitest';
+import { makeAllocationInstance } from '#scripts/bench/allocation-instances.ts';
 import { createSolver } from '#server/allocation/solver/solver-pool.ts';
 import { allocate } from '#shared/engine/allocation/allocate.ts';
+import { refuseShortfall } from '#shared/engine/allocation/refuse-shortfall.ts';
 import { makeAllocationInput, makeBoxVariant, makeLine } from '#tests/support/make-small-day.ts';
 
 const solver = createSolver({ size: 1 });
@@ -42,3 +44,39 @@ test('a cancelled question, ends without a plan', async () => {
   cancel.abort(new Error('not wanted any more'));
   await expect(plan).rejects.toThrow('not wanted any more');
 });
+
+test('confirmed orders beyond the day, are still planned with the least shortfall, and are refused when published', async () => {
+  const boxes = [
+    makeBoxVariant('first', [makeLine('stew', ['dice'])], {
+      guaranteedGrams: 1_000,
+      floor: 20,
+      steps: [],
+      priority: 1,
+    }),
+    makeBoxVariant('second', [makeLine('stew', ['dice'])], {
+      guaranteedGrams: 1_000,
+      floor: 20,
+      steps: [],
+      priority: 3,
+    }),
+  ];
+  const plan = await allocate(makeAllocationInput({ boxes }), solver);
+  // 24 kg of dice make 24 boxes of a kilogram: the second is the one that goes without.
+  expect(plan.shortfalls).toMatchObject([{ id: 'second', short: 16, unit: 'boxes' }]);
+  expect(plan.isProven).toBe(true);
+  expect(() => refuseShortfall(plan.shortfalls)).toThrow(
+    expect.objectContaining({ code: 'CONFIRMED_EXCEEDS_STOCK', node: 'box/second' }),
+  );
+  expect(() => refuseShortfall([])).not.toThrow();
+});
+
+test('a day of two carcases that has sold far too much, names every order hit and keeps the first class whole', async () => {
+  const day = makeAllocationInstance({ carcases: 2, seed: 2, boxes: 2, loose: 3, trade: 5 });
+  const boxes = day.boxes.map((box, index) => ({ ...box, floor: index === 0 ? 60 : 2, priority: index === 0 ? 3 : 1 }));
+  const plan = await allocate({ ...day, boxes: boxes as typeof day.boxes }, solver, { timeLimitSeconds: 60 });
+  const hit = plan.shortfalls.filter(({ short }) => short > 0);
+  expect(hit.map(({ id }) => id)).toContain(boxes[0]?.id);
+  expect(hit.some(({ priority }) => priority === 1)).toBe(false);
+  const [big] = plan.boxes.filter(({ variantId }) => variantId === boxes[0]?.id);
+  expect((big?.boxes ?? 0) + (big?.short ?? 0)).toBe(60);
+}, 180_000);
