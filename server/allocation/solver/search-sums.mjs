@@ -200,7 +200,9 @@ class Search {
   }
 
   begin(root) {
+    const { start } = this.about;
     this.open = [root];
+    if (start) this.settle(root, { held: this.nodes.whole.map((column) => [column, Math.round(start[column])]) });
     if (this.nodes.whole.length > MANY_WHOLE) this.settle(root, { held: this.held(root) });
     for (const isLastFirst of [true, false]) {
       if (!this.isOpen(root.key)) return;

@@ -112,6 +112,7 @@ function solveBySums(highs, { model, names, startedAt }, { options, report }) {
     sums: options.sumsFirst.map((columns) => columns.flatMap((name) => places.get(name) ?? [])),
     sign,
     gap,
+    start: options.start && names.map((name) => options.start[name] ?? 0),
     isOver: (count) => milliseconds() > limit || count > (options.nodeLimit ?? Infinity),
     report: (at) =>
       atTimes(() => ({

@@ -61,8 +61,13 @@ export class SumModel {
     const { model, highs } = this;
     this.place(node);
     model.run();
+    const { optimal, infeasible, unboundedOrInfeasible, timeLimit } = highs.constants.modelStatus;
+    if (![optimal, infeasible, unboundedOrInfeasible, timeLimit].includes(model.getModelStatus())) {
+      // The basis of the one before led nowhere: from the beginning.
+      model.clearSolver();
+      model.run();
+    }
     const status = model.getModelStatus();
-    const { optimal, infeasible, unboundedOrInfeasible } = highs.constants.modelStatus;
     if (status === infeasible || status === unboundedOrInfeasible) return null;
     if (status !== optimal) return { ...node, isUnfinished: true };
     this.basis ??= model.getBasis();

@@ -146,15 +146,16 @@ function isSameLock(a: WayLock, b: WayLock): boolean {
 
 /**
  * The cost of each lock: the optimum without it less the optimum with it, in pence, all other locks standing. It is shown
- * with the way that the plan would then take; where there is no lock nothing is compared.
+ * with the way that the plan would then take; where there is no lock nothing is compared. `heldPence` is the optimum with
+ * all of them, where the plan has it already.
  */
 export async function costsOfLocks(
   input: AllocationInput,
-  about: { solver: Solver; options?: ExplainOptions },
+  about: { solver: Solver; options?: ExplainOptions; heldPence?: number },
 ): Promise<LockCost[]> {
   const { locks } = orderInput(input);
   if (locks.length === 0) return [];
-  const held = await optimum(input, about);
+  const heldPence = about.heldPence ?? (await optimum(input, about)).solution.objective;
   const costs: LockCost[] = [];
   for (const lock of locks) {
     const others = input.locks.filter((other) => !isSameLock(other, lock));
@@ -168,7 +169,7 @@ export async function costsOfLocks(
     );
     costs.push({
       ...lock,
-      costPence: Math.max(0, Math.round(free.solution.objective - held.solution.objective)),
+      costPence: Math.max(0, Math.round(free.solution.objective - heldPence)),
       freeWayId: chosen?.way.wayId ?? null,
     });
   }
@@ -184,6 +185,6 @@ export async function explain(
   return {
     limits: await limitsOfBoxes(input, plan, about),
     worths: await worthOfCuts(input, plan, about),
-    locks: await costsOfLocks(input, about),
+    locks: await costsOfLocks(input, { ...about, heldPence: plan.contributionPence + plan.wholePackPence }),
   };
 }

@@ -10,6 +10,9 @@ import { relativeGap, type AllocateOptions, type PlanPhase } from './plan-progre
 /** Pence by which an earlier optimum may be missed later: below any price, above a solver's tolerance. */
 export const SHORT_TOLERANCE = 0.01;
 const LEAST_SECONDS = 1;
+/** Relative gap of a shortfall, and the share of the remaining time that its search may take: the plan needs the rest. */
+const SHORT_GAP = 0.001;
+const SHORT_TIME = 1 / 3;
 
 export type Solved = { solution: Solution; lpText: string };
 /** One model on its way to an answer: earlier optima and boxes taken off are rows of its text. */
@@ -70,20 +73,33 @@ export function failed(sentence: string): EngineError {
   });
 }
 
-/** Finds the least shortfall of each priority in turn, each held while the next is sought. */
-async function fixShortfalls(session: Session): Promise<void> {
+/**
+ * Finds the least shortfall of each priority in turn, each held while the next is sought. Returns the last answer: what
+ * comes after begins from it.
+ */
+async function fixShortfalls(session: Session, options: SolveOptions): Promise<SolveOptions> {
   const { phase } = session;
   session.phase = 'shortfall';
+  const gap = Math.max(SHORT_GAP, session.options.gap ?? 0);
+  let begun = options;
   for (const priority of PRIORITIES) {
     const terms = shortTerms(session.model, priority);
     if (terms.length === 0) continue;
     const title = `Least shortfall of priority ${priority}, in pence of what it would have brought`;
-    const { solution } = await solve(session, { sense: 'Minimize', objective: terms, title });
+    const time = remaining(session).timeLimitSeconds;
+    const limit = time === undefined ? {} : { timeLimitSeconds: Math.max(LEAST_SECONDS, time * SHORT_TIME) };
+    const { solution } = await solve(
+      session,
+      { sense: 'Minimize', objective: terms, title },
+      { ...begun, gap, ...limit },
+    );
     if (!solution.hasAnswer) throw failed('The least shortfall could not be found in time.');
     session.isProven &&= isProof(session, solution);
     session.fixed.push(shortRow(priority, terms, Math.max(0, solution.objective) + SHORT_TOLERANCE));
+    begun = { ...options, start: solution.columns };
   }
   session.phase = phase;
+  return begun;
 }
 
 export const TITLE = 'Contribution of one cutting day in pence; weights in kilograms';
@@ -105,6 +121,5 @@ export async function solvePhases(session: Session, hoped: ReadonlyMap<Priority,
     return hopeful;
   }
   if (hopeful.solution.status === 'limit') throw failed('No plan was found in time.');
-  await fixShortfalls(session);
-  return await solve(session, { title: TITLE }, options);
+  return await solve(session, { title: TITLE }, await fixShortfalls(session, options));
 }
