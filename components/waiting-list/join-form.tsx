@@ -39,7 +39,7 @@ export function JoinForm({ box, day, isSending, sentTo, refusal, onJoin }: JoinF
     );
   }
   return (
-    <Disclosure words={`Tell me when there is a ${box} again`}>
+    <Disclosure words={`Tell me when ${box} can be had again`}>
       <FormFrame name={`Waiting list for ${box}`} onSubmit={send}>
         {day ? (
           <ChipGroup

@@ -15,13 +15,13 @@ export function placeWords(place: WaitingPlace): { title: string; lead: string }
       };
     case 'offered':
       return {
-        title: `A ${box} is kept for you`,
+        title: `${box} is kept for you`,
         lead: kept ? `Of ${formatDay(kept.day)}, until ${formatDayTime(kept.until)}.` : '',
       };
     case 'taken':
       return { title: 'You took your box', lead: 'This link is used up. The order has a mail of its own.' };
     case 'lapsed':
-      return { title: 'The time has run out', lead: `The ${box} went to the next on the list. You can wait again.` };
+      return { title: 'The time has run out', lead: `${box} went to the next on the list. You can wait again.` };
     case 'left':
       return { title: 'You are off the list', lead: 'We do not write about this box any more.' };
   }

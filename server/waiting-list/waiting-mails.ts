@@ -18,7 +18,7 @@ export function confirmPlaceMail(facts: WaitingFacts & { day: Day | null }): Wri
     { kind: 'heading', text: 'Shall we write when there is one?' },
     {
       kind: 'text',
-      text: `Somebody, most likely you, asked to be told when a ${facts.box} box${forDay} comes free again. Press the button to go on the list. Nothing is ordered and nothing is owed.`,
+      text: `Somebody, most likely you, asked to be told when ${facts.box}${forDay} comes free again. Press the button to go on the list. Nothing is ordered and nothing is owed.`,
     },
     { kind: 'button', text: 'Go on the list', url: facts.url },
     { kind: 'text', text: 'If it was not you, do nothing: without this step we do not write again.' },
@@ -27,11 +27,11 @@ export function confirmPlaceMail(facts: WaitingFacts & { day: Day | null }): Wri
 
 export function boxKeptMail(facts: WaitingFacts & { day: Day; until: Date }): WrittenMail {
   const until = formatDayTime(facts.until);
-  return write(facts, `A ${facts.box} box is kept for you until ${until}`, [
+  return write(facts, `One ${facts.box} box is kept for you until ${until}`, [
     { kind: 'heading', text: 'There is one again' },
     {
       kind: 'text',
-      text: `A ${facts.box} box of ${formatDay(facts.day)} came free, and you are next. We keep it for you until ${until}; after that it goes to the next on the list.`,
+      text: `One ${facts.box} box of ${formatDay(facts.day)} came free, and you are next. We keep it for you until ${until}; after that it goes to the next on the list.`,
     },
     { kind: 'button', text: 'Take the box', url: facts.url },
     { kind: 'text', text: 'You do not want it any more? The same page gives it up, and somebody else is glad of it.' },

@@ -30,7 +30,7 @@ export async function joinWaitingList(deps: Deps, wish: JoinWaitingList): Promis
     });
   }
   if (offers.some((offer) => offer.free > 0)) {
-    throw new AppError('STATE_CHANGED', `There is a ${box.name} box just now: you can put it into your basket.`);
+    throw new AppError('STATE_CHANGED', `${box.name} can be had just now: you can put it into your basket.`);
   }
   const email = wish.email.toLowerCase();
   await deps.db.transaction(async (tx) => {
