@@ -1,7 +1,7 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
 import type { CallInput } from '#shared/contracts/endpoint.ts';
-import type { editBoxKindSchema, Settings } from '#shared/contracts/office-schema.ts';
-import { editBoxKind, editSettings, getSettings, getToday, listBoxKinds } from '#shared/contracts/office.ts';
+import type { addSwapSchema, editBoxKindSchema, Settings } from '#shared/contracts/office-schema.ts';
+import { addSwap, editBoxKind, editSettings, getSettings, getToday, listBoxKinds } from '#shared/contracts/office.ts';
 import { call } from './api.ts';
 import { loadFarm } from './farm.ts';
 import { STALE } from './query-client.ts';
@@ -55,4 +55,8 @@ export function useEditBoxKind() {
 
 export function useEditSettings() {
   return useFarmMutation((body: Settings) => call(editSettings, { body }));
+}
+
+export function useAddSwap() {
+  return useFarmMutation((input: CallInput<typeof addSwapSchema>) => call(addSwap, input));
 }

@@ -51,6 +51,19 @@ export async function keepSwapsEqual(tx: Tx, boxKindId: string, edit: BoxKindEdi
     );
 }
 
+/** Null when a box of this address exists already. */
+export async function insertSwap(
+  tx: Tx,
+  swap: Omit<typeof boxKind.$inferInsert, 'id'> & { variantOfId: string },
+): Promise<string | null> {
+  const rows = await tx
+    .insert(boxKind)
+    .values(swap)
+    .onConflictDoNothing({ target: boxKind.slug })
+    .returning({ id: boxKind.id });
+  return rows[0]?.id ?? null;
+}
+
 export async function replaceBoxLines(tx: Tx, boxKindId: string, lines: BoxKindEdit['lines']): Promise<void> {
   await tx.delete(boxLine).where(eq(boxLine.boxKindId, boxKindId));
   for (const [position, { cutIds, ...line }] of lines.entries()) {

@@ -7,6 +7,7 @@ import type { Db, Deps, Tx } from '#server/deps.ts';
 import { recordAudit } from '#server/farm/audit-queries.ts';
 import {
   findBoxKindVersion,
+  insertSwap,
   keepSwapsEqual,
   listOfficeCuts,
   replaceBoxLines,
@@ -42,6 +43,39 @@ export async function editBoxKind(
   });
 }
 
+/** A swap begins as its box under another name; the owner then changes its recipe and offers it. */
+export async function addSwap(
+  deps: Deps,
+  byUserId: string,
+  { boxKindId, name }: { boxKindId: string; name: string },
+): Promise<BoxKind> {
+  return deps.db.transaction(async (tx) => {
+    const box = (await listKindRows(tx)).find((kind) => kind.id === boxKindId);
+    if (!box) throw new AppError('NOT_FOUND', 'There is no such box.');
+    if (box.variantOfId) throw new AppError('STATE_CHANGED', 'This is a swap itself. Add one to its box instead.');
+    const { guaranteedGrams, pricePence, packagingPence, summary, position } = box;
+    const copied = { guaranteedGrams, pricePence, packagingPence, summary, position };
+    const slug = `${box.slug}-${name.toLowerCase().replace(/[^a-z0-9]+/g, '-')}`.replace(/-+$/, '').slice(0, 60);
+    const swapId = await insertSwap(tx, {
+      ...{ ...copied, name, slug },
+      ...{ demandBoxes: 0, isActive: false, variantOfId: box.id },
+    });
+    if (!swapId) {
+      const words = 'This box has a swap of that name already.';
+      throw new AppError('ALREADY_KNOWN', `${words} Nothing was added.`, { fields: { name: words } });
+    }
+    await replaceBoxLines(tx, swapId, toBoxKind(box).lines);
+    await recordAudit(tx, {
+      byUserId,
+      action: 'added a swap',
+      subject: 'box kind',
+      subjectId: swapId,
+      detail: { name },
+    });
+    return getBoxKind(tx, swapId);
+  });
+}
+
 async function getBoxKind(db: Db | Tx, boxKindId: string): Promise<BoxKind> {
   const row = (await listKindRows(db)).find((kind) => kind.id === boxKindId);
   if (!row) throw new AppError('NOT_FOUND', 'There is no such box.');
@@ -52,6 +86,7 @@ function toBoxKind(row: BoxKindRow): BoxKind {
   return {
     id: row.id,
     slug: row.slug,
+    swapOfId: row.variantOfId,
     version: row.version,
     name: row.name,
     summary: row.summary,

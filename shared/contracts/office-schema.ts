@@ -60,7 +60,13 @@ export const BoxKindEdit = z.strictObject({
   lines: z.array(BoxKindLine).min(1, 'A box needs at least one line.').max(20),
 });
 export type BoxKindEdit = z.infer<typeof BoxKindEdit>;
-export const BoxKind = z.strictObject({ ...BoxKindEdit.shape, id: Id, slug: z.string() });
+export const BoxKind = z.strictObject({
+  ...BoxKindEdit.shape,
+  id: Id,
+  slug: z.string(),
+  /** The box that this is a swap of: it has that one's price and guarantee. */
+  swapOfId: Id.nullable(),
+});
 export type BoxKind = z.infer<typeof BoxKind>;
 
 export const Cut = z.strictObject({
@@ -78,6 +84,12 @@ export const Cut = z.strictObject({
 export type Cut = z.infer<typeof Cut>;
 
 export const listBoxKindsSchema = { answer: z.strictObject({ boxKinds: z.array(BoxKind), cuts: z.array(Cut) }) };
+/** A copy of the box's recipe under a name of its own, off sale until it is edited and offered. */
+export const addSwapSchema = {
+  params: z.strictObject({ boxKindId: Id }),
+  body: z.strictObject({ name: Line }),
+  answer: BoxKind,
+};
 /** Refused with RECIPE_INFEASIBLE when no packs could ever meet the recipe. */
 export const editBoxKindSchema = { params: z.strictObject({ boxKindId: Id }), body: BoxKindEdit, answer: BoxKind };
 

@@ -9,6 +9,9 @@ export const listBoxKinds = endpoint<typeof schema.listBoxKindsSchema>('GET', '/
 export const editBoxKind = endpoint<typeof schema.editBoxKindSchema>('PUT', '/api/office/box-kinds/:boxKindId', [
   'owner',
 ]);
+export const addSwap = endpoint<typeof schema.addSwapSchema>('POST', '/api/office/box-kinds/:boxKindId/swaps', [
+  'owner',
+]);
 export const getSettings = endpoint<typeof schema.getSettingsSchema>('GET', '/api/settings', ['owner']);
 export const editSettings = endpoint<typeof schema.editSettingsSchema>('PUT', '/api/settings', ['owner']);
 /** Answers once the database does. */

@@ -141,6 +141,38 @@ describe('a box kind', () => {
   let made = 0;
   const aBox = () => makeBoxKind(world.db, `box-${(made += 1)}`, { cutIds: ['mince'] });
 
+  test('gets a swap as a copy that is off sale and follows its price, and whose own price is refused', async () => {
+    const box = await aBox();
+    await owner.put(`/api/office/box-kinds/${box.id}`).send(edit()).expect(200);
+    const path = `/api/office/box-kinds/${box.id}/swaps`;
+    const swap = (await owner.post(path).send({ name: 'No steak' }).expect(200)).body as BoxKind;
+    expect(swap).toMatchObject({
+      name: 'No steak',
+      swapOfId: box.id,
+      isActive: false,
+      demandBoxes: 0,
+      pricePence: 3_400,
+    });
+    expect(swap.lines).toEqual(edit().lines);
+    expect((await owner.post(path).send({ name: 'no steak' }).expect(409)).body).toMatchObject({
+      code: 'ALREADY_KNOWN',
+      fields: { name: expect.any(String) as unknown },
+    });
+    await owner.post(`/api/office/box-kinds/${swap.id}/swaps`).send({ name: 'Deeper' }).expect(409);
+    await owner
+      .put(`/api/office/box-kinds/${box.id}`)
+      .send(edit({ version: 2, pricePence: 3_600 }))
+      .expect(200);
+    const { boxKinds } = (await owner.get('/api/office/box-kinds').expect(200)).body as { boxKinds: BoxKind[] };
+    const followed = boxKinds.find((kind) => kind.id === swap.id);
+    expect(followed).toMatchObject({ pricePence: 3_600, version: 2 });
+    const own = await owner
+      .put(`/api/office/box-kinds/${swap.id}`)
+      .send(edit({ version: 2, pricePence: 3_000 }))
+      .expect(400);
+    expect(own.body).toMatchObject({ fields: { pricePence: expect.any(String) as unknown } });
+  });
+
   test('is edited with its recipe, and listed so', async () => {
     const box = await aBox();
     const answer = await owner.put(`/api/office/box-kinds/${box.id}`).send(edit()).expect(200);

@@ -2,6 +2,7 @@ import { useLocalSearchParams } from 'expo-router';
 import { useState } from 'react';
 import { View } from 'react-native';
 import { BoxKindForm } from '#components/office/box-kind-form.tsx';
+import { BoxSwaps } from '#components/office/box-swaps.tsx';
 import { css } from '#components/theme/css.ts';
 import { EmptyState } from '#components/ui/empty-state.tsx';
 import { Notice } from '#components/ui/notice.tsx';
@@ -9,7 +10,7 @@ import { ProblemNotice } from '#components/ui/problem-notice.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
 import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
-import { useBoxKinds, useEditBoxKind } from '#hooks/office.ts';
+import { useAddSwap, useBoxKinds, useEditBoxKind } from '#hooks/office.ts';
 import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
 import { useTitle } from '#hooks/use-title.ts';
 import type { BoxKind, BoxKindEdit, Cut } from '#shared/contracts/office.ts';
@@ -38,6 +39,7 @@ export default function BoxKindScreen() {
                 Photographs
               </TextLink>
             </View>
+            <Swaps box={box} kinds={data.boxKinds} />
             {round > 0 ? <Notice kind="good" spoken title="This is what is recorded now." /> : null}
             <Edit key={`${box.id} ${round}`} box={box} cuts={data.cuts} afresh={() => setRound(round + 1)} />
           </View>
@@ -47,9 +49,24 @@ export default function BoxKindScreen() {
   );
 }
 
+/** Its swaps, or the box that this is a swap of. */
+function Swaps({ box, kinds }: { box: BoxKind; kinds: readonly BoxKind[] }) {
+  const add = useAddSwap();
+  const swapOf = kinds.find(({ id }) => id === box.swapOfId);
+  return (
+    <BoxSwaps
+      swapOf={swapOf}
+      swaps={kinds.filter((kind) => kind.swapOfId === box.id)}
+      onAdd={(name) => add.mutate({ params: { boxKindId: box.id }, body: { name } })}
+      isAdding={add.isPending}
+      error={add.error}
+    />
+  );
+}
+
 function Edit({ box, cuts, afresh }: { box: BoxKind; cuts: readonly Cut[]; afresh: () => void }) {
   const edit = useEditBoxKind();
-  const { id, slug: _slug, ...values } = box;
+  const { id, slug: _slug, swapOfId: _swapOfId, ...values } = box;
   const form = useContractForm<BoxKindEdit>(loadSchema, values);
   useTitle(box.name);
   const submit = sendForm(form, async (body) => {
