@@ -5,7 +5,6 @@ import type { Db, Tx } from '#server/deps.ts';
 import type { HeldLine } from './hold.ts';
 
 export type AdditionRow = typeof orderAddition.$inferSelect;
-export type AdditionLine = Awaited<ReturnType<typeof listAdditionLines>>[number];
 
 export async function insertAddition(
   tx: Tx,
