@@ -1,7 +1,7 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
 import type { publishAllocationSchema } from '#shared/contracts/allocation-schema.ts';
 import { getAllocation, publishAllocation } from '#shared/contracts/allocation.ts';
-import { getAllocationModel } from '#shared/contracts/downloads.ts';
+import { getAllocationModel, getAllocationModelMps } from '#shared/contracts/downloads.ts';
 import type { CallInput } from '#shared/contracts/endpoint.ts';
 import { call } from './api.ts';
 import { STALE } from './query-client.ts';
@@ -26,6 +26,7 @@ export function usePublishAllocation() {
 }
 
 /** Where the browser fetches the model as a file. */
-export function allocationModelHref(allocationId: string): string {
-  return getAllocationModel.path.replace(':allocationId', encodeURIComponent(allocationId));
+export function allocationModelHref(allocationId: string, format: 'lp' | 'mps'): string {
+  const { path } = format === 'lp' ? getAllocationModel : getAllocationModelMps;
+  return path.replace(':allocationId', encodeURIComponent(allocationId));
 }

@@ -15,3 +15,9 @@ export const getAllocationModel = endpoint<typeof schema.getAllocationModelSchem
   '/api/allocations/:allocationId/model.lp',
   ['owner'],
 );
+/** The same in the older format, which every solver reads. */
+export const getAllocationModelMps = endpoint<typeof schema.getAllocationModelSchema>(
+  'GET',
+  '/api/allocations/:allocationId/model.mps',
+  ['owner'],
+);

@@ -147,4 +147,7 @@ test('the model of an allocation can be read by another solver', async () => {
   const file = await world.request(owner).get(`/api/allocations/${plan.id}/model.lp`);
   expect(file.headers['content-disposition']).toContain('allocation.lp');
   expect(file.text).toMatch(/Maximize[\s\S]+Subject To[\s\S]+End/i);
+  const other = await world.request(owner).get(`/api/allocations/${plan.id}/model.mps`);
+  expect(other.headers['content-disposition']).toContain('allocation.mps');
+  expect(other.text).toMatch(/ROWS[\s\S]+COLUMNS[\s\S]+RHS[\s\S]+ENDATA/);
 });

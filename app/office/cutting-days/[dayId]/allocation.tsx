@@ -153,8 +153,11 @@ function PlanLinks({ dayId, plan }: { dayId: string; plan: Allocation }) {
       <TextLink href={`/office/cutting-days/${dayId}/what-if`} place="alone">
         What if …
       </TextLink>
-      <TextLink href={allocationModelHref(plan.id)} outside place="alone">
-        Save the model as a file
+      <TextLink href={allocationModelHref(plan.id, 'lp')} outside place="alone">
+        Save the model as an LP file
+      </TextLink>
+      <TextLink href={allocationModelHref(plan.id, 'mps')} outside place="alone">
+        Save the model as an MPS file
       </TextLink>
       <View style={css('w-row')}>
         <Button kind="quiet" small label="Print the cutting list" onPress={() => window.print()} />
