@@ -32,6 +32,8 @@ class Search {
     this.best = null;
     this.closed = -Infinity;
     this.open = [];
+    /** Key of the node at work, which is not among the open ones. */
+    this.working = -Infinity;
     this.count = 0;
     this.tried = new Set();
     this.isStopped = false;
@@ -48,7 +50,7 @@ class Search {
 
   bound() {
     const top = this.open.reduce((most, { key }) => Math.max(most, key), -Infinity);
-    return Math.max(top, this.closed, this.best?.key ?? -Infinity);
+    return Math.max(top, this.working, this.closed, this.best?.key ?? -Infinity);
   }
 
   relax(node) {
@@ -182,9 +184,9 @@ class Search {
     this.open.push(node);
   }
 
-  /** A node with every choice whole, or one half of the nodes that are left to the solver's own search. */
-  close(node, held) {
-    const bound = this.settle(node, { held, isClosing: true, start: this.best?.columns });
+  /** What branching cannot part any further is left to the solver's own search, with nothing held. */
+  close(node) {
+    const bound = this.settle(node, { held: [], isClosing: true, start: this.best?.columns });
     this.closed = Math.max(this.closed, Math.min(node.key, bound));
   }
 
@@ -195,7 +197,7 @@ class Search {
     if (!this.isOpen(node.key)) return undefined;
     const halves = this.branch(node);
     if (halves) this.open.push(...halves);
-    else this.close(this.wholeSums(node), this.held(node));
+    else this.close(node);
     return undefined;
   }
 
@@ -210,7 +212,9 @@ class Search {
     }
     if (!this.isOpen(root.key)) return;
     this.open = [];
+    this.working = root.key;
     this.plunge(root);
+    if (!this.isStopped) this.working = -Infinity;
   }
 
   run() {
@@ -226,10 +230,14 @@ class Search {
       }
       if (this.count > (this.best ? MOST_NODES : MOST_NODES_BLIND)) {
         this.open = [];
-        this.close({ ...this.nodes.root(), key: node.key }, []);
+        this.working = node.key;
+        this.close({ ...this.nodes.root(), key: node.key });
+        this.working = -Infinity;
         return;
       }
+      this.working = node.key;
       this.visit(node, turn);
+      if (!this.isStopped) this.working = -Infinity;
       this.about.report({ nodes: this.count, best: this.best?.key ?? -Infinity, bound: this.bound() });
     }
   }

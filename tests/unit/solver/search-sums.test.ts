@@ -52,7 +52,9 @@ test.each([1, 2, 3, 4, 5, 6, 7, 8])(
     const { model, sums } = makeModel(seed, 4 + seed);
     const text = model.write();
     const plain = await solver.solve(text, { gap: 0 });
-    const searched = await solver.solve(text, { gap: 0, sumsFirst: sums });
+    // Whole packs are no sums of every second model: what is left of a node then goes to the plain search.
+    const first = seed % 2 === 0 ? sums.slice(0, 3) : sums;
+    const searched = await solver.solve(text, { gap: 0, sumsFirst: first });
     expect(searched.status).toBe('optimal');
     expect(searched.objective).toBeCloseTo(plain.objective, 6);
     for (const columns of sums) {
