@@ -168,17 +168,3 @@ export function listFailedBalances(db: Db) {
     )
     .orderBy(asc(customerOrder.orderNo));
 }
-
-export function listFailedRefunds(db: Db) {
-  return db
-    .select({
-      orderNo: customerOrder.orderNo,
-      name: customerOrder.name,
-      amountPence: payment.amountPence,
-      error: payment.error,
-    })
-    .from(payment)
-    .innerJoin(customerOrder, eq(customerOrder.id, payment.orderId))
-    .where(and(eq(payment.kind, 'refund'), eq(payment.state, 'failed')))
-    .orderBy(asc(customerOrder.orderNo));
-}

@@ -4,6 +4,7 @@ import type { getTodaySchema } from '#shared/contracts/office-schema.ts';
 import { formatEarTag } from '#shared/domain/ear-tag.ts';
 import { formatCount, formatDay, formatMoney } from '#shared/domain/words.ts';
 import type { Deps } from '#server/deps.ts';
+import { listFailedRefunds } from '#server/payments/payment-queries.ts';
 import { dayItems } from './day-items.ts';
 import * as queries from './today-queries.ts';
 
@@ -52,7 +53,7 @@ function tradePence(allocations: readonly queries.DayAllocation[], dayId: string
 }
 
 async function troubleItems({ db }: Deps): Promise<TodayItem[]> {
-  const refunds = (await queries.listFailedRefunds(db)).map((refund): TodayItem => ({
+  const refunds = (await listFailedRefunds(db)).map((refund): TodayItem => ({
     kind: 'refund failed',
     title: `Refund of ${formatMoney(refund.amountPence)} to ${refund.name} failed`,
     detail: `Order ${refund.orderNo}. ${refund.error ?? 'The payment company gave no reason.'}`,

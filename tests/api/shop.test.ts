@@ -151,7 +151,7 @@ test('collections list the times that are to come with what is left of each, and
   expect(point?.slots.map((slot) => slot.id)).toEqual([farm.slot.id, full.id]);
   expect(point?.slots[1]?.free).toBe(0);
   const none = await world.request().get(`/api/cutting-days/${randomUUID()}/collections`);
-  expect(none.body).toEqual({ points: [] });
+  expect(none.body).toEqual({ points: [], hasVan: false });
 });
 
 test('butchers are named once they have beef of the farm, by shop and town alone', async () => {
