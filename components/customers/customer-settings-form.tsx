@@ -41,21 +41,21 @@ export function CustomerSettingsForm({ control, onSubmit, busy }: CustomerSettin
           control={control}
           name="standingFirstReminderDays"
           unit="count"
-          after="days before"
-          label="First reminder"
+          after="days"
+          label="First reminder, before the charge"
         />
         <FormNumber
           control={control}
           name="standingSecondReminderDays"
           unit="count"
-          after="days before"
-          label="Second reminder"
+          after="days"
+          label="Second reminder, before the charge"
         />
         <FormNumber
           control={control}
           name="standingChargeHours"
           unit="count"
-          after="hours before"
+          after="hours"
           label="Charge the card, before orders close"
         />
       </View>

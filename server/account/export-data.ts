@@ -2,17 +2,18 @@ import { consentWords } from '#shared/domain/consent.ts';
 import type { Deps } from '#server/deps.ts';
 import { listConsents } from './consent-queries.ts';
 import { findProfile } from './account-queries.ts';
-import { listMailsTo, listPlacesOf, readOrders, readPerson } from './export-queries.ts';
+import { listMailsTo, listPlacesOf, listStandingOf, readOrders, readPerson } from './export-queries.ts';
 
 /** Everything that is kept about a person, in words of its own: no number of ours that means nothing to them. */
 export async function exportData(deps: Deps, person: { id: string; email: string }): Promise<string> {
   const { db } = deps;
-  const [account, profile, orders, consents, waitingList, mails] = await Promise.all([
+  const [account, profile, orders, consents, waitingList, standingOrders, mails] = await Promise.all([
     readPerson(db, person.id),
     findProfile(db, person.id),
     readOrders(db, person),
     listConsents(db, person.email.toLowerCase()),
     listPlacesOf(db, person.email),
+    listStandingOf(db, person.id),
     listMailsTo(db, person.email),
   ]);
   const data = {
@@ -24,6 +25,7 @@ export async function exportData(deps: Deps, person: { id: string; email: string
     })),
     orders: describeOrders(orders),
     waitingList,
+    standingOrders,
     mails,
   };
   return JSON.stringify(data, null, 2);

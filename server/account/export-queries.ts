@@ -5,6 +5,7 @@ import { orderFeedback } from '#db/schema/customers.ts';
 import { mailMessage } from '#db/schema/mail.ts';
 import { customerOrder, orderLine, payment } from '#db/schema/orders.ts';
 import { boxKind } from '#db/schema/products.ts';
+import { standingOrder } from '#db/schema/standing-orders.ts';
 import { tradeAccount } from '#db/schema/trade.ts';
 import { waitingEntry } from '#db/schema/waiting-list.ts';
 import type { Db } from '#server/deps.ts';
@@ -73,4 +74,21 @@ export function listPlacesOf(db: Db, email: string) {
     .leftJoin(cuttingDay, eq(cuttingDay.id, waitingEntry.cuttingDayId))
     .where(eq(waitingEntry.email, email.toLowerCase()))
     .orderBy(asc(waitingEntry.place));
+}
+
+export function listStandingOf(db: Db, userId: string) {
+  return db
+    .select({
+      box: boxKind.name,
+      quantity: standingOrder.quantity,
+      everyWeeks: standingOrder.everyWeeks,
+      state: standingOrder.state,
+      phone: standingOrder.phone,
+      terms: standingOrder.terms,
+      startedAt: standingOrder.createdAt,
+    })
+    .from(standingOrder)
+    .innerJoin(boxKind, eq(boxKind.id, standingOrder.boxKindId))
+    .where(eq(standingOrder.userId, userId))
+    .orderBy(asc(standingOrder.createdAt));
 }

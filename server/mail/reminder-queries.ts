@@ -1,9 +1,14 @@
 import { and, asc, desc, eq, gt, inArray, lte, notInArray, sql } from 'drizzle-orm';
 import { offer } from '#db/schema/allocations.ts';
+import { user } from '#db/schema/auth.ts';
 import { cuttingDay } from '#db/schema/carcases.ts';
 import { marketingContact } from '#db/schema/customers.ts';
 import { customerOrder } from '#db/schema/orders.ts';
+import { standingOrder } from '#db/schema/standing-orders.ts';
 import type { Db } from '#server/deps.ts';
+
+const hasNoStanding = sql`not exists (select 1 from ${standingOrder} join ${user} on ${user.id} = ${standingOrder.userId}
+  where lower(${user.email}) = ${marketingContact.email} and ${standingOrder.state} = 'active')`;
 
 /** Confirmed orders whose day closes between two instants. */
 export function listClosing(db: Db, { after, until }: { after: Date; until: Date }) {
@@ -19,7 +24,10 @@ export function listClosing(db: Db, { after, until }: { after: Date; until: Date
     .orderBy(asc(cuttingDay.cutOffAt), asc(customerOrder.orderNo));
 }
 
-/** The newest order of everybody who agreed to marketing mail; a checkout that was never paid is no order. */
+/**
+ * The newest order of everybody who agreed to marketing mail; a checkout that was never paid is no order. Who has a
+ * standing order needs no invitation.
+ */
 export function listNewestOrders(db: Db) {
   return db
     .selectDistinctOn([marketingContact.id], {
@@ -32,7 +40,11 @@ export function listNewestOrders(db: Db) {
     .innerJoin(customerOrder, sql`lower(${customerOrder.email}) = ${marketingContact.email}`)
     .innerJoin(cuttingDay, eq(cuttingDay.id, customerOrder.cuttingDayId))
     .where(
-      and(eq(marketingContact.isSubscribed, true), notInArray(customerOrder.state, ['awaiting payment', 'cancelled'])),
+      and(
+        eq(marketingContact.isSubscribed, true),
+        notInArray(customerOrder.state, ['awaiting payment', 'cancelled']),
+        hasNoStanding,
+      ),
     )
     .orderBy(marketingContact.id, desc(cuttingDay.day), desc(customerOrder.orderNo));
 }

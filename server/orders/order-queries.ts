@@ -184,6 +184,11 @@ export function listOrderRows(db: Db | Tx, { dayId, state, userId, id }: OrderFi
         userId ? eq(customerOrder.userId, userId) : undefined,
         id ? eq(customerOrder.id, id) : undefined,
         sql`(${customerOrder.state} <> 'awaiting payment' or ${customerOrder.isHeld})`,
+        // The next box of a standing order is no order to its buyer until it is charged: it is shown where it can be skipped.
+        userId
+          ? sql`not (${customerOrder.state} = 'awaiting payment' and ${customerOrder.keepsCard}
+              and ${customerOrder.sessionId} is null)`
+          : undefined,
       ),
     )
     .orderBy(asc(cuttingDay.day), asc(collectionSlot.startsAt), asc(customerOrder.orderNo));

@@ -3,6 +3,8 @@ import { nothingLeftMail } from '#server/mail/nothing-left.ts';
 import { orderCancelledMail } from '#server/mail/order-cancelled.ts';
 import { orderConfirmedMail } from '#server/mail/order-confirmed.ts';
 import type { OrderFacts } from '#server/mail/order-facts.ts';
+import { cutOffTomorrowMail } from '#server/mail/cut-off-tomorrow.ts';
+import { missedCollectionMail } from '#server/mail/missed-collection.ts';
 import { readyToCollectMail } from '#server/mail/ready-to-collect.ts';
 import { refundSentMail } from '#server/mail/refund-sent.ts';
 
@@ -39,6 +41,8 @@ const mails = [
   ['paid too late', nothingLeftMail(facts, 12_000)],
   ['refunded', refundSentMail(facts, { amountPence: 250, reason: 'Weights' })],
   ['ready', readyToCollectMail(facts)],
+  ['about to close', cutOffTomorrowMail(facts)],
+  ['missed', missedCollectionMail(facts)],
 ] as const;
 
 describe.each(mails)('the mail of an order that is %s', (_name, mail) => {
