@@ -35,8 +35,6 @@ export function useOrderAgain(token: string, onFilled: () => void) {
   };
 }
 
-export type AgainState = ReturnType<typeof useOrderAgain>;
-
 function feedbackQuery(token: string) {
   return queryOptions({
     queryKey: ['feedback', token],
@@ -61,5 +59,3 @@ export function useFeedback(token: string, isHandedOver: boolean) {
     error: give.error?.message,
   };
 }
-
-export type FeedbackState = ReturnType<typeof useFeedback>;

@@ -1,14 +1,11 @@
 /** Weeks between the boxes of a standing order. */
 export const STANDING_WEEKS = [4, 6, 8, 12] as const;
-export type StandingWeeks = (typeof STANDING_WEEKS)[number];
 
 /** `pending` until its first order is paid and its card kept. */
 export const STANDING_STATES = ['pending', 'active', 'paused', 'ended'] as const;
-export type StandingState = (typeof STANDING_STATES)[number];
 
 /** One box of a standing order: kept and waiting for its charge, paid, skipped, or refused by the card. */
 export const TURN_STATES = ['planned', 'paid', 'skipped', 'failed'] as const;
-export type TurnState = (typeof TURN_STATES)[number];
 
 /** Shown to the owner beside the terms: what they say is the farm's to answer for. */
 export const STANDING_CAUTION =

@@ -3,4 +3,3 @@
  * `lapsed` let the time run out, `left` gave the place up.
  */
 export const WAITING_STATES = ['unconfirmed', 'waiting', 'offered', 'taken', 'lapsed', 'left'] as const;
-export type WaitingState = (typeof WAITING_STATES)[number];
