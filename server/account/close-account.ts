@@ -81,7 +81,7 @@ async function refuseWhileOpen(db: Db | Tx, person: Person): Promise<void> {
     if (COMING.includes(order.state) || order.isHeld) {
       throw new AppError(
         'STATE_CHANGED',
-        `Order ${order.orderNo} is still to come. Collect or cancel it first, then close the account. ${kept}`,
+        `Order ${order.orderNo} is still to come. Collect, cancel or skip it first, then close the account. ${kept}`,
       );
     }
     if (order.isMoneyMoving) {
