@@ -1,12 +1,14 @@
-// npm run bench: four measures, each as a ratio within this run, so that the machine falls out of them.
-// npm run bench -- allocation (or list, load or lighthouse) takes one of them.
+// npm run bench: five measures, each as a ratio within this run, so that the machine falls out of them.
+// npm run bench -- allocation (or busy, list, load or lighthouse) takes one of them.
 import { spawn } from 'node:child_process';
 import { ensurePostgres } from './postgres.mjs';
+import { measureBusy } from './bench/allocation-busy.mjs';
 import { measureBoxList } from './bench/box-list.mjs';
 import { measureFirstLoad } from './bench/first-load.mjs';
 import { measureLighthouse } from './bench/lighthouse.mjs';
 import { runServer } from './bench/servers.mjs';
 import { ensureChromium } from './steps/chromium.mjs';
+import { freePort } from './steps/ports.mjs';
 import { migrateDatabase, seedDatabase } from './steps/demo-database.mjs';
 import { ensureDependencies } from './steps/dependencies.mjs';
 import { identify, stopProcess } from './steps/processes.mjs';
@@ -34,7 +36,7 @@ function benchAllocation() {
 }
 
 /** The demo's own farm on a database of this run's own. */
-async function startShop() {
+async function prepareFarm() {
   await ensurePostgres();
   const cluster = await step('Starting a PostgreSQL server for the bench', startTestCluster);
   cluster.query('postgres', 'create database bench');
@@ -42,8 +44,31 @@ async function startShop() {
   const env = demoEnvironment({ ports: readPorts(), databaseUrl });
   await migrateDatabase(env);
   await seedDatabase(env);
-  const server = await runServer('shop', ['--import', 'tsx', 'server/main.ts'], env, { health: '/api/health' });
+  return { databaseUrl, env };
+}
+
+let farm;
+
+async function startShop({ main = 'server/main.ts', extra = {} } = {}) {
+  const { databaseUrl, env } = await (farm ??= prepareFarm());
+  const args = ['--import', 'tsx', main];
+  const server = await runServer('shop', args, { ...env, ...extra }, { health: '/api/health' });
   return { ...server, databaseUrl };
+}
+
+/** What a visitor notices of an allocation at work. */
+async function benchBusy() {
+  const port = await freePort();
+  const shop = await startShop({
+    main: 'scripts/bench/allocation-busy-server.ts',
+    extra: { BENCH_CONTROL_PORT: String(port) },
+  });
+  const rows = await step('Asking the server at rest and while it solves', () =>
+    measureBusy(shop.url, `http://127.0.0.1:${port}`),
+  );
+  say('Answers of the API while an allocation is solved, against idle:');
+  console.table(rows);
+  await shop.stop();
 }
 
 async function bench() {
@@ -55,8 +80,10 @@ async function bench() {
     await ensureSolvers();
     await benchAllocation();
   }
-  if (!['list', 'load', 'lighthouse'].some(wants)) return;
+  if (!['busy', 'list', 'load', 'lighthouse'].some(wants)) return;
   await ensureWebApp();
+  if (wants('busy')) await benchBusy();
+  if (!['list', 'load', 'lighthouse'].some(wants)) return;
   if (wants('load') || wants('lighthouse')) await ensureChromium();
   const shop = await startShop();
   if (wants('list')) {

@@ -18,14 +18,19 @@ const PATIENCE_SECONDS = 40;
 /** A bench that is stopped shows its gap; the program's own limit is a minute for the whole question. */
 const LIMIT_SECONDS = 60;
 
-type Timed = Solved & { seconds: number; size: string };
+/** Seconds by the clock and of the processor: on a shared machine the second says what the first hides. */
+type Timed = Solved & { seconds: number; processorSeconds: number; size: string };
 
 async function plan(input: AllocationInput, solver: Solver): Promise<Timed> {
   const startedAt = performance.now();
+  const usedBefore = process.cpuUsage();
   const session = openSession(input, solver, { gap: GAP, timeLimitSeconds: LIMIT_SECONDS });
   const solved = await solvePhases(session, new Map());
   const { columns, integers, rows } = session.model.lp.size;
-  return { ...solved, seconds: (performance.now() - startedAt) / 1000, size: `${columns} (${integers}) / ${rows}` };
+  const { user, system } = process.cpuUsage(usedBefore);
+  const seconds = (performance.now() - startedAt) / 1000;
+  const processorSeconds = (user + system) / 1_000_000;
+  return { ...solved, seconds, processorSeconds, size: `${columns} (${integers}) / ${rows}` };
 }
 
 async function timeOther(solve: OtherSolver, lpText: string, seconds: number): Promise<string> {
@@ -50,6 +55,7 @@ async function benchDay(carcases: number, solver: Solver): Promise<Record<string
     carcases,
     'columns (whole) / rows': ours.size,
     seconds: ours.seconds.toFixed(2),
+    'of the processor': ours.processorSeconds.toFixed(2),
     gap: `${(ours.solution.gap * 100).toFixed(4)} %`,
     proven: ours.solution.status === 'optimal' ? 'yes' : 'no',
     CBC: cbc,
