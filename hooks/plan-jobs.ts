@@ -1,6 +1,6 @@
 import { queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useEffect, useState } from 'react';
-import { cancelPlanJob, getPlanJob, startPlan, startWhatIf, type PlanJob } from '#shared/contracts/plan-jobs.ts';
+import { cancelPlanJob, getPlanJob, startPlan, startWhatIf } from '#shared/contracts/plan-jobs.ts';
 import type { startPlanSchema, startWhatIfSchema } from '#shared/contracts/plan-jobs-schema.ts';
 import type { CallInput } from '#shared/contracts/endpoint.ts';
 import { call } from './api.ts';
@@ -47,11 +47,6 @@ function useJob<Input>(send: (input: Input) => Promise<{ jobId: string }>) {
     error: start.error ?? job.error ?? cancel.error,
   };
 }
-
-export type FollowedJob = Pick<ReturnType<typeof useJob>, 'isWorking' | 'error'> & {
-  job: PlanJob | undefined;
-  cancel: () => void;
-};
 
 export function usePlan() {
   return useJob((input: CallInput<typeof startPlanSchema>) => call(startPlan, input));

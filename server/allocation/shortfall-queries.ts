@@ -41,8 +41,3 @@ export async function shutOffer(tx: Tx, offerId: string): Promise<void> {
     .set({ offered: sql`${offer.held} + ${offer.sold}` })
     .where(eq(offer.id, offerId));
 }
-
-export async function findOffer(db: Db | Tx, offerId: string) {
-  const rows = await db.select().from(offer).where(eq(offer.id, offerId));
-  return rows[0] ?? null;
-}
