@@ -125,7 +125,6 @@ const MAY_CALL: Record<string, Who[]> = {
   'POST /api/allocations/:allocationId/publish': OWNER,
   'GET /api/allocations/:allocationId/model.lp': OWNER,
   'GET /api/allocations/:allocationId/model.mps': OWNER,
-  'GET /api/allocations/:allocationId/model.mps': OWNER,
   'GET /api/cutting-days/:dayId/packing': FARM,
   'POST /api/cutting-days/:dayId/packs': FARM,
   'PUT /api/packs/:packId/weight': FARM,
