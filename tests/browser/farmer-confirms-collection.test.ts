@@ -122,6 +122,6 @@ test('the farmer, on the cutting day, weighs, fills the order, confirms its mail
   const ready = phone.getByRole('button', { name: /^Put out ready/ });
   if ((await ready.count()) > 0) await ready.click();
   await phone.getByRole('button', { name: /^Collected order/ }).click();
-  await phone.getByText('All collected.').waitFor();
+  await phone.getByText('All handed over.').waitFor();
   expect((await getOrderRow(world, token)).state).toBe('collected');
 });
