@@ -10,6 +10,8 @@ const webFirst = ['.web.tsx', '.web.ts', '.web.js', '.tsx', '.ts', '.js', '.mjs'
 
 export default defineConfig({
   test: {
+    // Vitest leaves one core free, which on two cores would run the files one after another.
+    maxWorkers: 2,
     projects: [
       {
         resolve: { alias: reactNativeWeb, extensions: webFirst },
