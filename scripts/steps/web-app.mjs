@@ -8,7 +8,7 @@ import { run } from './processes.mjs';
 import { step } from './say.mjs';
 import { dataDir, root } from './settings.mjs';
 
-const sources = ['app', 'components', 'hooks', 'shared', 'fonts', 'assets', 'patches'];
+const sources = ['app', 'components', 'hooks', 'shared', 'fonts', 'assets', 'scripts/patches'];
 const settings = ['app.json', 'package.json', 'package-lock.json', 'metro.config.js', 'tsconfig.json'];
 const dist = path.join(root, 'dist');
 const stamp = path.join(dist, 'sources.sha256');
