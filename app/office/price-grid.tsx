@@ -10,7 +10,6 @@ import { ProblemNotice } from '#components/ui/problem-notice.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
 import { Table } from '#components/ui/table.tsx';
 import { Text } from '#components/ui/text.tsx';
-import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { usePriceGrids, useSavePriceGrid } from '#hooks/margin.ts';
 import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
@@ -34,16 +33,12 @@ export default function PriceGridScreen() {
     <StateView query={grids} what="the price grid">
       {({ current, latestEdition, editions }) => (
         <View style={css('w-stack-l')}>
-          <View>
-            <TextLink href="/office/settings" place="alone" icon="back">
-              Settings
-            </TextLink>
-            <TitleBar
-              title="Price grid"
-              above={`Edition ${current.edition}, in force from ${formatDayWithYear(current.validFrom)}`}
-              lead="What the same carcases would bring sold deadweight: the measure of every margin."
-            />
-          </View>
+          <TitleBar
+            back={{ href: '/office/settings', label: 'Settings' }}
+            title="Price grid"
+            above={`Edition ${current.edition}, in force from ${formatDayWithYear(current.validFrom)}`}
+            lead="What the same carcases would bring sold deadweight: the measure of every margin."
+          />
           {isSaved ? (
             <Notice kind="good" spoken title="Saved." kept="Carcases killed before its day keep their prices." />
           ) : null}

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { View } from 'react-native';
 import { useFieldArray, type Control } from 'react-hook-form';
 import { css } from '#components/theme/css.ts';
@@ -12,40 +13,25 @@ export function GridSteps({ control }: { control: Control<PriceGridEdit> }) {
   const ages = useFieldArray({ control, name: 'ageSteps' });
   return (
     <View style={css('w-columns')}>
-      <View style={css('w-stack')}>
-        <Heading level={3}>By weight</Heading>
-        {weights.fields.map((field, at) => (
-          <View key={field.id} role="group" aria-label={`Weight step ${at + 1}`} style={css('w-fields')}>
+      <Steps
+        kind="weight"
+        ids={weights.fields.map(({ id }) => id)}
+        onAdd={() => weights.append({ fromGrams: 420_000, adjustment: 0 })}
+        onRemove={weights.remove}
+        fieldsAt={(at) => (
+          <>
             <FormNumber control={control} name={`weightSteps.${at}.fromGrams`} unit="kilograms" label="From" />
-            <FormNumber
-              control={control}
-              name={`weightSteps.${at}.adjustment`}
-              unit="poundsPerKg"
-              label="On or off the base"
-            />
-            <Button
-              kind="quiet"
-              small
-              label="Take out"
-              name={`Take out weight step ${at + 1}`}
-              onPress={() => weights.remove(at)}
-            />
-          </View>
-        ))}
-        <View style={css('w-row')}>
-          <Button
-            kind="quiet"
-            small
-            icon="plus"
-            label="Add a weight step"
-            onPress={() => weights.append({ fromGrams: 420_000, adjustment: 0 })}
-          />
-        </View>
-      </View>
-      <View style={css('w-stack')}>
-        <Heading level={3}>By age</Heading>
-        {ages.fields.map((field, at) => (
-          <View key={field.id} role="group" aria-label={`Age step ${at + 1}`} style={css('w-fields')}>
+            <FormNumber control={control} name={`weightSteps.${at}.adjustment`} unit="poundsPerKg" label={ON_OR_OFF} />
+          </>
+        )}
+      />
+      <Steps
+        kind="age"
+        ids={ages.fields.map(({ id }) => id)}
+        onAdd={() => ages.append({ overMonths: 30, adjustment: 0 })}
+        onRemove={ages.remove}
+        fieldsAt={(at) => (
+          <>
             <FormNumber
               control={control}
               name={`ageSteps.${at}.overMonths`}
@@ -53,30 +39,43 @@ export function GridSteps({ control }: { control: Control<PriceGridEdit> }) {
               label="Older than"
               after="months"
             />
-            <FormNumber
-              control={control}
-              name={`ageSteps.${at}.adjustment`}
-              unit="poundsPerKg"
-              label="On or off the base"
-            />
-            <Button
-              kind="quiet"
-              small
-              label="Take out"
-              name={`Take out age step ${at + 1}`}
-              onPress={() => ages.remove(at)}
-            />
-          </View>
-        ))}
-        <View style={css('w-row')}>
+            <FormNumber control={control} name={`ageSteps.${at}.adjustment`} unit="poundsPerKg" label={ON_OR_OFF} />
+          </>
+        )}
+      />
+    </View>
+  );
+}
+
+const ON_OR_OFF = 'On or off the base';
+
+type StepsProps = {
+  kind: 'weight' | 'age';
+  ids: readonly string[];
+  fieldsAt: (at: number) => ReactNode;
+  onAdd: () => void;
+  onRemove: (at: number) => void;
+};
+
+function Steps({ kind, ids, fieldsAt, onAdd, onRemove }: StepsProps) {
+  const [name, article] = kind === 'weight' ? ['Weight', 'a'] : ['Age', 'an'];
+  return (
+    <View style={css('w-stack')}>
+      <Heading level={3}>{`By ${kind}`}</Heading>
+      {ids.map((id, at) => (
+        <View key={id} role="group" aria-label={`${name} step ${at + 1}`} style={css('w-fields')}>
+          {fieldsAt(at)}
           <Button
             kind="quiet"
             small
-            icon="plus"
-            label="Add an age step"
-            onPress={() => ages.append({ overMonths: 30, adjustment: 0 })}
+            label="Take out"
+            name={`Take out ${kind} step ${at + 1}`}
+            onPress={() => onRemove(at)}
           />
         </View>
+      ))}
+      <View style={css('w-row')}>
+        <Button kind="quiet" small icon="plus" label={`Add ${article} ${kind} step`} onPress={onAdd} />
       </View>
     </View>
   );

@@ -3,6 +3,7 @@ import { View } from 'react-native';
 import { css } from '#components/theme/css.ts';
 import { Heading } from './heading.tsx';
 import { SmallCaps } from './small-caps.tsx';
+import { TextLink, type Destination } from './text-link.tsx';
 import { Text } from './text.tsx';
 
 type TitleBarProps = {
@@ -13,11 +14,13 @@ type TitleBarProps = {
   /** The buttons of the screen, its one red one last. */
   actions?: ReactNode;
   look?: 'display' | 'title';
+  /** The screen that this one belongs to. */
+  back?: Destination & { label: string };
 };
 
 /** The head of a screen. */
-export function TitleBar({ title, above, lead, actions, look = 'title' }: TitleBarProps) {
-  return (
+export function TitleBar({ title, above, lead, actions, look = 'title', back }: TitleBarProps) {
+  const bar = (
     <View style={css('w-titlebar')}>
       <View style={css('w-titlebar-words')}>
         {above ? <SmallCaps>{above}</SmallCaps> : null}
@@ -31,6 +34,16 @@ export function TitleBar({ title, above, lead, actions, look = 'title' }: TitleB
         ) : null}
       </View>
       {actions ? <View style={css('w-titlebar-do')}>{actions}</View> : null}
+    </View>
+  );
+  if (!back) return bar;
+  const { label, ...destination } = back;
+  return (
+    <View>
+      <TextLink {...destination} place="alone" icon="back">
+        {label}
+      </TextLink>
+      {bar}
     </View>
   );
 }

@@ -52,12 +52,7 @@ function Details({ details, isCustomer }: { details: MyDetails; isCustomer: bool
   const closing = useAskClosing();
   return (
     <View style={css('w-stack-l')}>
-      <View>
-        <TextLink href="/account" place="alone" icon="back">
-          Your account
-        </TextLink>
-        <TitleBar title="Your details" lead={details.email} />
-      </View>
+      <TitleBar back={{ href: '/account', label: 'Your account' }} title="Your details" lead={details.email} />
       <Edit details={details} />
       <View style={css('w-section')}>
         <Heading level={2}>News by e-mail</Heading>

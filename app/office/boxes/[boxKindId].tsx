@@ -31,10 +31,11 @@ export default function BoxKindScreen() {
         return (
           <View style={css('w-stack-l')}>
             <View>
-              <TextLink href="/office/boxes" place="alone" icon="back">
-                Boxes
-              </TextLink>
-              <TitleBar title={box.name} above={`Box of ${formatWeight(box.guaranteedGrams)}`} />
+              <TitleBar
+                back={{ href: '/office/boxes', label: 'Boxes' }}
+                title={box.name}
+                above={`Box of ${formatWeight(box.guaranteedGrams)}`}
+              />
               <TextLink href={`/office/photographs/${box.id}`} place="alone" icon="forward">
                 Photographs
               </TextLink>

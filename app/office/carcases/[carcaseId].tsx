@@ -17,7 +17,6 @@ import { Notice } from '#components/ui/notice.tsx';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
 import { Skeleton } from '#components/ui/skeleton.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
-import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useCarcase, useEnterKillSheet, useEnterWeights } from '#hooks/carcases.ts';
 import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
@@ -55,12 +54,11 @@ function Ready({ carcase, round, afresh }: ReadyProps) {
   useTitle(nameCarcase(carcase));
   return (
     <View style={css('w-stack-l')}>
-      <View>
-        <TextLink href={`/office/cutting-days/${carcase.cuttingDayId}`} place="alone" icon="back">
-          {`Cutting day ${formatDay(carcase.day)}`}
-        </TextLink>
-        <TitleBar title={nameCarcase(carcase)} above={`${carcase.state} · ${describeCarcase(carcase)}`} />
-      </View>
+      <TitleBar
+        back={{ href: `/office/cutting-days/${carcase.cuttingDayId}`, label: `Cutting day ${formatDay(carcase.day)}` }}
+        title={nameCarcase(carcase)}
+        above={`${carcase.state} · ${describeCarcase(carcase)}`}
+      />
       {round > 0 ? <Notice kind="good" spoken title="This is what is recorded now." /> : null}
       <View style={css('w-columns', 'w-columns-side')}>
         <View style={css('w-stack-l')}>

@@ -4,7 +4,6 @@ import { NewDayForm } from '#components/carcases/new-day-form.tsx';
 import { css } from '#components/theme/css.ts';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
-import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useAddCuttingDay, useCollectionPoints } from '#hooks/carcases.ts';
 import { useSpecifications } from '#hooks/specifications.ts';
@@ -33,12 +32,7 @@ export default function NewCuttingDayScreen() {
   });
   return (
     <View style={css('w-stack-l')}>
-      <View>
-        <TextLink href="/office/cutting-days" place="alone" icon="back">
-          Cutting days
-        </TextLink>
-        <TitleBar title="Plan a cutting day" />
-      </View>
+      <TitleBar back={{ href: '/office/cutting-days', label: 'Cutting days' }} title="Plan a cutting day" />
       <StateView query={specifications} what="the cutting specifications">
         {({ specifications: list }) => (
           <StateView query={points} what="the collection points">

@@ -10,7 +10,6 @@ import { Heading } from '#components/ui/heading.tsx';
 import { Notice } from '#components/ui/notice.tsx';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
-import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useAnimals, useEditAnimal, useRecordMedicine } from '#hooks/herd.ts';
 import { useToday } from '#hooks/office.ts';
@@ -39,16 +38,12 @@ export default function AnimalScreen() {
         const afresh = () => setRound(round + 1);
         return (
           <View style={css('w-stack-l')} key={`${animal.id} ${round}`}>
-            <View>
-              <TextLink href="/office/herd" place="alone" icon="back">
-                Herd
-              </TextLink>
-              <TitleBar
-                title={formatEarTag(animal.earTag)}
-                above={[animal.breed, animal.sex, formatCount(animal.ageMonths, 'month')].join(' · ')}
-                lead={describeAnimal(animal, today.data?.today).words}
-              />
-            </View>
+            <TitleBar
+              back={{ href: '/office/herd', label: 'Herd' }}
+              title={formatEarTag(animal.earTag)}
+              above={[animal.breed, animal.sex, formatCount(animal.ageMonths, 'month')].join(' · ')}
+              lead={describeAnimal(animal, today.data?.today).words}
+            />
             <View style={css('w-columns')}>
               <Record animal={animal} afresh={afresh} isSaved={round > 0} />
               <Medicines animal={animal} afresh={afresh} />

@@ -3,7 +3,6 @@ import { View } from 'react-native';
 import { AnimalForm } from '#components/herd/animal-form.tsx';
 import { css } from '#components/theme/css.ts';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
-import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useAddAnimal } from '#hooks/herd.ts';
 import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
@@ -29,12 +28,7 @@ export default function AddAnimalScreen() {
   });
   return (
     <View style={css('w-stack-l')}>
-      <View>
-        <TextLink href="/office/herd" place="alone" icon="back">
-          Herd
-        </TextLink>
-        <TitleBar title="Add an animal" />
-      </View>
+      <TitleBar back={{ href: '/office/herd', label: 'Herd' }} title="Add an animal" />
       <View style={css('w-stack', 't-measure')}>
         <AnimalForm control={form.control} onSubmit={submit} busy={add.isPending} submitLabel="Add to the herd" />
         <ProblemNotice error={add.error} title="The animal was not added." />

@@ -11,7 +11,6 @@ import { Notice } from '#components/ui/notice.tsx';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
 import { Text } from '#components/ui/text.tsx';
-import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useBoxKinds } from '#hooks/office.ts';
 import { useAddPhotograph, useBoxPhotographs, useRemovePhotograph } from '#hooks/photographs.ts';
@@ -29,12 +28,11 @@ export default function PhotographsScreen() {
   useTitle('Photographs');
   return (
     <View style={css('w-stack-l')}>
-      <View>
-        <TextLink href={`/office/boxes/${boxKindId}`} place="alone" icon="back">
-          {box?.name ?? 'The box'}
-        </TextLink>
-        <TitleBar title="Photographs" above={box?.name} />
-      </View>
+      <TitleBar
+        back={{ href: `/office/boxes/${boxKindId}`, label: box?.name ?? 'The box' }}
+        title="Photographs"
+        above={box?.name}
+      />
       <ProblemNotice error={add.error} title="The picture was not added." />
       <ProblemNotice error={remove.error} title="The picture was not taken away." />
       {add.isSuccess ? <Notice kind="good" spoken title="The picture stands on the box's page now." /> : null}

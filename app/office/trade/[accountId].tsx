@@ -8,7 +8,6 @@ import { EmptyState } from '#components/ui/empty-state.tsx';
 import { Notice } from '#components/ui/notice.tsx';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
-import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useBoxKinds } from '#hooks/office.ts';
 import { useSpecification, useSpecifications } from '#hooks/specifications.ts';
@@ -31,12 +30,11 @@ export default function TradeAccountScreen() {
         if (!account) return <EmptyState level={1} title="No such account" words="Look for it in the trade list." />;
         return (
           <View style={css('w-stack-l')}>
-            <View>
-              <TextLink href="/office/trade" place="alone" icon="back">
-                Trade
-              </TextLink>
-              <TitleBar title={account.businessName} above={`Price list · account ${account.state}`} />
-            </View>
+            <TitleBar
+              back={{ href: '/office/trade', label: 'Trade' }}
+              title={account.businessName}
+              above={`Price list · account ${account.state}`}
+            />
             {round > 0 ? <Notice kind="good" spoken title="These are the prices now." /> : null}
             <Prices key={`${account.id} ${round}`} account={account} afresh={() => setRound(round + 1)} />
           </View>

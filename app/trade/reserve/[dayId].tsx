@@ -55,16 +55,12 @@ function Reserve({ day }: { day: TradeDay }) {
   });
   return (
     <View style={css('w-stack-l')}>
-      <View>
-        <TextLink href="/trade/carcases" place="alone" icon="back">
-          Coming carcases
-        </TextLink>
-        <TitleBar
-          title={`Reserve from ${formatDay(day.day)}`}
-          above={`Until ${formatDayTime(day.cutOffAt)}`}
-          lead="What is sold or held by others cannot be taken. The plan is worked out again with your list."
-        />
-      </View>
+      <TitleBar
+        back={{ href: '/trade/carcases', label: 'Coming carcases' }}
+        title={`Reserve from ${formatDay(day.day)}`}
+        above={`Until ${formatDayTime(day.cutOffAt)}`}
+        lead="What is sold or held by others cannot be taken. The plan is worked out again with your list."
+      />
       <ReserveForm control={form.control} day={day} onSubmit={submit} busy={reserve.isPending} />
       <ProblemNotice error={reserve.error} title="Nothing was reserved." />
     </View>

@@ -12,7 +12,6 @@ import { Button } from '#components/ui/button.tsx';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
 import { Skeleton } from '#components/ui/skeleton.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
-import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { loadCounter, useCounter } from '#hooks/counter.ts';
 import { useMe } from '#hooks/me.ts';
@@ -96,12 +95,11 @@ function Start({ home, details, mine }: StartProps) {
   };
   return (
     <View style={css('w-form')}>
-      <View>
-        <TextLink href="/account/standing" place="alone" icon="back">
-          Standing orders
-        </TextLink>
-        <TitleBar title="Start a standing order" lead="The same box again every few weeks, until you say otherwise." />
-      </View>
+      <TitleBar
+        back={{ href: '/account/standing', label: 'Standing orders' }}
+        title="Start a standing order"
+        lead="The same box again every few weeks, until you say otherwise."
+      />
       <StandingFields
         values={values}
         onChange={change}

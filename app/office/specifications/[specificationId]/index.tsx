@@ -65,10 +65,8 @@ function Head({ edition }: { edition: Edition }) {
   useTitle(edition.name);
   return (
     <View>
-      <TextLink href="/office/specifications" place="alone" icon="back">
-        Specifications
-      </TextLink>
       <TitleBar
+        back={{ href: '/office/specifications', label: 'Specifications' }}
         title={edition.name}
         above={`Edition ${edition.edition} of ${edition.latestEdition}, ${originWords(edition)}${edition.isRetired ? ' · retired' : ''}`}
         lead={edition.body.source}

@@ -12,7 +12,6 @@ import { ProblemNotice } from '#components/ui/problem-notice.tsx';
 import { Skeleton } from '#components/ui/skeleton.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
 import { Text } from '#components/ui/text.tsx';
-import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useCorrection, useDecideCorrection } from '#hooks/specifications.ts';
 import { useTitle } from '#hooks/use-title.ts';
@@ -46,12 +45,11 @@ function Ready({ proposal }: { proposal: CorrectionProposal }) {
   };
   return (
     <View style={css('w-stack-l')}>
-      <View>
-        <TextLink href={`/office/specifications/${specificationId}`} place="alone" icon="back">
-          {`${name}, edition ${edition}`}
-        </TextLink>
-        <TitleBar title="What your own weights propose" above={`${name} · from ${formatCount(sides.length, 'side')}`} />
-      </View>
+      <TitleBar
+        back={{ href: `/office/specifications/${specificationId}`, label: `${name}, edition ${edition}` }}
+        title="What your own weights propose"
+        above={`${name} · from ${formatCount(sides.length, 'side')}`}
+      />
       {decide.data ? <Decided {...decide.data} /> : null}
       <ProblemNotice error={decide.error} title="Nothing was decided." />
       {key === null ? (

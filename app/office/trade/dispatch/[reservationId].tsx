@@ -7,7 +7,6 @@ import { EmptyState } from '#components/ui/empty-state.tsx';
 import { Notice } from '#components/ui/notice.tsx';
 import { ProblemNotice } from '#components/ui/problem-notice.tsx';
 import { StateView } from '#components/ui/state-view.tsx';
-import { TextLink } from '#components/ui/text-link.tsx';
 import { TitleBar } from '#components/ui/title-bar.tsx';
 import { useDispatchReservation, useReservations } from '#hooks/trade.ts';
 import { sendForm, useContractForm } from '#hooks/use-contract-form.ts';
@@ -28,15 +27,11 @@ export default function DispatchScreen() {
         if (!found) return <EmptyState level={1} title="No such reservation" words="Look for it in the trade list." />;
         return (
           <View style={css('w-stack-l')}>
-            <View>
-              <TextLink href="/office/trade" place="alone" icon="back">
-                Trade
-              </TextLink>
-              <TitleBar
-                title={`Dispatch ${found.reservationNo}`}
-                above={`${found.businessName} · cut ${formatDay(found.day)}`}
-              />
-            </View>
+            <TitleBar
+              back={{ href: '/office/trade', label: 'Trade' }}
+              title={`Dispatch ${found.reservationNo}`}
+              above={`${found.businessName} · cut ${formatDay(found.day)}`}
+            />
             {found.state === 'confirmed' ? (
               <Weigh key={found.version} reservation={found} />
             ) : (
