@@ -42,6 +42,9 @@ const shop = [
   { name: 'account', role: 'customer', path: '/account' },
   { name: 'account-details', role: 'customer', path: '/account/details' },
   { name: 'account-close', role: 'customer', path: '/account/close' },
+  { name: 'standing', role: 'customer', path: '/account/standing' },
+  { name: 'standing-start', role: 'customer', path: '/account/standing/start' },
+  { name: 'not-found', path: '/no-such-page', isMissing: true },
 ];
 
 const trade = [
@@ -90,6 +93,17 @@ const office = [
     'specification',
     first('/api/specifications', 'specifications', (one) => `/office/specifications/${one.id}`),
   ),
+  owner(
+    'learning',
+    first('/api/specifications', 'specifications', (one) => `/office/specifications/${one.id}/learning`),
+  ),
+  owner(
+    'photographs',
+    first('/api/office/box-kinds', 'boxKinds', (kind) => `/office/photographs/${kind.id}`),
+  ),
+  owner('customers', () => '/office/customers'),
+  owner('delivery', () => '/office/delivery-areas'),
+  owner('codes', () => '/office/promo-codes'),
   owner('price-grid', () => '/office/price-grid'),
   owner('mails', () => '/office/mails'),
   owner('settings', () => '/office/settings'),

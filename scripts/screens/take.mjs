@@ -49,7 +49,10 @@ export async function takePicture(browser, origin, { picture, file }) {
   const page = await context.newPage();
   const trouble = [];
   page.on('pageerror', (error) => trouble.push(error.message));
-  page.on('console', (message) => message.type() === 'error' && trouble.push(message.text()));
+  page.on('console', (message) => {
+    // A browser logs the status of a page that is rightly a 404.
+    if (message.type() === 'error' && !picture.isMissing) trouble.push(message.text());
+  });
   await picture.prepare?.(page, ask);
   const address = picture.path ?? (await picture.find(ask));
   await page.goto(address, { waitUntil: 'networkidle' });
